@@ -94,8 +94,8 @@ export const settingsSchema = z.object({
   /** a second pass at +90° with its own pitches, or null */
   perpendicular: z.object({ linePitchMm: pitchSchema, alongPitchMm: pitchSchema }).nullable().default(null),
   tone: toneSchema,
-  /** L* that parts burned from unburned in solid and linework, 1–99 */
-  dividingLstar: z.number().min(1).max(99).default(50),
+  /** L* that parts burned from unburned in solid and linework, 1–99; 53.4 is sRGB 127.5, an edge pixel half covered by black */
+  dividingLstar: z.number().min(1).max(99).default(53.4),
   /** corners of traced outlines */
   corners: z.enum(['kept', 'eased']).default('kept'),
   mirror: z.boolean().default(false),
