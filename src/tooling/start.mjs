@@ -1,0 +1,91 @@
+// Serves the built site: checks what production asks for, waits until it answers, stops cleanly.
+import { existsSync, readFileSync } from 'node:fs';
+import path from 'node:path';
+
+const root = path.resolve(import.meta.dirname, '../..');
+process.chdir(root);
+if (existsSync('.env')) process.loadEnvFile('.env');
+
+const refuse = (line) => {
+  console.error(`umberline: ${line}`);
+  process.exit(1);
+};
+
+const production = process.env.NODE_ENV === 'production';
+const publicAddress = process.env.PUBLIC_ADDRESS ?? '';
+if (production) {
+  if (!publicAddress) refuse('In production PUBLIC_ADDRESS must say where the site is reached, such as https://shop.example.');
+  const secret = process.env.SESSION_SECRET ?? '';
+  if (secret === '' || secret.startsWith('development-')) {
+    refuse('In production SESSION_SECRET must be your own, not the generated one. Set it to 32 or more random characters.');
+  }
+  if (secret.length < 32) refuse(`SESSION_SECRET has ${secret.length} characters; 32 or more are needed.`);
+}
+
+process.env.ASTRO_NODE_AUTOSTART = 'disabled';
+process.env.ASTRO_TELEMETRY_DISABLED = '1';
+process.env.PORT ||= '4380';
+process.env.HOST ||= production ? '0.0.0.0' : '127.0.0.1';
+
+const started = performance.now();
+const { startServer } = await import(new URL('../../dist/server/entry.mjs', import.meta.url).href);
+const originalLog = console.log;
+// The adapter announces itself on its own; the lines below say the same in ours.
+console.log = (...words) => (String(words[0]).includes('[@astrojs/node]') ? undefined : originalLog(...words));
+const { server } = startServer();
+const http = server.server;
+// Node's five minutes would cut slow uploads of large artwork.
+http.requestTimeout = 30 * 60_000;
+http.headersTimeout = 30_000;
+http.on('error', (error) => {
+  if (error.code === 'EADDRINUSE') {
+    refuse(`Port ${process.env.PORT} is taken by another program. Stop it, or start with another: PORT=4381 npm start`);
+  }
+  refuse(error.message);
+});
+
+let stopping = false;
+for (const signal of ['SIGTERM', 'SIGINT']) {
+  process.on(signal, () => {
+    if (stopping) process.exit(1);
+    stopping = true;
+    const overdue = setTimeout(() => process.exit(0), 10_000);
+    overdue.unref();
+    // The queue registers this when it starts: it lets go of its tasks, so that the next start takes them up at once.
+    const stopQueue = globalThis[Symbol.for('umberline.stop')];
+    http.closeIdleConnections();
+    http.closeAllConnections?.call(http);
+    Promise.all([new Promise((done) => http.close(done)), stopQueue?.()]).finally(() => process.exit(0));
+  });
+}
+
+const address = `http://${process.env.HOST === '0.0.0.0' ? 'localhost' : process.env.HOST.replace('127.0.0.1', 'localhost')}:${process.env.PORT}`;
+
+async function waitUntilHealthy() {
+  const probe = `http://127.0.0.1:${process.env.PORT}/health`;
+  for (let attempt = 0; attempt < 100; attempt += 1) {
+    try {
+      const response = await fetch(probe);
+      const health = await response.json();
+      if (health.ok) return;
+      if (attempt === 99) refuse(`The site runs but is not well: ${JSON.stringify(health)}`);
+    } catch (error) {
+      if (attempt === 99) refuse(`The site does not answer: ${error.message}`);
+    }
+    await new Promise((done) => setTimeout(done, 100));
+  }
+}
+
+await waitUntilHealthy();
+console.log = originalLog;
+console.log(`\nUmberline serves at ${production ? publicAddress : address} (ready in ${((performance.now() - started) / 1000).toFixed(1)} s)`);
+if (!production) {
+  const demo = path.join(root, 'db/seeds/demo-people.json');
+  if (existsSync(demo)) {
+    console.log('\nSign in as:');
+    for (const person of JSON.parse(readFileSync(demo, 'utf8'))) {
+      console.log(`  ${person.role.padEnd(9)} ${person.email.padEnd(34)} ${person.password}`);
+    }
+    console.log(`\nMails that would be sent are shown at ${address}/outbox`);
+  }
+}
