@@ -54,7 +54,8 @@ for (const signal of ['SIGTERM', 'SIGINT']) {
     // The queue registers this when it starts: it lets go of its tasks, so that the next start takes them up at once.
     const stopQueue = globalThis[Symbol.for('umberline.stop')];
     http.closeIdleConnections();
-    http.closeAllConnections?.call(http);
+    // Answers under way are finished; event streams would never end by themselves.
+    setTimeout(() => http.closeAllConnections(), 3_000).unref();
     Promise.all([new Promise((done) => http.close(done)), stopQueue?.()]).finally(() => process.exit(0));
   });
 }
