@@ -1,0 +1,51 @@
+import { useCallback, useEffect, useState, type RefObject } from 'react';
+
+interface Props {
+  /** holds both the plate (`data-place`) and the notes (`data-note`) */
+  container: RefObject<HTMLElement | null>;
+  lit: string | null;
+  /** measured anew when this changes */
+  revision: string;
+}
+
+interface Leader {
+  id: string;
+  d: string;
+}
+
+function measure(root: HTMLElement): Leader[] {
+  const frame = root.getBoundingClientRect();
+  return [...root.querySelectorAll<HTMLElement>('[data-note]')].flatMap((note) => {
+    const id = note.dataset.note ?? '';
+    const place = root.querySelector(`[data-place="${id}"]`)?.getBoundingClientRect();
+    if (!place) return [];
+    const box = note.getBoundingClientRect();
+    const x2 = place.right - frame.left + 2;
+    const y2 = place.top + place.height / 2 - frame.top;
+    const x1 = box.left - frame.left - 4;
+    const y1 = box.top - frame.top + 22;
+    // Only where the note stands in the margin beside the plate.
+    return x1 > x2 ? [{ id, d: `M${x1 + 10} ${y1} H${x1 - 8} L${x2} ${y2}` }] : [];
+  });
+}
+
+/** Thin lines from the notes in the margin to their places on the plate. */
+export function Leaders({ container, lit, revision }: Props) {
+  const [leaders, setLeaders] = useState<Leader[]>([]);
+  const update = useCallback(() => setLeaders(container.current ? measure(container.current) : []), [container]);
+  useEffect(() => {
+    const root = container.current;
+    if (!root || typeof ResizeObserver === 'undefined') return;
+    const observer = new ResizeObserver(update);
+    observer.observe(root);
+    for (const part of root.querySelectorAll('[data-note], .plate-picture')) observer.observe(part);
+    return () => observer.disconnect();
+  }, [container, update, revision]);
+  return (
+    <svg className="leaders max-lg:hidden" aria-hidden="true">
+      {leaders.map(({ id, d }) => (
+        <path key={id} d={d} className="leader" data-lit={lit === id} />
+      ))}
+    </svg>
+  );
+}
