@@ -9,6 +9,7 @@ export async function up(knex) {
       payload text not null check (json_valid(payload)),
       state text not null check (state in ('waiting', 'running', 'done', 'failed', 'superseded')),
       attempt integer not null default 0,
+      failures integer not null default 0,
       due_ms integer not null,
       lease_until_ms integer,
       stage text not null default '',
