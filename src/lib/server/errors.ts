@@ -38,6 +38,10 @@ export const REFUSALS = {
   'last-admin': { status: 409, title: 'This is the last admin.', detail: 'Without one nobody could manage the shop.', action: 'Make somebody else an admin first.' },
   'preset-in-use': { status: 409, title: 'This spot preset is in use.', detail: 'An order refers to it.', action: 'Keep it, or choose another spot for that order first.' },
   'name-taken': { status: 409, title: 'This name is taken.', detail: 'Two things of the same name would be mistaken for each other.', action: 'Choose another name.' },
+  'order-waits': { status: 409, title: 'Not yet.', detail: 'Something is missing first.', action: 'Put it right and try again.' },
+  'no-artwork': { status: 422, title: 'No artwork arrived.', detail: 'The request holds no file in the field “artwork”.', action: 'Choose a file and send it again.' },
+  'too-many-streams': { status: 429, title: 'Too many pages are open.', detail: 'Each open order keeps a line to the shop, and yours are all in use.', action: 'Close a few tabs; this page goes on by itself.' },
+  'no-room': { status: 507, title: 'The shop’s disk is nearly full.', detail: 'New artwork is refused first, so that nothing stored is lost.', action: 'Tell the shop, and send it again later.' },
 } as const satisfies Record<string, Refusal>;
 
 export type RefusalCode = keyof typeof REFUSALS;
