@@ -34,7 +34,7 @@ const importRule = ORDER.flatMap((layer, index) => {
             ...(PURE.includes(folder)
               ? [
                   {
-                    regex: '^(node:(?!buffer)|fs|path|child_process|astro|knex|better-sqlite3)',
+                    regex: '^(node:(?!(buffer|util|zlib)$)|fs|path|child_process|astro|knex|better-sqlite3)',
                     message: 'Code outside server is pure: no files, processes, database or astro modules.',
                   },
                 ]

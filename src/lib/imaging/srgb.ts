@@ -36,7 +36,9 @@ let codeOfLuminance: Float32Array | null = null;
  * @example codeValues()[65535] // 1
  */
 export function codeValues(): Float32Array {
-  codeOfLuminance ??= Float32Array.from({ length: FULL_LUMINANCE + 1 }, (_, y) => linearToSrgb(y / FULL_LUMINANCE));
+  codeOfLuminance ??= Float32Array.from({ length: FULL_LUMINANCE + 1 }, (_, y) =>
+    linearToSrgb(y / FULL_LUMINANCE),
+  );
   return codeOfLuminance;
 }
 

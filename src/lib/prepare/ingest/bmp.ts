@@ -22,7 +22,11 @@ export function bmpHeader(bytes: Uint8Array): PictureHeader {
   const widthPx = view.getInt32(18, true);
   const heightPx = Math.abs(view.getInt32(22, true));
   const bits = view.getUint16(28, true);
-  if (view.getUint32(14, true) < 40 || view.getUint32(30, true) !== UNCOMPRESSED || ![1, 4, 8, 24, 32].includes(bits)) {
+  if (
+    view.getUint32(14, true) < 40 ||
+    view.getUint32(30, true) !== UNCOMPRESSED ||
+    ![1, 4, 8, 24, 32].includes(bits)
+  ) {
     throw new ArtworkError(
       'unsupported-format',
       'This BMP is of a compressed or old kind, which we do not read. Export it as PNG and send that.',
@@ -30,7 +34,16 @@ export function bmpHeader(bytes: Uint8Array): PictureHeader {
   }
   const stride = Math.ceil((Math.max(0, widthPx) * bits) / 32) * 4;
   if (pixelsAt + stride * heightPx > bytes.length) throw cutShort();
-  return { type: 'bmp', widthPx, heightPx, swapsSides: false, frames: 1, depth: 8, exif: undefined, remarks: [] };
+  return {
+    type: 'bmp',
+    widthPx,
+    heightPx,
+    swapsSides: false,
+    frames: 1,
+    depth: 8,
+    exif: undefined,
+    remarks: [],
+  };
 }
 
 /**

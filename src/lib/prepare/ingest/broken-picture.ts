@@ -1,7 +1,8 @@
 import { ArtworkError } from '../tools';
 import type { ReadableType } from './file-type';
 
-const ENDS_EARLY = /premature|truncat|unexpected end|end of (file|stream|gif)|read error|bad seek|unable to parse|eof/i;
+const ENDS_EARLY =
+  /premature|truncat|unexpected end|end of (file|stream|gif)|read error|bad seek|unable to parse|eof/i;
 
 /**
  * The error that tells a person that a picture breaks off or is damaged.

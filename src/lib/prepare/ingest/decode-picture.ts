@@ -6,18 +6,25 @@ import type { PictureHeader, Pixels } from './pixels';
 
 async function decodeWithSharp(header: PictureHeader, bytes: Uint8Array): Promise<Pixels> {
   const deep = header.depth === 16;
-  const { data, info } = await sharp(bytes, { limitInputPixels: LIMITS.maxPixels, failOn: 'truncated', sequentialRead: true })
+  const { data, info } = await sharp(bytes, {
+    limitInputPixels: LIMITS.maxPixels,
+    failOn: 'truncated',
+    sequentialRead: true,
+  })
     .autoOrient()
     .toColourspace(deep ? 'rgb16' : 'srgb')
     .raw({ depth: deep ? 'ushort' : 'uchar' })
     .toBuffer({ resolveWithObject: true });
-  if (info.channels !== 3 && info.channels !== 4) throw new Error(`expected 3 or 4 channels, got ${info.channels}`);
+  if (info.channels !== 3 && info.channels !== 4)
+    throw new Error(`expected 3 or 4 channels, got ${info.channels}`);
   const samples = info.width * info.height * info.channels;
   return {
     width: info.width,
     height: info.height,
     channels: info.channels,
-    data: deep ? new Uint16Array(data.buffer, data.byteOffset, samples) : new Uint8Array(data.buffer, data.byteOffset, samples),
+    data: deep
+      ? new Uint16Array(data.buffer, data.byteOffset, samples)
+      : new Uint8Array(data.buffer, data.byteOffset, samples),
   };
 }
 

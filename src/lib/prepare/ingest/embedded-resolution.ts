@@ -6,12 +6,13 @@ const EXIF_HEAD = 'Exif\0\0';
 const text = (bytes: Uint8Array, from: number, length: number): string =>
   String.fromCharCode(...bytes.subarray(from, from + length));
 
-const viewOf = (bytes: Uint8Array): DataView => new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
+const viewOf = (bytes: Uint8Array): DataView =>
+  new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
 
 /** PNG's pHYs chunk, unit 1 = metre (ISO/IEC 15948, 11.3.5.3). */
 function pngResolution(bytes: Uint8Array): Resolution | null {
   const view = viewOf(bytes);
-  for (let at = 8; at + 12 <= bytes.length; ) {
+  for (let at = 8; at + 12 <= bytes.length;) {
     const length = view.getUint32(at);
     const type = text(bytes, at + 4, 4);
     if (type === 'IDAT' || type === 'IEND') return null;
@@ -42,7 +43,8 @@ function jpegResolution(bytes: Uint8Array): Resolution | null {
     const segment = bytes.subarray(at + 4, at + 2 + view.getUint16(at + 2));
     if (marker === 0xe0) found = jfifResolution(segment) ?? found;
     // EXIF wins: writers that know a size put it there and leave JFIF at its placeholder.
-    if (marker === 0xe1 && text(segment, 0, 6) === EXIF_HEAD) found = tiffResolution(segment.subarray(6)) ?? found;
+    if (marker === 0xe1 && text(segment, 0, 6) === EXIF_HEAD)
+      found = tiffResolution(segment.subarray(6)) ?? found;
   }
   return found;
 }
@@ -56,7 +58,11 @@ function bmpResolution(bytes: Uint8Array): Resolution | null {
   };
 }
 
-function statedResolution(type: ReadableType, bytes: Uint8Array, exif: Uint8Array | undefined): Resolution | null {
+function statedResolution(
+  type: ReadableType,
+  bytes: Uint8Array,
+  exif: Uint8Array | undefined,
+): Resolution | null {
   if (type === 'png') return pngResolution(bytes);
   if (type === 'jpeg') return jpegResolution(bytes);
   if (type === 'tiff') return tiffResolution(bytes);
@@ -78,7 +84,11 @@ const PLACEHOLDER_PPI = [1, 72, 96];
  * @returns pixels per millimetre of the stored pixels, or null where none is stated
  * @example a PNG with pHYs 20000 × 20000 per metre gives { xPxPerMm: 20, yPxPerMm: 20 }
  */
-export function embeddedResolution(type: ReadableType, bytes: Uint8Array, exif?: Uint8Array): Resolution | null {
+export function embeddedResolution(
+  type: ReadableType,
+  bytes: Uint8Array,
+  exif?: Uint8Array,
+): Resolution | null {
   const stated = statedResolution(type, bytes, exif);
   if (!stated || !(stated.xPxPerMm > 0) || !(stated.yPxPerMm > 0)) return null;
   const ppi = stated.xPxPerMm * ppiToPitch(1);

@@ -25,7 +25,8 @@ export type FileType = ReadableType | RefusedType;
 const ascii = (bytes: Uint8Array, from: number, length: number): string =>
   String.fromCharCode(...bytes.subarray(from, from + length));
 
-const startsWith = (bytes: Uint8Array, ...head: number[]): boolean => head.every((byte, i) => bytes[i] === byte);
+const startsWith = (bytes: Uint8Array, ...head: number[]): boolean =>
+  head.every((byte, i) => bytes[i] === byte);
 
 /** Brands that an ISO base media file says it is compatible with (ISO/IEC 14496-12, 4.3). */
 function mediaBrands(bytes: Uint8Array): string[] {
@@ -96,8 +97,14 @@ const MAGIC: readonly { type: FileType; head: readonly number[] }[] = [
  */
 export function fileType(bytes: Uint8Array): FileType {
   if (bytes.length < 4) return 'unknown';
-  const tiff = [[0x49, 0x49, 0x2a, 0], [0x4d, 0x4d, 0, 0x2a], [0x49, 0x49, 0x2b, 0], [0x4d, 0x4d, 0, 0x2b]];
-  if (tiff.some((head) => startsWith(bytes, ...head))) return ascii(bytes, 8, 2) === 'CR' ? 'camera-raw' : 'tiff';
+  const tiff = [
+    [0x49, 0x49, 0x2a, 0],
+    [0x4d, 0x4d, 0, 0x2a],
+    [0x49, 0x49, 0x2b, 0],
+    [0x4d, 0x4d, 0, 0x2b],
+  ];
+  if (tiff.some((head) => startsWith(bytes, ...head)))
+    return ascii(bytes, 8, 2) === 'CR' ? 'camera-raw' : 'tiff';
   if (bytes.length >= 12 && ascii(bytes, 0, 4) === 'RIFF') return riffType(bytes);
   if (bytes.length >= 12 && ascii(bytes, 4, 4) === 'ftyp') return mediaType(bytes);
   return MAGIC.find(({ head }) => startsWith(bytes, ...head))?.type ?? textType(bytes);

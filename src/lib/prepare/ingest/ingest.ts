@@ -9,19 +9,38 @@ import type { PictureHeader } from './pixels';
 import { readHeader } from './read-header';
 import { refusal } from './refusal';
 
-const READABLE: ReadonlySet<string> = new Set<ReadableType>(['png', 'jpeg', 'webp', 'tiff', 'gif', 'avif', 'bmp', 'svg', 'svgz']);
+const READABLE: ReadonlySet<string> = new Set<ReadableType>([
+  'png',
+  'jpeg',
+  'webp',
+  'tiff',
+  'gif',
+  'avif',
+  'bmp',
+  'svg',
+  'svgz',
+]);
 const isReadable = (type: ReadableType | RefusedType): type is ReadableType => READABLE.has(type);
 
 /** Size that a picture's file states, mm, after orientation. */
-function ownSize(header: PictureHeader, bytes: Uint8Array): { ownWidthMm: number | null; ownHeightMm: number | null } {
+function ownSize(
+  header: PictureHeader,
+  bytes: Uint8Array,
+): { ownWidthMm: number | null; ownHeightMm: number | null } {
   const resolution = embeddedResolution(header.type, bytes, header.exif);
   if (!resolution) return { ownWidthMm: null, ownHeightMm: null };
   const across = header.widthPx / resolution.xPxPerMm;
   const down = header.heightPx / resolution.yPxPerMm;
-  return header.swapsSides ? { ownWidthMm: down, ownHeightMm: across } : { ownWidthMm: across, ownHeightMm: down };
+  return header.swapsSides
+    ? { ownWidthMm: down, ownHeightMm: across }
+    : { ownWidthMm: across, ownHeightMm: down };
 }
 
-async function ingestRaster(type: PictureHeader['type'], bytes: Uint8Array, sha256: string): Promise<RasterArtwork> {
+async function ingestRaster(
+  type: PictureHeader['type'],
+  bytes: Uint8Array,
+  sha256: string,
+): Promise<RasterArtwork> {
   const header = await readHeader(type, bytes);
   const pixels = await decodePicture(header, bytes);
   return {
@@ -44,10 +63,14 @@ async function ingestRaster(type: PictureHeader['type'], bytes: Uint8Array, sha2
 
 /** Refuses a file by its size alone. */
 function assertByteCap(bytes: Uint8Array): void {
-  if (bytes.length === 0) throw new ArtworkError('empty-file', 'The file is empty. Export it again and send that.');
+  if (bytes.length === 0)
+    throw new ArtworkError('empty-file', 'The file is empty. Export it again and send that.');
   if (bytes.length <= LIMITS.maxBytes) return;
   const mib = (count: number): string => (count / 1024 / 1024).toFixed(0);
-  throw new ArtworkError('too-large', `The file has ${mib(bytes.length)} MiB; we read up to ${mib(LIMITS.maxBytes)} MiB. Send a smaller one.`);
+  throw new ArtworkError(
+    'too-large',
+    `The file has ${mib(bytes.length)} MiB; we read up to ${mib(LIMITS.maxBytes)} MiB. Send a smaller one.`,
+  );
 }
 
 /**

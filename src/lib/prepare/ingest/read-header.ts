@@ -33,7 +33,11 @@ async function decodedHeader(type: PictureHeader['type'], bytes: Uint8Array): Pr
   const remarks: string[] = [];
   const frames = type === 'png' ? (isAnimatedPng(bytes) ? 2 : 1) : (meta.pages ?? 1);
   if (frames > 1) {
-    remarks.push(type === 'tiff' ? `First page of ${frames}; the others are left out.` : 'First frame of an animation; the others are left out.');
+    remarks.push(
+      type === 'tiff'
+        ? `First page of ${frames}; the others are left out.`
+        : 'First frame of an animation; the others are left out.',
+    );
   }
   if (meta.space === 'cmyk') remarks.push('Printing inks (CMYK) converted to sRGB; colours may shift.');
   else if (meta.hasProfile) remarks.push('Colour profile converted to sRGB.');
@@ -58,7 +62,10 @@ async function decodedHeader(type: PictureHeader['type'], bytes: Uint8Array): Pr
  * @param bytes the whole file; unchanged
  * @throws ArtworkError `too-large` above the cap on pixels; `truncated` or `unreadable` when the header cannot be read
  */
-export async function readHeader(type: Exclude<ReadableType, 'svg' | 'svgz'>, bytes: Uint8Array): Promise<PictureHeader> {
+export async function readHeader(
+  type: Exclude<ReadableType, 'svg' | 'svgz'>,
+  bytes: Uint8Array,
+): Promise<PictureHeader> {
   let header: PictureHeader;
   try {
     header = type === 'bmp' ? bmpHeader(bytes) : await decodedHeader(type, bytes);

@@ -18,7 +18,8 @@ const SENTENCES: Readonly<Record<RefusedType, string>> = {
   'camera-raw': `This is a camera's raw file, which we do not read. Develop it first. ${PICTURE}`,
   icon: `This is an icon file, which we do not read. ${PICTURE}`,
   metafile: `This is a Windows metafile, which we do not read. ${DRAWING}`,
-  archive: 'This is an archive or an office document. Unpack it, or export the picture in it as SVG or PNG, and send that.',
+  archive:
+    'This is an archive or an office document. Unpack it, or export the picture in it as SVG or PNG, and send that.',
   'web-page': 'This is a web page, not a picture. Save the picture itself and send that.',
   unknown: 'This is no picture that we can read. Send SVG, PNG, JPEG, TIFF, WebP, AVIF, GIF or BMP.',
 };
