@@ -37,6 +37,7 @@ export const REFUSALS = {
   'customers-register': { status: 422, title: 'Customers are not invited.', detail: 'Invitations are for staff; customers register themselves.', action: 'Choose designer, operator or admin, or enter a walk-in customer.' },
   'last-admin': { status: 409, title: 'This is the last admin.', detail: 'Without one nobody could manage the shop.', action: 'Make somebody else an admin first.' },
   'preset-in-use': { status: 409, title: 'This spot preset is in use.', detail: 'An order refers to it.', action: 'Keep it, or choose another spot for that order first.' },
+  'wash-without-sheet': { status: 422, title: 'The darkening wash cannot be offered yet.', detail: 'It needs the shop’s own product with its safety data sheet.', action: 'Enter the wash and the address of its sheet first.' },
   'name-taken': { status: 409, title: 'This name is taken.', detail: 'Two things of the same name would be mistaken for each other.', action: 'Choose another name.' },
   'order-waits': { status: 409, title: 'Not yet.', detail: 'Something is missing first.', action: 'Put it right and try again.' },
   'no-artwork': { status: 422, title: 'No artwork arrived.', detail: 'The request holds no file in the field “artwork”.', action: 'Choose a file and send it again.' },

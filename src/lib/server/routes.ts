@@ -18,6 +18,7 @@ import {
 import { reportSchema } from '../prepare/report';
 import { manifestSchema } from '../prepare/manifest';
 import { stockSchema } from '../stock/stock';
+import { washSchema } from '../stock/wash';
 
 /** Who may call a route at all; whose object it is, is decided by the use case (another's answers 404). */
 export type Access = 'anyone' | 'signed-in' | readonly Role[];
@@ -79,6 +80,11 @@ export const ROUTES = [
   { method: 'GET', path: '/api/stocks', access: 'signed-in', summary: 'Stocks with their cautions', response: z.object({ stocks: z.array(stockViewSchema) }) },
   { method: 'POST', path: '/api/stocks', access: ADMIN, summary: 'Add a stock', body: stockSchema, response: z.object({ stock: stockViewSchema }) },
   { method: 'PATCH', path: '/api/stocks/:id', access: ADMIN, summary: 'Change or retire a stock', body: stockSchema.partial().extend({ retired: z.boolean().optional() }), response: z.object({ stock: stockViewSchema }) },
+
+  { method: 'GET', path: '/api/wash', access: STAFF, summary: 'The shop’s darkening wash, or null', response: z.object({ wash: washSchema.nullable() }) },
+  { method: 'PUT', path: '/api/wash', access: ADMIN, summary: 'Enter the shop’s darkening wash with its safety data sheet', body: washSchema, response: z.object({ wash: washSchema }) },
+
+  { method: 'GET', path: '/api/outbox', access: 'anyone', summary: 'Mails that the in-process mail server kept; not in production', response: z.object({ mails: z.array(z.object({ id: z.number().int(), at: timeSchema, to: z.string(), subject: z.string(), text: z.string(), html: z.string() })) }) },
 
   { method: 'GET', path: '/api/record', access: ADMIN, summary: 'The record: who did what, newest first', query: z.object({ q: z.string().max(100).default(''), page: z.coerce.number().int().min(1).default(1) }), response: z.object({ entries: z.array(z.object({ id: z.number(), at: timeSchema, by: z.string(), event: z.string(), subject: z.string(), words: z.string() })), total: z.number(), page: z.number(), perPage: z.number() }) },
 

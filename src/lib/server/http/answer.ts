@@ -31,3 +31,6 @@ export function problem(error: unknown): Response {
   const refusal = refusalFor(error);
   return json({ ...refusal.problem, status: refusal.status }, refusal.status, 'application/problem+json');
 }
+
+/** The answer of an endpoint that has nothing to say but that it is done. */
+export const DONE = { ok: true } as const;
