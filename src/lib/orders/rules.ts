@@ -5,7 +5,7 @@ import { routeRefusal } from '../stock/cautions';
 import type { Stock } from '../stock/stock';
 import { untickedItems } from './checklist';
 import type { OrderFields } from './order';
-import type { OrderEvent } from './state';
+import type { OrderEvent, OrderState } from './state';
 
 /** A designer's decision that a finding of one artwork version may stand. */
 export interface Waiver {
@@ -28,7 +28,10 @@ export interface RuleFacts {
   fields: OrderFields;
   /** null: the blank's stock is not identified */
   stock: Stock | null;
+  /** whoever submits for themselves has a confirmed address; staff may submit for a walk-in */
   customerConfirmed: boolean;
+  /** state that an order on hold returns to; null where it is not on hold */
+  formerState: OrderState | null;
   /** newest artwork version with its check, or null */
   artwork: { version: number; taskState: 'waiting' | 'running' | 'done' | 'failed'; findings: readonly Finding[] | null } | null;
   /** settings that a preparation would have now; null while choices are missing */
@@ -96,7 +99,7 @@ function approvalHolds(facts: RuleFacts): string | null {
 }
 
 function resumeWaits(facts: RuleFacts): string | null {
-  return ownUnidentified(facts) && facts.artwork ? 'Say first what the customer’s blank is made of.' : null;
+  return ownUnidentified(facts) && facts.formerState !== 'draft' ? 'Say first what the customer’s blank is made of.' : null;
 }
 
 /**

@@ -1,0 +1,62 @@
+import { createHash } from 'node:crypto';
+import { MessageChannel, type MessagePort } from 'node:worker_threads';
+import { Piscina } from 'piscina';
+import { preparationKey, type Checked, type Prepared } from '../../prepare/pipeline';
+import { ArtworkError } from '../../prepare/tools';
+import type { Answer, Work } from '../tasks/pipeline.worker';
+import workerUrl from '../tasks/pipeline.worker.ts?nodeworker';
+import type { TaskContext } from './handler';
+import type { ArtworkFormat, Pipeline } from './pipeline';
+
+/** One thread each for a check, a preparation and the first look at an upload. */
+const MOST_THREADS = 3;
+const IDLE_MS = 30_000;
+
+const slot = globalThis as typeof globalThis & { umberlineThreads?: { url: string; pool: Piscina } };
+
+function threads(): Piscina {
+  if (slot.umberlineThreads && slot.umberlineThreads.url !== workerUrl) {
+    void slot.umberlineThreads.pool.close();
+    slot.umberlineThreads = undefined;
+  }
+  slot.umberlineThreads ??= {
+    url: workerUrl,
+    pool: new Piscina({ filename: workerUrl, minThreads: 0, maxThreads: MOST_THREADS, idleTimeout: IDLE_MS }),
+  };
+  return slot.umberlineThreads.pool;
+}
+
+async function inThread<T>(work: Work, options: { signal?: AbortSignal; transferList?: MessagePort[] }): Promise<T> {
+  const answer = (await threads().run(work, options)) as Answer<T>;
+  if (!answer.ok) throw new ArtworkError(answer.code, answer.message);
+  return answer.value;
+}
+
+async function withProgress<T>(context: TaskContext, workOf: (port: MessagePort) => Work): Promise<T> {
+  const { port1, port2 } = new MessageChannel();
+  port1.on('message', ([stage, progress]: [string, number]) => context.progress(stage, progress));
+  try {
+    return await inThread<T>(workOf(port2), { signal: context.signal, transferList: [port2] });
+  } finally {
+    port1.close();
+  }
+}
+
+const sha256 = (bytes: Uint8Array | string): string => createHash('sha256').update(bytes).digest('hex');
+
+/** The pipeline in a pool of threads; an aborted signal ends the thread that works for it. */
+export function pipelineInThreads(): Pipeline {
+  return {
+    read: (bytes) => inThread<{ format: ArtworkFormat }>({ kind: 'read', bytes }, {}),
+    check: (bytes, settings, context) => withProgress<Checked>(context, (port) => ({ kind: 'check', bytes, settings, port })),
+    prepare: (bytes, request, context) => withProgress<Prepared>(context, (port) => ({ kind: 'prepare', bytes, ...request, port })),
+    keyOf: async (artworkSha256, request) => preparationKey({ artworkSha256, ...request }, { sha256 }),
+  };
+}
+
+/** Ends the threads; what runs in them is lost. */
+export async function closeThreads(): Promise<void> {
+  const open = slot.umberlineThreads;
+  slot.umberlineThreads = undefined;
+  await open?.pool.destroy();
+}
