@@ -146,7 +146,7 @@ class Cascade {
     if (this.trials > MAX_TRIALS) {
       throw new ArtworkError(
         'too-complex',
-        'The style rules of this drawing are too many for its size. Simplify it.',
+        'This drawing has too many style rules for its size. Simplify it.',
       );
     }
     return tried
