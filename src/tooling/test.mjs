@@ -13,7 +13,7 @@ const env = {
   ...process.env,
   ASTRO_TELEMETRY_DISABLED: '1',
   TEST_TALLY: tally,
-  TEST_TALLY_ABSENT: absent,
+  TEST_ABSENT: absent,
 };
 
 const steps = [
