@@ -2,7 +2,7 @@ import { getSession } from 'auth-astro/server';
 import { defineMiddleware } from 'astro:middleware';
 import { config } from './lib/server/config';
 import { setSecurityHeaders } from './lib/server/http/security-headers';
-import { startUp } from './lib/server/start-up';
+import { startUp } from './start-up';
 import { findSessionPerson } from './lib/server/usecases/find-session-person';
 
 /** Session to person, security headers; nothing else. Who may do what is decided by every page and endpoint itself. */

@@ -1,0 +1,22 @@
+import { log } from './lib/server/log';
+import { deliverSoon } from './lib/server/mail/deliver';
+import { introduceFirstAdmin } from './lib/server/usecases/introduce-first-admin';
+import { startWorker } from './worker';
+
+const slot = globalThis as typeof globalThis & { umberlineStarted?: Promise<void> };
+
+async function start(): Promise<void> {
+  try {
+    await introduceFirstAdmin();
+    startWorker();
+    deliverSoon();
+  } catch (error) {
+    log.fatal({ err: error }, 'the server cannot start');
+    throw error;
+  }
+}
+
+/** What the server does once, before it answers its first request. */
+export function startUp(): Promise<void> {
+  return (slot.umberlineStarted ??= start());
+}
