@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import type { CSSProperties, ReactNode } from 'react';
 import type { Finding } from '@/lib/preflight/finding';
 import { DimensionLine } from './DimensionLine';
 import { Places } from './Places';
@@ -12,6 +12,8 @@ interface Props {
   heightMm: number;
   unit?: 'mm' | 'in';
   linePitchMm?: number | null;
+  /** turns clockwise that the picture, but not the places, still lacks */
+  quarterTurns?: 0 | 1 | 2 | 3;
   findings?: readonly Finding[];
   lit?: string | null;
   onLit?: (findingId: string | null) => void;
@@ -23,7 +25,7 @@ interface Props {
 const MAX_HEIGHT_PX = 560;
 
 /** The artwork in its well, its size as dimension lines, the rule under it. */
-export function Plate({ src, alt, widthMm, heightMm, unit, linePitchMm, findings = [], lit = null, onLit, laidDown = false, children }: Props) {
+export function Plate({ src, alt, widthMm, heightMm, unit, linePitchMm, quarterTurns = 0, findings = [], lit = null, onLit, laidDown = false, children }: Props) {
   const aspect = widthMm / heightMm;
   const size = { width: `min(100%, ${Math.round(MAX_HEIGHT_PX * aspect)}px)` };
   return (
@@ -36,8 +38,8 @@ export function Plate({ src, alt, widthMm, heightMm, unit, linePitchMm, findings
           <div className="absolute inset-y-0 left-[-28px] w-[18px]">
             <DimensionLine lengthMm={heightMm} along="y" unit={unit} />
           </div>
-          <div className={`w-full bg-[#fff] ${laidDown ? 'laid-down' : ''}`} style={{ aspectRatio: `${widthMm} / ${heightMm}` }}>
-            {src ? <img src={src} alt={alt} className="block h-full w-full" style={{ imageRendering: 'auto' }} /> : children}
+          <div className={`relative w-full overflow-hidden bg-[#fff] ${laidDown ? 'laid-down' : ''}`} style={{ aspectRatio: `${widthMm} / ${heightMm}` }}>
+            {src ? <img src={src} alt={alt} className="absolute left-1/2 top-1/2 max-w-none" style={turned(quarterTurns, aspect)} /> : children}
           </div>
           <Places findings={findings} widthMm={widthMm} heightMm={heightMm} lit={lit} onLit={onLit} />
         </div>
@@ -49,4 +51,14 @@ export function Plate({ src, alt, widthMm, heightMm, unit, linePitchMm, findings
       </div>
     </div>
   );
+}
+
+/** The picture is as wide as it will lie: a quarter turn swaps its sides before it turns. */
+function turned(quarterTurns: number, aspect: number): CSSProperties {
+  const odd = quarterTurns % 2 === 1;
+  return {
+    width: `${odd ? 100 / aspect : 100}%`,
+    height: `${odd ? 100 * aspect : 100}%`,
+    transform: `translate(-50%, -50%) rotate(${90 * quarterTurns}deg)`,
+  };
 }

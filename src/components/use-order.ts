@@ -5,12 +5,13 @@ import { call } from './api';
 
 export const orderKey = (number: string) => ['order', number] as const;
 
-/** One order, from the server's first answer on. */
+/** One order, from the server's first answer on; an empty number asks for none. */
 export function useOrder(number: string, initial?: OrderView) {
   return useQuery({
     queryKey: orderKey(number),
     queryFn: async ({ signal }) => (await call('GET /api/orders/:number', { params: { number }, signal })).order,
     initialData: initial,
+    enabled: number !== '',
     staleTime: 0,
     refetchOnMount: initial === undefined,
   });

@@ -1,0 +1,73 @@
+import { useMutation } from '@tanstack/react-query';
+import { useState } from 'react';
+import { useFormContext, useWatch } from 'react-hook-form';
+import type { OrderView } from '@/lib/orders/views';
+import { call, problemOf } from '../api';
+import { Button } from '../Button';
+import { CautionList } from '../CautionList';
+import { Checkbox } from '../Checkbox';
+import { ConfirmAddress } from '../ConfirmAddress';
+import { ProblemNotice } from '../Notice';
+import { missingWords, type DraftForm } from './draft-form';
+import { Part } from './Part';
+import type { Draft } from './use-draft';
+
+interface Props {
+  draft: Draft;
+  /** customer whose address is not confirmed, or null */
+  unconfirmedEmail: string | null;
+}
+
+/** Cautions, rights, and the one filled button of the page. */
+export function SubmitPart({ draft, unconfirmedEmail }: Props) {
+  const [rights, setRights] = useState(false);
+  const [asked, setAsked] = useState(false);
+  const form = useWatch({ control: useFormContext<DraftForm>().control }) as DraftForm;
+  const missing = missingWords(form, (draft.order?.artworks.length ?? 0) > 0);
+  const waits = missing.length === 0 ? draft.order?.waitsFor.submit : undefined;
+  const submit = useMutation({ mutationFn: () => submitOrder(draft), onSuccess: ({ number }) => window.location.assign(`/orders/${number}?said=submitted`) });
+  const press = () => {
+    setAsked(true);
+    if (rights && missing.length === 0) submit.mutate();
+  };
+  return (
+    <Part title="Submit" beside={draft.order && <CautionList cautions={draft.order.cautions} />}>
+      <Checkbox isSelected={rights} onChange={setRights} wrong={asked && !rights ? 'Tick this first: without the right to the artwork we cannot engrave it.' : undefined}>
+        The artwork is mine, or I have the right to have it engraved.
+      </Checkbox>
+      {missing.length > 0 && (asked || draft.order) && (
+        <div role={asked ? 'alert' : undefined} className="text-15">
+          <p className="font-semibold">Still missing:</p>
+          <ul className="list-disc pl-6">
+            {missing.map((words) => (
+              <li key={words}>{words}</li>
+            ))}
+          </ul>
+        </div>
+      )}
+      {unconfirmedEmail ? <ConfirmAddress email={unconfirmedEmail} /> : waits && <p className="text-15 text-warning">{waits}</p>}
+      {submit.isError && <ProblemNotice problem={problemOf(submit.error)} />}
+      {draft.problem && draft.keeping === 'not-kept' && <ProblemNotice problem={draft.problem} />}
+      <div className="flex flex-wrap items-center gap-4">
+        <Button kind="filled" onPress={press} isDisabled={submit.isPending || unconfirmedEmail !== null}>
+          Submit order
+        </Button>
+        <p role="status" className="text-13 text-quiet">
+          {keptWords(draft)}
+        </p>
+      </div>
+    </Part>
+  );
+}
+
+function keptWords({ order, keeping }: Draft): string {
+  if (keeping === 'keeping') return 'Keeping what you entered';
+  if (keeping === 'not-kept') return 'Not kept on the server yet. It stays on this page.';
+  return order ? `Draft ${order.number} is kept. You can leave and come back.` : '';
+}
+
+async function submitOrder(draft: Draft): Promise<OrderView> {
+  const { number, version } = await draft.keep();
+  const answer = await call('POST /api/orders/:number/events', { params: { number }, body: { event: 'submit', version, rightsConfirmed: true } });
+  return answer.order;
+}
