@@ -1,6 +1,6 @@
 import { spawnSync } from 'node:child_process';
 import { appendFileSync } from 'node:fs';
-import { getCurrentTest } from 'vitest/suite';
+import { TestRunner } from 'vitest';
 
 interface ReferenceTool {
   /** Debian package that brings it */
@@ -53,7 +53,7 @@ export function countAbsent(tool: ReferenceToolName, env: NodeJS.ProcessEnv = pr
  * skipped and counted by name.
  */
 export function needsTool(...names: ReferenceToolName[]): void {
-  const test = getCurrentTest();
+  const test = TestRunner.getCurrentTest();
   if (!test) throw new Error('needsTool must be called inside a test');
   for (const name of names) {
     if (hasTool(name)) continue;
