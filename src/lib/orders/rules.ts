@@ -30,6 +30,8 @@ export interface RuleFacts {
   stock: Stock | null;
   /** whoever submits for themselves has a confirmed address; staff may submit for a walk-in */
   customerConfirmed: boolean;
+  /** the shop has entered its darkening wash with the safety data sheet */
+  washOffered: boolean;
   /** state that an order on hold returns to; null where it is not on hold */
   formerState: OrderState | null;
   /** newest artwork version with its check, or null */
@@ -59,8 +61,11 @@ export function holdOnSubmit(facts: RuleFacts): string | null {
     : null;
 }
 
-function stockRefusal({ fields, stock }: RuleFacts): string | null {
+function stockRefusal({ fields, stock, washOffered }: RuleFacts): string | null {
   if (stock?.forbidden) return `${stock.name} is never engraved here. Choose another stock.`;
+  if (fields.route === 'darkening-wash' && !washOffered) {
+    return 'The shop offers no darkening wash while it has no safety data sheet for it. Choose another route.';
+  }
   return routeRefusal(stock, fields.route, fields.use);
 }
 

@@ -11,6 +11,7 @@ import { outcomesOfOrder } from '../tables/outcomes';
 import { personById, type PersonRow } from '../tables/people';
 import { preparationsOfOrder, preparedFilesOfOrder } from '../tables/preparations';
 import { recordOf } from '../tables/record';
+import { readWash } from '../tables/shop-washes';
 import { stockById } from '../tables/stocks';
 import { tasksOfOrder } from '../tables/tasks';
 import { waiversOfOrder } from '../tables/waivers';
@@ -24,6 +25,7 @@ export interface LoadedOrder {
   customer: PersonRow;
   stock: StockView | null;
   machine: MachineView | null;
+  washOffered: boolean;
   artworks: Awaited<ReturnType<typeof artworksOfOrder>>;
   preparations: Awaited<ReturnType<typeof preparationsOfOrder>>;
   files: Awaited<ReturnType<typeof preparedFilesOfOrder>>;
@@ -47,6 +49,7 @@ export async function loadOrder(db: Db, row: OrderRow): Promise<LoadedOrder> {
     customer,
     stock: row.stock_id === null ? null : ((await stockById(db, row.stock_id)) ?? null),
     machine: design ? ((await machineById(db, design.machineId)) ?? null) : null,
+    washOffered: (await readWash(db)) !== null,
     artworks: await artworksOfOrder(db, row.id),
     preparations: await preparationsOfOrder(db, row.id),
     files: await preparedFilesOfOrder(db, row.id),

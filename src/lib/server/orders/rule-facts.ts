@@ -43,6 +43,7 @@ export function ruleFacts(order: LoadedOrder, role: Role, preparationId?: number
     fields: order.fields,
     stock: order.stock,
     customerConfirmed: role !== 'customer' || order.customer.confirmed_at !== null,
+    washOffered: order.washOffered,
     formerState: order.row.former_state,
     artwork: artwork
       ? {

@@ -6,7 +6,7 @@ import { wakeQueue } from './queue';
 interface Asked {
   name: TaskName;
   subject: string;
-  orderId: number;
+  orderId: number | null;
   payload: unknown;
   /** how long it may wait for a newer one to take its place, ms */
   delayMs?: number;
