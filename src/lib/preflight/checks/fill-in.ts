@@ -1,0 +1,15 @@
+import type { Check } from '../check';
+import { judgeThin } from './thin';
+
+/** Gaps between strokes narrower than the line extent: they close up. */
+export const fillIn: Check = {
+  id: 'fill-in',
+  title: 'Gaps that fill in',
+  check: (facts) =>
+    judgeThin(facts.fillIns, facts, {
+      one: 'gap',
+      many: 'gaps',
+      fate: 'the burn on both sides closes it',
+      mend: (enough) => `open the gaps to ${enough}`,
+    }),
+};
