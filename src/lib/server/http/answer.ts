@@ -1,4 +1,3 @@
-import { z } from 'zod';
 import { ArtworkError } from '../../prepare/tools';
 import { AppError } from '../errors';
 import { log } from '../log';
@@ -9,16 +8,8 @@ export function json(value: unknown, status = 200, mediaType = 'application/json
   return new Response(JSON.stringify(value), { status, headers: { ...SAFE_HEADERS, 'content-type': `${mediaType}; charset=utf-8` } });
 }
 
-/** First complaint of each field, by its path with dots. */
-export function complaints(error: z.ZodError): Record<string, string> {
-  const fields: Record<string, string> = {};
-  for (const issue of error.issues) fields[issue.path.join('.') || 'form'] ??= issue.message;
-  return fields;
-}
-
 function refusalFor(error: unknown): AppError {
   if (error instanceof AppError) return error;
-  if (error instanceof z.ZodError) return new AppError('malformed', { fields: complaints(error) }, { cause: error });
   if (error instanceof ArtworkError) {
     return new AppError(error.code === 'too-large' ? 'artwork-too-large' : 'artwork-refused', { detail: error.message }, { cause: error });
   }

@@ -6,6 +6,7 @@ import type { Person } from '../person';
 import type { Access, Route, RouteKey } from '../routes';
 import { json, problem } from './answer';
 import { requireOwnOrigin } from './own-origin';
+import { parseGiven } from './parse-given';
 import { readJson, requireMediaType } from './read-body';
 import { NUMERIC_PARAMETERS, routeOf, type AnswerOf, type BodyOf, type ParametersOf, type PersonOf, type QueryOf } from './routing';
 import { socketAddress } from './socket-address';
@@ -42,7 +43,7 @@ function readParameters(raw: APIContext['params']): Record<string, string | numb
 
 async function readBody(route: Route, request: Request): Promise<unknown> {
   if (route.upload) requireMediaType(request, 'multipart/form-data');
-  return route.body ? route.body.parse(await readJson(request)) : undefined;
+  return route.body ? parseGiven(route.body, await readJson(request)) : undefined;
 }
 
 async function limit(route: Route, person: Person | null, body: unknown, address: string): Promise<void> {
@@ -65,7 +66,7 @@ export function endpoint<K extends RouteKey>(key: K, handle: (call: Call<K>) => 
       authorise(person, route.access);
       const params = readParameters(raw);
       const address = socketAddress(request);
-      const query = route.query?.parse(Object.fromEntries(url.searchParams));
+      const query = route.query && parseGiven(route.query, Object.fromEntries(url.searchParams));
       const body = await readBody(route, request);
       await limit(route, person, body, address);
       const call = { person, params, body, query, request, url, address } as Call<K>;
