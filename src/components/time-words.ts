@@ -17,7 +17,10 @@ export function momentWords(iso: string): string {
 /** How far a due date is from a day: "due today", "in 3 days", "2 days late". */
 export function dueWords(dueOn: string | null, todayIso: string): string {
   if (dueOn === null) return 'no date';
-  const days = Math.round((Date.parse(`${dueOn.slice(0, 10)}T00:00:00Z`) - Date.parse(`${todayIso.slice(0, 10)}T00:00:00Z`)) / DAY_MS);
+  const days = Math.round(
+    (Date.parse(`${dueOn.slice(0, 10)}T00:00:00Z`) - Date.parse(`${todayIso.slice(0, 10)}T00:00:00Z`)) /
+      DAY_MS,
+  );
   if (days === 0) return 'due today';
   if (days === 1) return 'due tomorrow';
   if (days > 0) return `in ${days} days`;
