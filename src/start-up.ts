@@ -1,3 +1,4 @@
+import { openDemoShop } from './lib/server/demo/open-demo-shop';
 import { log } from './lib/server/log';
 import { deliverSoon } from './lib/server/mail/deliver';
 import { introduceFirstAdmin } from './lib/server/usecases/introduce-first-admin';
@@ -10,6 +11,8 @@ async function start(): Promise<void> {
     await introduceFirstAdmin();
     startWorker();
     deliverSoon();
+    // In the background: nobody waits for the demo shop to fill.
+    void openDemoShop().catch((error: unknown) => log.error({ err: error }, 'the demo shop stayed empty'));
   } catch (error) {
     log.fatal({ err: error }, 'the server cannot start');
     throw error;

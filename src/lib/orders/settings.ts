@@ -1,5 +1,6 @@
 import type { Machine } from '../machines/machine';
 import { sizeAcross, type Spot } from '../machines/spot';
+import type { CheckSettings } from '../prepare/pipeline';
 import { machineRunSchema, scanFor, settingsSchema, stockToneSchema, type MachineRun, type Settings, type StockTone, type Treatment } from '../prepare/settings';
 import type { Stock } from '../stock/stock';
 import { placeOnBlank, type Blank, type OrderFields } from './order';
@@ -67,22 +68,6 @@ export function settingsFor({ number, fields, design, machine, spot, stock, type
     recipe: design.recipe && { ...design.recipe, typedBy },
     label: number,
   });
-}
-
-/** What an upload is checked against before a designer has chosen anything. */
-export interface CheckSettings {
-  /** placed size, mm; null: the artwork's own size, or 100 mm across where it states none */
-  widthMm: number | null;
-  heightMm: number | null;
-  quarterTurns: 0 | 1 | 2 | 3;
-  spot: Spot;
-  firing: Machine['firing'];
-  directionDeg: number;
-  linePitchMm: number | null;
-  treatment: Treatment | null;
-  dividingLstar: number;
-  blank: BlankLimits | null;
-  machine: MachineRun | null;
 }
 
 const FIRST_DIVIDING_LSTAR = 53.4;

@@ -22,6 +22,7 @@ const environmentSchema = z.object({
   SMTP_URL: optional(z.url({ protocol: /^smtps?$/ })),
   MAIL_FROM: optional(z.email()),
   TRUSTED_PROXIES: z.preprocess(blankIsAbsent, z.string().default('')),
+  DEMO_ORDERS: z.preprocess(blankIsAbsent, z.enum(['yes', 'no']).default('yes')),
   LOG_LEVEL: optional(z.enum(['trace', 'debug', 'info', 'warn', 'error', 'silent'])),
 });
 
@@ -45,6 +46,8 @@ export interface Config {
   isProduction: boolean;
   /** demo people, the outbox page and the in-process mail server exist */
   isDemo: boolean;
+  /** the demo shop is filled with orders in every state, in the background */
+  demoOrders: boolean;
 }
 
 function refuseUnfitForProduction(env: z.infer<typeof environmentSchema>): void {
@@ -86,6 +89,7 @@ export function readConfig(environment: Readonly<Record<string, string | undefin
     logLevel: env.LOG_LEVEL ?? (env.NODE_ENV === 'test' ? 'silent' : 'info'),
     isProduction,
     isDemo: !isProduction,
+    demoOrders: !isProduction && env.DEMO_ORDERS === 'yes',
   };
 }
 

@@ -1,5 +1,4 @@
-import type { CheckSettings } from '../../orders/settings';
-import type { Checked, Prepared } from '../../prepare/pipeline';
+import type { Checked, CheckSettings, Prepared } from '../../prepare/pipeline';
 import type { ArtworkFacts } from '../../prepare/report';
 import type { Settings } from '../../prepare/settings';
 import type { TaskContext } from './handler';

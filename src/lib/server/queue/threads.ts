@@ -7,6 +7,7 @@ import type { Answer, Work } from '../tasks/pipeline.worker';
 import workerUrl from '../tasks/pipeline.worker.ts?nodeworker';
 import type { TaskContext } from './handler';
 import type { ArtworkFormat, Pipeline } from './pipeline';
+import { workProgress } from './stage-words';
 
 /** One thread each for a check, a preparation and the first look at an upload. */
 const MOST_THREADS = 3;
@@ -32,9 +33,14 @@ async function inThread<T>(work: Work, options: { signal?: AbortSignal; transfer
   return answer.value;
 }
 
-async function withProgress<T>(context: TaskContext, workOf: (port: MessagePort) => Work): Promise<T> {
+type Long = Exclude<Work, { kind: 'read' }>;
+
+async function withProgress<T>(kind: Long['kind'], context: TaskContext, workOf: (port: MessagePort) => Long): Promise<T> {
   const { port1, port2 } = new MessageChannel();
-  port1.on('message', ([stage, progress]: [string, number]) => context.progress(stage, progress));
+  port1.on('message', ([stage, share]: [string, number]) => {
+    const { words, progress } = workProgress(kind, stage, share);
+    context.progress(words, progress);
+  });
   try {
     return await inThread<T>(workOf(port2), { signal: context.signal, transferList: [port2] });
   } finally {
@@ -48,8 +54,8 @@ const sha256 = (bytes: Uint8Array | string): string => createHash('sha256').upda
 export function pipelineInThreads(): Pipeline {
   return {
     read: (bytes) => inThread<{ format: ArtworkFormat }>({ kind: 'read', bytes }, {}),
-    check: (bytes, settings, context) => withProgress<Checked>(context, (port) => ({ kind: 'check', bytes, settings, port })),
-    prepare: (bytes, request, context) => withProgress<Prepared>(context, (port) => ({ kind: 'prepare', bytes, ...request, port })),
+    check: (bytes, settings, context) => withProgress<Checked>('check', context, (port) => ({ kind: 'check', bytes, settings, port })),
+    prepare: (bytes, request, context) => withProgress<Prepared>('prepare', context, (port) => ({ kind: 'prepare', bytes, ...request, port })),
     keyOf: async (artworkSha256, request) => preparationKey({ artworkSha256, ...request }, { sha256 }),
   };
 }

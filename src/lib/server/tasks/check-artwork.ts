@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { checkSettingsFor, type CheckSettings } from '../../orders/settings';
+import { checkSettingsFor } from '../../orders/settings';
+import type { CheckSettings } from '../../prepare/pipeline';
 import { database, type Db } from '../db';
 import { taskHandler } from '../queue/handler';
 import { pipeline } from '../queue/pipeline';

@@ -1,7 +1,6 @@
 import type { MessagePort } from 'node:worker_threads';
-import type { CheckSettings } from '../../orders/settings';
 import { ingest } from '../../prepare/ingest/ingest';
-import { checkArtwork, prepareArtwork } from '../../prepare/pipeline';
+import { checkArtwork, prepareArtwork, type CheckSettings } from '../../prepare/pipeline';
 import type { Settings } from '../../prepare/settings';
 import { ArtworkError } from '../../prepare/tools';
 import { nodeTools } from '../../../rendering/node-tools';
