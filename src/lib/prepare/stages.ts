@@ -1,0 +1,95 @@
+import { judge } from '../preflight/checks';
+import { colourPicture } from './forecast/colour-picture';
+import { passagePictures } from './forecast/passage-pictures';
+import { ingest } from './ingest/ingest';
+import { mark } from './mark';
+import { measure } from './measure/measure';
+import { PHOTOGRAPH_SHARE, suggestTreatment } from './measure/suggest-treatment';
+import { packageRasters } from './package/package-rasters';
+import { placedSize } from './placed-size';
+import { perpendicularScan, scanFrame } from './resample/scan-frame';
+import { turnArtwork } from './resample/turn';
+import type { CheckWork, PrepareWork, Stage } from './work';
+
+/** Reads what was sent and settles the size that it is placed at. */
+export const ingestStage: Stage<CheckWork> = {
+  name: 'ingest',
+  async run(work) {
+    work.artwork = await ingest(work.bytes, work.tools);
+    work.placed = { ...work.asked, ...placedSize(work.artwork, work.asked) };
+  },
+};
+
+/** Widths, islands, tones and place: numbers only. */
+export const measureStage: Stage<CheckWork> = {
+  name: 'measure',
+  async run(work) {
+    work.facts = await measure(work.artwork, work.placed, work.tools);
+    work.suggestion = suggestTreatment(work.facts.tone, work.artwork.kind === 'vector');
+  },
+};
+
+/** What the numbers mean for the job. */
+export const preflightStage: Stage<CheckWork> = {
+  name: 'preflight',
+  async run(work) {
+    const photograph = work.facts.tone.tonalShare >= PHOTOGRAPH_SHARE;
+    const treatment = work.placed.treatment ?? work.suggestion.treatment;
+    work.findings = judge(work.facts, { spot: work.placed.spot, treatment, photograph });
+    work.smallestSoundWidthMm = null;
+  },
+};
+
+const CHECK_PICTURE_PX = 1600;
+const NOMINAL_DRAWING_PX = 1600;
+
+/** The artwork in its own colours, as it is placed: never larger than a screen, never finer than it is. */
+export const pictureStage: Stage<CheckWork> = {
+  name: 'picture',
+  async run(work) {
+    const { widthMm, heightMm, quarterTurns } = work.placed;
+    const { kind, facts } = work.artwork;
+    const ownPx = kind === 'raster' ? Math.max(facts.widthPx, facts.heightPx) : NOMINAL_DRAWING_PX;
+    const scale = Math.min(CHECK_PICTURE_PX, ownPx) / Math.max(widthMm, heightMm);
+    const columns = Math.max(1, Math.round(widthMm * scale));
+    const rows = Math.max(1, Math.round(heightMm * scale));
+    work.picture = await colourPicture(work.bytes, work.artwork, quarterTurns, columns, rows, work.tools);
+  },
+};
+
+/** Resample, tone and screen, band by band, for each pass; it times the three apart. */
+export const markStage: Stage<PrepareWork> = {
+  name: 'mark',
+  timesItself: true,
+  async run(work) {
+    const { settings, artwork } = work;
+    const { widthMm, heightMm, scan, perpendicular, quarterTurns } = settings;
+    const scans = [scan, ...(perpendicular ? [perpendicularScan(scan.directionDeg, perpendicular)] : [])];
+    const turned = turnArtwork(artwork, quarterTurns);
+    work.passes = [];
+    for (const [index, passScan] of scans.entries()) {
+      const frame = scanFrame(widthMm, heightMm, passScan);
+      const onProgress = (share: number): void => work.onProgress((index + share) / scans.length);
+      const marks = await mark(turned, frame, settings, { ...work, onProgress });
+      work.passes.push({ pass: index === 0 ? 1 : 2, frame, marks });
+    }
+  },
+};
+
+/** The files that the operator runs. */
+export const packageStage: Stage<PrepareWork> = {
+  name: 'package',
+  async run(work) {
+    work.linework = null;
+    work.lineworkOptimised = false;
+    work.files = await packageRasters(work);
+  },
+};
+
+/** The pictures of the passage, last of all the engraved piece. */
+export const forecastStage: Stage<PrepareWork> = {
+  name: 'forecast',
+  async run(work) {
+    work.pictures = await passagePictures(work);
+  },
+};
