@@ -37,7 +37,7 @@ export default {
     boxShadow: { none: 'none', raised: '0 6px 24px rgb(0 0 0 / 0.22)' },
     extend: {
       // Spacing keeps 4 px steps: 2 4 6 10 16 are the rhythm 8 16 24 40 64.
-      maxWidth: { form: '34em', text: '66ch', page: '1200px' },
+      maxWidth: { form: '34em', text: '66ch', page: '1248px' },
       width: { margin: '300px' },
       minHeight: { target: '44px' },
       minWidth: { target: '44px' },

@@ -14,7 +14,9 @@ export function Checkbox({ children, wrong, ...props }: Props) {
           <>
             <span className="tick-box" aria-hidden="true">
               <svg viewBox="0 0 20 20" className="block h-full w-full">
-                {isSelected && <path d="M4 10.5 8.5 15 16 6" fill="none" stroke="currentColor" strokeWidth="2.2" />}
+                {isSelected && (
+                  <path d="M4 10.5 8.5 15 16 6" fill="none" stroke="currentColor" strokeWidth="2.2" />
+                )}
                 {isIndeterminate && <path d="M4 10 H16" stroke="var(--ink)" strokeWidth="2.2" />}
               </svg>
             </span>

@@ -32,7 +32,11 @@ export function ChoicePopover({ word, title, children, isDisabled }: Props) {
   );
   return (
     <DialogTrigger>
-      <Button isDisabled={isDisabled} className="link cursor-pointer font-semibold disabled:cursor-default disabled:no-underline" aria-label={typeof word === 'string' ? `${word}: change ${title.toLowerCase()}` : undefined}>
+      <Button
+        isDisabled={isDisabled}
+        className="link cursor-pointer font-semibold disabled:cursor-default disabled:no-underline"
+        aria-label={typeof word === 'string' ? `${word}: change ${title.toLowerCase()}` : undefined}
+      >
         {word}
       </Button>
       {narrow ? (

@@ -46,7 +46,10 @@ export function ComboBox({ label, choices, value, onChange, why, wrong, placehol
       </div>
       <FieldError className="field-wrong">{wrong}</FieldError>
       <Popover className="raised min-w-[--trigger-width]" offset={4}>
-        <ListBox<Choice> className="list-box" renderEmptyState={() => <p className="px-3 py-2 text-15 text-quiet">Nothing by that name.</p>}>
+        <ListBox<Choice>
+          className="list-box"
+          renderEmptyState={() => <p className="px-3 py-2 text-15 text-quiet">Nothing by that name.</p>}
+        >
           {(choice) => <ChoiceItem choice={choice} />}
         </ListBox>
       </Popover>

@@ -11,7 +11,10 @@ interface Props {
 export function DimensionLine({ lengthMm, along, unit = 'mm' }: Props) {
   const figure = unit === 'mm' ? Number(lengthMm.toFixed(2)) : Number(mmToInches(lengthMm).toFixed(3));
   const text = (
-    <span className="figure px-2 text-13 leading-none" style={along === 'y' ? { writingMode: 'vertical-rl', rotate: '180deg', padding: '8px 0' } : undefined}>
+    <span
+      className="figure px-2 text-13 leading-none"
+      style={along === 'y' ? { writingMode: 'vertical-rl', rotate: '180deg', padding: '8px 0' } : undefined}
+    >
       {figure}
       <span className="unit" style={along === 'y' ? { margin: '0.18em 0 0' } : undefined}>
         {unit}

@@ -10,7 +10,10 @@ function retry(failures: number, error: Error): boolean {
 /** Stands around every island: one language for figures on server and client, and one query client. */
 export function Island({ children }: { children: ReactNode }) {
   const [client] = useState(
-    () => new QueryClient({ defaultOptions: { queries: { retry, staleTime: 10_000 }, mutations: { retry: false } } }),
+    () =>
+      new QueryClient({
+        defaultOptions: { queries: { retry, staleTime: 10_000 }, mutations: { retry: false } },
+      }),
   );
   return (
     <I18nProvider locale="en-GB">

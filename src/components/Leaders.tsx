@@ -17,22 +17,30 @@ function measure(root: HTMLElement): Leader[] {
   const frame = root.getBoundingClientRect();
   return [...root.querySelectorAll<HTMLElement>('[data-note]')].flatMap((note) => {
     const id = note.dataset.note ?? '';
-    const place = root.querySelector(`[data-place="${id}"]`)?.getBoundingClientRect();
-    if (!place) return [];
     const box = note.getBoundingClientRect();
-    const x2 = place.right - frame.left + 2;
-    const y2 = place.top + place.height / 2 - frame.top;
     const x1 = box.left - frame.left - 4;
     const y1 = box.top - frame.top + 22;
+    const ends = [...root.querySelectorAll(`[data-place="${id}"]`)].map((place) => {
+      const ring = place.getBoundingClientRect();
+      return { x: ring.right - frame.left + 2, y: ring.top + ring.height / 2 - frame.top };
+    });
+    if (ends.length === 0) return [];
+    const distance = ({ x, y }: { x: number; y: number }) => Math.hypot(x1 - x, y1 - y);
+    const { x: x2, y: y2 } = ends.reduce((nearest, end) =>
+      distance(end) < distance(nearest) ? end : nearest,
+    );
     // Only where the note stands in the margin beside the plate.
-    return x1 > x2 ? [{ id, d: `M${x1 + 10} ${y1} H${x1 - 8} L${x2} ${y2}` }] : [];
+    return x1 > x2 ? [{ id, d: `M${x1} ${y1} H${x1 - 12} L${x2} ${y2}` }] : [];
   });
 }
 
 /** Thin lines from the notes in the margin to their places on the plate. */
 export function Leaders({ container, lit, revision }: Props) {
   const [leaders, setLeaders] = useState<Leader[]>([]);
-  const update = useCallback(() => setLeaders(container.current ? measure(container.current) : []), [container]);
+  const update = useCallback(
+    () => setLeaders(container.current ? measure(container.current) : []),
+    [container],
+  );
   useEffect(() => {
     const root = container.current;
     if (!root || typeof ResizeObserver === 'undefined') return;

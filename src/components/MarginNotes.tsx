@@ -14,7 +14,13 @@ interface Props {
 }
 
 /** Findings as notes in the margin, each tied to its places: hover, focus or tap lights both. */
-export function MarginNotes({ findings, lit, onLit, action, clear = 'Nothing to note. The laser can hold this drawing.' }: Props) {
+export function MarginNotes({
+  findings,
+  lit,
+  onLit,
+  action,
+  clear = 'Nothing to note. The laser can hold this drawing.',
+}: Props) {
   if (findings.length === 0) return <p className="text-15 text-quiet">{clear}</p>;
   return (
     <ul className="flex flex-col gap-2">
@@ -33,7 +39,9 @@ export function MarginNotes({ findings, lit, onLit, action, clear = 'Nothing to 
               <SeverityMark severity={finding.severity} />
               <span className="block text-15 font-semibold text-ink">{finding.title}</span>
               <span className="block text-13 text-quiet">
-                {[shortfallWords(finding), finding.places.length > 0 ? countWords(finding.count) : ''].filter(Boolean).join(' · ')}
+                {[shortfallWords(finding), finding.places.length > 0 ? countWords(finding.count) : '']
+                  .filter(Boolean)
+                  .join(' · ')}
               </span>
             </button>
             <p className="mt-1 text-13 text-ink">{finding.advice}</p>

@@ -17,7 +17,13 @@ interface Props {
 export function Notice({ title, detail, action, kind = 'blocker', children }: Props) {
   const tone = kind === 'blocker' ? 'text-stop' : kind === 'warning' ? 'text-warning' : 'text-quiet';
   return (
-    <div role={kind === 'note' ? 'status' : 'alert'} className="flex gap-3 border-l-2 border-current py-1 pl-4" style={{ borderColor: `var(--${kind === 'blocker' ? 'stop' : kind === 'warning' ? 'warning' : 'edge'})` }}>
+    <div
+      role={kind === 'note' ? 'status' : 'alert'}
+      className="flex gap-3 border-l-2 border-current py-1 pl-4"
+      style={{
+        borderColor: `var(--${kind === 'blocker' ? 'stop' : kind === 'warning' ? 'warning' : 'edge'})`,
+      }}
+    >
       <span className={`pt-1 ${tone}`}>
         <SeverityMark severity={kind} wordless />
       </span>

@@ -25,7 +25,18 @@ function rangeWords(min: number, max: number, unit = ''): string {
 }
 
 /** A figure with its unit. Out of range it stays as typed and says so. Empty is null, never 0. */
-export function NumberField({ label, unit, why, wrong, value, onChange, decimals = 2, minValue = -Infinity, maxValue = Infinity, ...props }: Props) {
+export function NumberField({
+  label,
+  unit,
+  why,
+  wrong,
+  value,
+  onChange,
+  decimals = 2,
+  minValue = -Infinity,
+  maxValue = Infinity,
+  ...props
+}: Props) {
   const outside = value !== null && (value < minValue || value > maxValue);
   const wording = wrong ?? (outside ? rangeWords(minValue, maxValue, unit) : undefined);
   return (

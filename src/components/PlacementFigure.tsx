@@ -18,12 +18,25 @@ export function PlacementFigure({ blank, placement, artworkMm, pictureUrl, groun
   const { leftMm, topMm } = placeOnBlank(blank, placement, width, height);
   const unit = Math.max(blank.widthMm, blank.heightMm) / 400;
   const room = 34 * unit;
-  const outside = leftMm < -0.005 || topMm < -0.005 || leftMm + width > blank.widthMm + 0.005 || topMm + height > blank.heightMm + 0.005;
+  const outside =
+    leftMm < -0.005 ||
+    topMm < -0.005 ||
+    leftMm + width > blank.widthMm + 0.005 ||
+    topMm + height > blank.heightMm + 0.005;
   const words = `Blank of ${blank.widthMm} by ${blank.heightMm} mm, artwork ${round(leftMm)} mm from its left and ${round(topMm)} mm from its top edge`;
   const box = [-room, -room, blank.widthMm + room * 1.4, blank.heightMm + room * 1.4].join(' ');
   return (
     <figure className="flex flex-col gap-2">
-      <svg viewBox={box} role="img" aria-label={words} className="max-h-[420px] w-full" style={{ fontSize: 12 * unit }} stroke="var(--ink)" fill="none" strokeWidth={unit}>
+      <svg
+        viewBox={box}
+        role="img"
+        aria-label={words}
+        className="max-h-[420px] w-full"
+        style={{ fontSize: 12 * unit }}
+        stroke="var(--ink)"
+        fill="none"
+        strokeWidth={unit}
+      >
         <Outline blank={blank} fill={groundColour ?? 'var(--sheet)'} />
         {blank.grainDeg !== null && <Grain blank={blank} unit={unit} />}
         <g transform={`translate(${leftMm} ${topMm})`}>
@@ -37,13 +50,20 @@ export function PlacementFigure({ blank, placement, artworkMm, pictureUrl, groun
               style={{ mixBlendMode: 'multiply' }}
             />
           )}
-          <rect width={width} height={height} stroke={outside ? 'var(--stop)' : 'var(--ink)'} strokeDasharray={`${4 * unit} ${3 * unit}`} />
+          <rect
+            width={width}
+            height={height}
+            stroke={outside ? 'var(--stop)' : 'var(--ink)'}
+            strokeDasharray={`${4 * unit} ${3 * unit}`}
+          />
         </g>
         <Datum blank={blank} placement={placement} unit={unit} />
         <Sizes blank={blank} unit={unit} />
       </svg>
       <figcaption className={`text-13 ${outside ? 'text-stop' : 'text-quiet'}`}>
-        {outside ? 'The artwork reaches over the edge of the blank.' : `${round(leftMm)} mm from the left edge, ${round(topMm)} mm from the top edge.`}
+        {outside
+          ? 'The artwork reaches over the edge of the blank.'
+          : `${round(leftMm)} mm from the left edge, ${round(topMm)} mm from the top edge.`}
       </figcaption>
     </figure>
   );
@@ -53,16 +73,29 @@ const round = (mm: number): number => Number(mm.toFixed(1));
 
 function Outline({ blank, fill }: { blank: Props['blank']; fill: string }) {
   const { widthMm, heightMm } = blank;
-  if (blank.outline === 'round') return <ellipse cx={widthMm / 2} cy={heightMm / 2} rx={widthMm / 2} ry={heightMm / 2} fill={fill} />;
-  return <rect width={widthMm} height={heightMm} fill={fill} strokeDasharray={blank.outline === 'own' ? '3 1.5' : undefined} />;
+  if (blank.outline === 'round')
+    return <ellipse cx={widthMm / 2} cy={heightMm / 2} rx={widthMm / 2} ry={heightMm / 2} fill={fill} />;
+  return (
+    <rect
+      width={widthMm}
+      height={heightMm}
+      fill={fill}
+      strokeDasharray={blank.outline === 'own' ? '3 1.5' : undefined}
+    />
+  );
 }
 
 /** Direction of the grain as a double-ended line in the blank's corner, never as a texture. */
 function Grain({ blank, unit }: { blank: Props['blank']; unit: number }) {
   const half = 24 * unit;
   return (
-    <g transform={`translate(${blank.widthMm / 2} ${blank.heightMm - 14 * unit}) rotate(${-(blank.grainDeg ?? 0)})`} opacity="0.8">
-      <path d={`M${-half} 0 H${half} M${-half + 5 * unit} ${-3 * unit} L${-half} 0 L${-half + 5 * unit} ${3 * unit} M${half - 5 * unit} ${-3 * unit} L${half} 0 L${half - 5 * unit} ${3 * unit}`} />
+    <g
+      transform={`translate(${blank.widthMm / 2} ${blank.heightMm - 14 * unit}) rotate(${-(blank.grainDeg ?? 0)})`}
+      opacity="0.8"
+    >
+      <path
+        d={`M${-half} 0 H${half} M${-half + 5 * unit} ${-3 * unit} L${-half} 0 L${-half + 5 * unit} ${3 * unit} M${half - 5 * unit} ${-3 * unit} L${half} 0 L${half - 5 * unit} ${3 * unit}`}
+      />
     </g>
   );
 }
@@ -85,13 +118,19 @@ function Sizes({ blank, unit }: { blank: Props['blank']; unit: number }) {
   const end = 4 * unit;
   return (
     <g>
-      <path d={`M0 ${off - end} V${off + end} M0 ${off} H${widthMm} M${widthMm} ${off - end} V${off + end}`} />
-      <path d={`M${off - end} 0 H${off + end} M${off} 0 V${heightMm} M${off - end} ${heightMm} H${off + end}`} />
+      <path
+        d={`M0 ${off - end} V${off + end} M0 ${off} H${widthMm} M${widthMm} ${off - end} V${off + end}`}
+      />
+      <path
+        d={`M${off - end} 0 H${off + end} M${off} 0 V${heightMm} M${off - end} ${heightMm} H${off + end}`}
+      />
       <g fill="var(--ink)" stroke="none" textAnchor="middle">
         <text x={widthMm / 2} y={off - 6 * unit}>
           {round(widthMm)} mm
         </text>
-        <text transform={`translate(${off - 6 * unit} ${heightMm / 2}) rotate(-90)`}>{round(heightMm)} mm</text>
+        <text transform={`translate(${off - 6 * unit} ${heightMm / 2}) rotate(-90)`}>
+          {round(heightMm)} mm
+        </text>
       </g>
     </g>
   );

@@ -12,7 +12,7 @@ interface Props {
 /** Places shown of a finding that is not lit; the lit one shows all that it lists. */
 const QUIET_PLACES = 6;
 
-/** Rings around the places of findings, over a picture. Each first place carries the leader of its note. */
+/** Rings around the places of findings, over a picture. A note's leader ends at the one nearest to it. */
 export function Places({ findings, widthMm, heightMm, lit, onLit }: Props) {
   return (
     <div className="absolute inset-0" aria-hidden="true">
@@ -20,7 +20,7 @@ export function Places({ findings, widthMm, heightMm, lit, onLit }: Props) {
         finding.places.slice(0, lit === finding.id ? undefined : QUIET_PLACES).map((place, index) => (
           <span
             key={`${finding.id}-${index}`}
-            data-place={index === 0 ? finding.id : undefined}
+            data-place={finding.id}
             data-lit={lit === finding.id}
             className={`place ${SEVERITY_CLASS[finding.severity]}`}
             onPointerEnter={() => onLit?.(finding.id)}

@@ -25,7 +25,20 @@ interface Props {
 const MAX_HEIGHT_PX = 560;
 
 /** The artwork in its well, its size as dimension lines, the rule under it. */
-export function Plate({ src, alt, widthMm, heightMm, unit, linePitchMm, quarterTurns = 0, findings = [], lit = null, onLit, laidDown = false, children }: Props) {
+export function Plate({
+  src,
+  alt,
+  widthMm,
+  heightMm,
+  unit,
+  linePitchMm,
+  quarterTurns = 0,
+  findings = [],
+  lit = null,
+  onLit,
+  laidDown = false,
+  children,
+}: Props) {
   const aspect = widthMm / heightMm;
   const size = { width: `min(100%, ${Math.round(MAX_HEIGHT_PX * aspect)}px)` };
   return (
@@ -38,8 +51,20 @@ export function Plate({ src, alt, widthMm, heightMm, unit, linePitchMm, quarterT
           <div className="absolute inset-y-0 left-[-28px] w-[18px]">
             <DimensionLine lengthMm={heightMm} along="y" unit={unit} />
           </div>
-          <div className={`relative w-full overflow-hidden bg-[#fff] ${laidDown ? 'laid-down' : ''}`} style={{ aspectRatio: `${widthMm} / ${heightMm}` }}>
-            {src ? <img src={src} alt={alt} className="absolute left-1/2 top-1/2 max-w-none" style={turned(quarterTurns, aspect)} /> : children}
+          <div
+            className={`relative w-full overflow-hidden bg-[#fff] ${laidDown ? 'laid-down' : ''}`}
+            style={{ aspectRatio: `${widthMm} / ${heightMm}` }}
+          >
+            {src ? (
+              <img
+                src={src}
+                alt={alt}
+                className="absolute left-1/2 top-1/2 max-w-none"
+                style={turned(quarterTurns, aspect)}
+              />
+            ) : (
+              children
+            )}
           </div>
           <Places findings={findings} widthMm={widthMm} heightMm={heightMm} lit={lit} onLit={onLit} />
         </div>

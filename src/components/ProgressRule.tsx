@@ -31,10 +31,25 @@ export function ProgressRule({ progress, words, mayLeave = false }: Props) {
       >
         <svg height="18">
           {Array.from({ length: 51 }, (_, i) => (
-            <line key={i} x1={`${i * 2}%`} x2={`${i * 2}%`} y1="12" y2={i % 5 ? 8 : 4} stroke="currentColor" opacity={i * 2 <= percent ? 1 : 0.45} />
+            <line
+              key={i}
+              x1={`${i * 2}%`}
+              x2={`${i * 2}%`}
+              y1="12"
+              y2={i % 5 ? 8 : 4}
+              stroke="currentColor"
+              opacity={i * 2 <= percent ? 1 : 0.45}
+            />
           ))}
           <line x1="0" x2="100%" y1="12.5" y2="12.5" stroke="var(--edge)" />
-          <rect x="0" y="11" width={`${percent}%`} height="3" fill="var(--ink)" style={{ transition: 'width 120ms ease-out' }} />
+          <rect
+            x="0"
+            y="11"
+            width={`${percent}%`}
+            height="3"
+            fill="var(--ink)"
+            style={{ transition: 'width 120ms ease-out' }}
+          />
         </svg>
       </div>
       <p className="text-15" role="status">

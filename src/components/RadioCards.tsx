@@ -16,10 +16,25 @@ interface Props extends Pick<RadioGroupProps, 'name' | 'isDisabled' | 'isRequire
   small?: boolean;
 }
 
-const COLUMNS = { 2: 'md:grid-cols-2', 3: 'md:grid-cols-3', 4: 'md:grid-cols-4', 5: 'md:grid-cols-5' } as const;
+const COLUMNS = {
+  2: 'md:grid-cols-2',
+  3: 'md:grid-cols-3',
+  4: 'md:grid-cols-4',
+  5: 'md:grid-cols-5',
+} as const;
 
 /** Drawn choices: one of a few, each with a drawing, a name and a line of why. */
-export function RadioCards({ label, choices, value, onChange, why, wrong, columns = 3, small = false, ...props }: Props) {
+export function RadioCards({
+  label,
+  choices,
+  value,
+  onChange,
+  why,
+  wrong,
+  columns = 3,
+  small = false,
+  ...props
+}: Props) {
   return (
     <RadioGroup
       {...props}

@@ -24,9 +24,21 @@ export function Rule({ widthMm, linePitchMm }: Props) {
       <svg height={linePitchMm ? 56 : 30} role="img" aria-label={words}>
         {tickPositions(widthMm, mm).map(({ at, isLong }) => (
           <g key={at}>
-            <line x1={percent(at, widthMm)} x2={percent(at, widthMm)} y1={BASE} y2={BASE - (isLong ? 8 : 4)} stroke="currentColor" />
+            <line
+              x1={percent(at, widthMm)}
+              x2={percent(at, widthMm)}
+              y1={BASE}
+              y2={BASE - (isLong ? 8 : 4)}
+              stroke="currentColor"
+            />
             {isLong && widthMm - at >= mm.long * 0.5 && (
-              <text x={percent(at, widthMm)} y={BASE - 12} textAnchor="middle" fill="currentColor" fontSize="11">
+              <text
+                x={percent(at, widthMm)}
+                y={BASE - 12}
+                textAnchor="middle"
+                fill="currentColor"
+                fontSize="11"
+              >
                 {at}
               </text>
             )}
@@ -38,7 +50,14 @@ export function Rule({ widthMm, linePitchMm }: Props) {
         <line x1="0" x2="100%" y1={BASE} y2={BASE} stroke="var(--ink)" />
         {lines > 0 &&
           tickPositions(lines, per).map(({ at, isLong }) => (
-            <line key={at} x1={percent(at, lines)} x2={percent(at, lines)} y1={BASE} y2={BASE + (isLong ? 9 : 4)} stroke="currentColor" />
+            <line
+              key={at}
+              x1={percent(at, lines)}
+              x2={percent(at, lines)}
+              y1={BASE}
+              y2={BASE + (isLong ? 9 : 4)}
+              stroke="currentColor"
+            />
           ))}
         {lines > 0 && (
           <text x="0" y={BASE + 26} fill="currentColor" fontSize="11">

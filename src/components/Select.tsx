@@ -28,7 +28,16 @@ interface Props extends Pick<SelectProps<Choice>, 'name' | 'isDisabled' | 'isReq
   placeholder?: string;
 }
 
-export function Select({ label, choices, value, onChange, why, wrong, placeholder = 'Choose', ...props }: Props) {
+export function Select({
+  label,
+  choices,
+  value,
+  onChange,
+  why,
+  wrong,
+  placeholder = 'Choose',
+  ...props
+}: Props) {
   return (
     <AriaSelect
       {...props}
@@ -65,7 +74,9 @@ export function ChoiceItem({ choice }: { choice: Choice }) {
       {choice.drawing}
       <span className="min-w-0">
         {choice.name}
-        {choice.words && <span className="choice-words block text-13 font-normal text-quiet">{choice.words}</span>}
+        {choice.words && (
+          <span className="choice-words block text-13 font-normal text-quiet">{choice.words}</span>
+        )}
       </span>
     </ListBoxItem>
   );

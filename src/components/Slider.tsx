@@ -14,7 +14,18 @@ interface Props {
   onChangeEnd?: (value: number) => void;
 }
 
-export function Slider({ label, value, onChange, onChangeEnd, min, max, step, unit, decimals = 2, isDisabled }: Props) {
+export function Slider({
+  label,
+  value,
+  onChange,
+  onChangeEnd,
+  min,
+  max,
+  step,
+  unit,
+  decimals = 2,
+  isDisabled,
+}: Props) {
   return (
     <AriaSlider<number>
       value={value}
@@ -40,7 +51,10 @@ export function Slider({ label, value, onChange, onChangeEnd, min, max, step, un
         {({ state }) => (
           <>
             <span className="absolute h-px w-full bg-edge" />
-            <span className="absolute h-[3px] bg-action" style={{ width: `${state.getThumbPercent(0) * 100}%` }} />
+            <span
+              className="absolute h-[3px] bg-action"
+              style={{ width: `${state.getThumbPercent(0) * 100}%` }}
+            />
             <SliderThumb className="top-1/2 h-6 w-6 rounded-full border border-action bg-sheet data-[dragging]:bg-action" />
           </>
         )}

@@ -15,7 +15,14 @@ export function SpotFigure({ spot, pxPerMm = 200, written = true }: Props) {
   const words = `${spot.shape === 'ellipse' ? 'Elliptical' : 'Rectangular'} spot, ${spot.widthMm} by ${spot.heightMm} mm`;
   return (
     <span className="figure inline-flex items-center gap-2 align-middle">
-      <svg width={w + 2} height={h + 2} viewBox={`-1 -1 ${w + 2} ${h + 2}`} role="img" aria-label={words} className="flex-none">
+      <svg
+        width={w + 2}
+        height={h + 2}
+        viewBox={`-1 -1 ${w + 2} ${h + 2}`}
+        role="img"
+        aria-label={words}
+        className="flex-none"
+      >
         {spot.shape === 'ellipse' ? (
           <ellipse cx={w / 2} cy={h / 2} rx={w / 2} ry={h / 2} fill="currentColor" />
         ) : (

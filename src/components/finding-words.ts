@@ -11,7 +11,9 @@ export function shortfallWords(finding: Finding): string {
   }
   if (!measured) return '';
   const value = `${Number(measured.value.toFixed(2))} ${measured.unit}`;
-  return measured.limit === null ? value : `${value}, asked for ${Number(measured.limit.toFixed(2))} ${measured.unit}`;
+  return measured.limit === null
+    ? value
+    : `${value}, asked for ${Number(measured.limit.toFixed(2))} ${measured.unit}`;
 }
 
 export function countWords(count: number): string {

@@ -19,7 +19,11 @@ const BROKEN_OFF = {
 };
 
 /** Sends artwork with its progress, 0–1. XMLHttpRequest, because fetch tells nothing of what was sent. */
-export function uploadArtwork(orderNumber: string, file: File, onProgress: (progress: number) => void): Upload {
+export function uploadArtwork(
+  orderNumber: string,
+  file: File,
+  onProgress: (progress: number) => void,
+): Upload {
   const request = new XMLHttpRequest();
   const done = new Promise<OrderView>((resolve, reject) => {
     request.upload.onprogress = (event) => event.lengthComputable && onProgress(event.loaded / event.total);
@@ -27,7 +31,8 @@ export function uploadArtwork(orderNumber: string, file: File, onProgress: (prog
     request.onerror = () => reject(new Refusal(0, BROKEN_OFF));
     request.onload = () => {
       const answer = request.response as unknown;
-      if (request.status >= 200 && request.status < 300) return resolve((answer as { order: OrderView }).order);
+      if (request.status >= 200 && request.status < 300)
+        return resolve((answer as { order: OrderView }).order);
       reject(new Refusal(request.status, isProblem(answer) ? answer : BROKEN_OFF));
     };
   });

@@ -9,7 +9,8 @@ export const orderKey = (number: string) => ['order', number] as const;
 export function useOrder(number: string, initial?: OrderView) {
   return useQuery({
     queryKey: orderKey(number),
-    queryFn: async ({ signal }) => (await call('GET /api/orders/:number', { params: { number }, signal })).order,
+    queryFn: async ({ signal }) =>
+      (await call('GET /api/orders/:number', { params: { number }, signal })).order,
     initialData: initial,
     enabled: number !== '',
     staleTime: 0,
@@ -43,7 +44,12 @@ export function useOrderFields(order: Pick<OrderView, 'number' | 'version'>) {
   const queries = useQueryClient();
   return useMutation({
     mutationFn: async (fields: OrderPatch) =>
-      (await call('PATCH /api/orders/:number', { params: { number: order.number }, body: { version: order.version, fields } })).order,
+      (
+        await call('PATCH /api/orders/:number', {
+          params: { number: order.number },
+          body: { version: order.version, fields },
+        })
+      ).order,
     onSuccess: (next) => queries.setQueryData(orderKey(order.number), next),
     onError: () => queries.invalidateQueries({ queryKey: orderKey(order.number) }),
   });

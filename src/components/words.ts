@@ -8,8 +8,17 @@ export const USE_WORDS: Record<Use, string> = {
   'for-a-child': 'for a child',
   outdoors: 'outdoors',
 };
-export const ROUTE_WORDS: Record<Route, string> = { 'bare-burn': 'bare burn', 'darkening-wash': 'darkening wash', 'paint-fill': 'paint fill' };
-export const TREATMENT_NAMES: Record<Treatment, string> = { linework: 'linework', solid: 'solid', halftone: 'halftone', continuous: 'continuous tone' };
+export const ROUTE_WORDS: Record<Route, string> = {
+  'bare-burn': 'bare burn',
+  'darkening-wash': 'darkening wash',
+  'paint-fill': 'paint fill',
+};
+export const TREATMENT_NAMES: Record<Treatment, string> = {
+  linework: 'linework',
+  solid: 'solid',
+  halftone: 'halftone',
+  continuous: 'continuous tone',
+};
 const DATUM_WORDS: Record<Placement['datum'], string> = {
   'top-left': 'top left corner',
   'top-right': 'top right corner',
@@ -17,10 +26,26 @@ const DATUM_WORDS: Record<Placement['datum'], string> = {
   'bottom-right': 'bottom right corner',
   centre: 'centre',
 };
-const OUTLINE_WORDS: Record<Blank['outline'], string> = { rectangle: 'rectangle', round: 'round', own: 'its own outline' };
+const OUTLINE_WORDS: Record<Blank['outline'], string> = {
+  rectangle: 'rectangle',
+  round: 'round',
+  own: 'its own outline',
+};
 
-const DATE = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'long', year: 'numeric', timeZone: 'UTC' });
-const TIME = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'short', year: 'numeric', hour: '2-digit', minute: '2-digit', timeZone: 'UTC' });
+const DATE = new Intl.DateTimeFormat('en-GB', {
+  day: 'numeric',
+  month: 'long',
+  year: 'numeric',
+  timeZone: 'UTC',
+});
+const TIME = new Intl.DateTimeFormat('en-GB', {
+  day: 'numeric',
+  month: 'short',
+  year: 'numeric',
+  hour: '2-digit',
+  minute: '2-digit',
+  timeZone: 'UTC',
+});
 
 /** 2026-12-01 is 1 December 2026. */
 export const dateWords = (isoDate: string): string => DATE.format(new Date(isoDate));
@@ -29,12 +54,15 @@ export const timeWords = (isoTime: string): string => `${TIME.format(new Date(is
 
 /** 84 mm, 84.5 mm: a length without needless decimals. */
 export const mmWords = (mm: number): string => String(Number(mm.toFixed(2)));
-export const sizeWords = (widthMm: number, heightMm: number): string => `${mmWords(widthMm)} × ${mmWords(heightMm)} mm`;
+export const sizeWords = (widthMm: number, heightMm: number): string =>
+  `${mmWords(widthMm)} × ${mmWords(heightMm)} mm`;
 
 /** L* 48 is "Chestnut, L* 48"; a target between the steps takes the nearest name. */
 export function shadeWords(lstar: number | null): string {
   if (lstar === null) return 'as it comes';
-  const nearest = SHADE_STEPS.reduce((best, step) => (Math.abs(step.lstar - lstar) < Math.abs(best.lstar - lstar) ? step : best));
+  const nearest = SHADE_STEPS.reduce((best, step) =>
+    Math.abs(step.lstar - lstar) < Math.abs(best.lstar - lstar) ? step : best,
+  );
   return `${nearest.name}, L* ${lstar}`;
 }
 
@@ -44,7 +72,12 @@ export function blankWords(blank: Blank, stockName: string | null): string {
   return `${made}, ${OUTLINE_WORDS[blank.outline]}, ${size} mm, ${blank.side}, ${blank.source === 'shop' ? 'from the shop' : 'the customer’s own'}`;
 }
 
-const TURN_WORDS = ['', ', turned a quarter clockwise', ', upside down', ', turned a quarter anticlockwise'] as const;
+const TURN_WORDS = [
+  '',
+  ', turned a quarter clockwise',
+  ', upside down',
+  ', turned a quarter anticlockwise',
+] as const;
 
 export function placementWords(placement: Placement): string {
   const { datum, xMm, yMm, quarterTurns, fixture } = placement;
@@ -54,7 +87,8 @@ export function placementWords(placement: Placement): string {
 
 /** What an order says of itself, as pairs to list; what is not said yet is left out. */
 export function fieldPairs(fields: OrderFields, stockName: string | null): [string, string][] {
-  const { blank, placement, treatment, shadeLstar, route, use, quantity, dueOn, notes, widthMm, heightMm } = fields;
+  const { blank, placement, treatment, shadeLstar, route, use, quantity, dueOn, notes, widthMm, heightMm } =
+    fields;
   const pairs: [string, string | null][] = [
     ['Size', widthMm !== null && heightMm !== null ? sizeWords(widthMm, heightMm) : null],
     ['Blank', blank && blankWords(blank, stockName)],

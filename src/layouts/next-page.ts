@@ -1,7 +1,8 @@
 /** Where to go on after signing in: a page of this site, else the fallback. Another site's address is never followed. */
 export function nextPage(url: URL, fallback: string): string {
   const next = url.searchParams.get('next');
-  if (next === null || !next.startsWith('/') || /^\/[/\\]/.test(next) || [...next].some((sign) => sign < ' ')) return fallback;
+  if (next === null || !next.startsWith('/') || /^\/[/\\]/.test(next) || [...next].some((sign) => sign < ' '))
+    return fallback;
   return next;
 }
 

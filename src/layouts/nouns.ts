@@ -45,10 +45,17 @@ export const FIND_IN: Record<Role, string> = {
 };
 
 /** The page a role starts from. */
-export const HOME: Record<Role, string> = { customer: '/orders', designer: '/queue', operator: '/today', admin: '/queue' };
+export const HOME: Record<Role, string> = {
+  customer: '/orders',
+  designer: '/queue',
+  operator: '/today',
+  admin: '/queue',
+};
 
 /** Whether a noun's page, or one below it, is open; the longest match wins. */
 export function isOpen(noun: Noun, nouns: readonly Noun[], path: string): boolean {
   const below = (href: string) => path === href || path.startsWith(`${href}/`);
-  return below(noun.href) && !nouns.some((other) => other.href.length > noun.href.length && below(other.href));
+  return (
+    below(noun.href) && !nouns.some((other) => other.href.length > noun.href.length && below(other.href))
+  );
 }

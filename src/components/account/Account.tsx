@@ -22,15 +22,34 @@ export default function Account({ name, email, confirmed }: Props) {
         {!confirmed && <ConfirmAddress email={email} />}
         <section aria-label="Name" className="flex flex-col gap-4">
           <h2>Name</h2>
-          <AccountForm schema={nameSchema} fields={[NAME]} initial={{ name }} button="Keep name" send={(body) => call('PATCH /api/account', { body })} done="Kept." kind="outlined" />
+          <AccountForm
+            schema={nameSchema}
+            fields={[NAME]}
+            initial={{ name }}
+            button="Keep name"
+            send={(body) => call('PATCH /api/account', { body })}
+            done="Kept."
+            kind="outlined"
+          />
         </section>
         <section aria-label="Password" className="flex flex-col gap-4">
           <h2>Password</h2>
           <AccountForm
             schema={changePasswordSchema}
             fields={[
-              { name: 'currentPassword', label: 'Present password', type: 'password', autoComplete: 'current-password' },
-              { name: 'newPassword', label: 'New password', type: 'password', autoComplete: 'new-password', why: 'At least 10 characters; a short sentence works well.' },
+              {
+                name: 'currentPassword',
+                label: 'Present password',
+                type: 'password',
+                autoComplete: 'current-password',
+              },
+              {
+                name: 'newPassword',
+                label: 'New password',
+                type: 'password',
+                autoComplete: 'new-password',
+                why: 'At least 10 characters; a short sentence works well.',
+              },
             ]}
             initial={{ currentPassword: '', newPassword: '' }}
             button="Change password"

@@ -7,6 +7,7 @@ import { problemOf, Refusal } from '../api';
 import { Button } from '../Button';
 import { ProblemNotice } from '../Notice';
 import { TextField } from '../TextField';
+import { useHydrated } from '../use-hydrated';
 
 export interface AccountField<V> {
   name: keyof V & string;
@@ -29,7 +30,15 @@ interface Props<V extends FieldValues> {
 }
 
 /** A short form of text fields: checked before it is sent, refusals shown where they belong, nothing typed is lost. */
-export function AccountForm<V extends FieldValues>({ schema, fields, initial, button, kind = 'filled', send, done }: Props<V>) {
+export function AccountForm<V extends FieldValues>({
+  schema,
+  fields,
+  initial,
+  button,
+  kind = 'filled',
+  send,
+  done,
+}: Props<V>) {
   const form = useForm<V, unknown, V>({ resolver: zodResolver(schema), defaultValues: initial });
   const [problem, setProblem] = useState<Problem | null>(null);
   const submit = async (values: V) => {
@@ -45,31 +54,49 @@ export function AccountForm<V extends FieldValues>({ schema, fields, initial, bu
       throw error;
     }
   };
+  const hydrated = useHydrated();
   const { isSubmitting, isSubmitSuccessful } = form.formState;
   const onSubmit = form.handleSubmit(submit);
   return (
-    <form noValidate className="flex max-w-form flex-col gap-4" onSubmit={(event) => void onSubmit(event).catch((error: unknown) => setProblem(problemOf(error)))}>
-      {problem && <ProblemNotice problem={problem} />}
-      {fields.map(({ name, label, type = 'text', autoComplete, why }) => (
-        <Controller
-          key={name}
-          control={form.control}
-          name={name as unknown as Path<V>}
-          render={({ field, fieldState }) => (
-            <TextField label={label} type={type} autoComplete={autoComplete} why={why} name={name} value={field.value} onChange={field.onChange} onBlur={field.onBlur} wrong={fieldState.error?.message} />
+    // post: should the browser ever send it itself, no password ends up in an address.
+    <form
+      noValidate
+      method="post"
+      onSubmit={(event) => void onSubmit(event).catch((error: unknown) => setProblem(problemOf(error)))}
+    >
+      <fieldset disabled={!hydrated} className="flex max-w-form flex-col gap-4">
+        {problem && <ProblemNotice problem={problem} />}
+        {fields.map(({ name, label, type = 'text', autoComplete, why }) => (
+          <Controller
+            key={name}
+            control={form.control}
+            name={name as unknown as Path<V>}
+            render={({ field, fieldState }) => (
+              <TextField
+                label={label}
+                type={type}
+                autoComplete={autoComplete}
+                why={why}
+                name={name}
+                value={field.value}
+                onChange={field.onChange}
+                onBlur={field.onBlur}
+                wrong={fieldState.error?.message}
+              />
+            )}
+          />
+        ))}
+        <div className="flex flex-wrap items-center gap-4">
+          <Button type="submit" kind={kind} isDisabled={isSubmitting}>
+            {button}
+          </Button>
+          {isSubmitSuccessful && done && !problem && (
+            <p role="status" className="text-15 text-good">
+              {done}
+            </p>
           )}
-        />
-      ))}
-      <div className="flex flex-wrap items-center gap-4">
-        <Button type="submit" kind={kind} isDisabled={isSubmitting}>
-          {button}
-        </Button>
-        {isSubmitSuccessful && done && !problem && (
-          <p role="status" className="text-15 text-good">
-            {done}
-          </p>
-        )}
-      </div>
+        </div>
+      </fieldset>
     </form>
   );
 }

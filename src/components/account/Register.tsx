@@ -17,7 +17,9 @@ export default function Register({ next }: { next: string }) {
         send={async (body) => {
           await call('POST /api/account/register', { body });
           const { email, password } = body;
-          await signIn('credentials', { email, password, redirect: false, callbackUrl: next } as Parameters<typeof signIn>[1]);
+          await signIn('credentials', { email, password, redirect: false, callbackUrl: next } as Parameters<
+            typeof signIn
+          >[1]);
           // An address that is known already is not given away: whoever owns it finds a mail, the other a sign-in page.
           window.location.assign(next);
         }}

@@ -28,7 +28,12 @@ export default function SignIn({ next }: { next: string }) {
         initial={{ email: '', password: '' }}
         button="Sign in"
         send={async ({ email, password }) => {
-          const answer = await signIn('credentials', { email, password, redirect: false, callbackUrl: next } as Parameters<typeof signIn>[1]);
+          const answer = await signIn('credentials', {
+            email,
+            password,
+            redirect: false,
+            callbackUrl: next,
+          } as Parameters<typeof signIn>[1]);
           if (!answer) return;
           const { url } = (await answer.json()) as { url: string };
           throw new Refusal(401, url.includes('code=too-many') ? TOO_MANY : WRONG);

@@ -1,12 +1,17 @@
 import { z } from 'zod';
 
 const name = z.string().trim().min(1, 'Say a name.').max(120, 'A name has at most 120 characters.');
-const email = z.email('Write an address such as name@example.org.').max(254, 'An address has at most 254 characters.');
+const email = z
+  .email('Write an address such as name@example.org.')
+  .max(254, 'An address has at most 254 characters.');
 const newPassword = z
   .string()
   .min(10, 'A password has at least 10 characters; a short sentence works well.')
   .max(200, 'A password has at most 200 characters.');
-const anyPassword = z.string().min(1, 'Type your password.').max(200, 'A password has at most 200 characters.');
+const anyPassword = z
+  .string()
+  .min(1, 'Type your password.')
+  .max(200, 'A password has at most 200 characters.');
 
 export const signInSchema = z.object({ email, password: anyPassword });
 export const registerSchema = z.object({ name, email, password: newPassword });

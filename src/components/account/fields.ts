@@ -1,7 +1,17 @@
 /** The fields that several account forms share. */
 export const NAME = { name: 'name', label: 'Name', autoComplete: 'name' } as const;
-export const EMAIL = { name: 'email', label: 'E-mail address', type: 'email', autoComplete: 'email' } as const;
-export const PASSWORD = { name: 'password', label: 'Password', type: 'password', autoComplete: 'current-password' } as const;
+export const EMAIL = {
+  name: 'email',
+  label: 'E-mail address',
+  type: 'email',
+  autoComplete: 'email',
+} as const;
+export const PASSWORD = {
+  name: 'password',
+  label: 'Password',
+  type: 'password',
+  autoComplete: 'current-password',
+} as const;
 export const NEW_PASSWORD = {
   name: 'password',
   label: 'Password',

@@ -24,7 +24,16 @@ interface Props {
 }
 
 /** The artwork: dropped, sent, looked at; its findings in the margin. */
-export function ArtworkPart({ order, upload, take, liveTask, unit, sizeIsSaid, quarterTurns, onUseWidth }: Props) {
+export function ArtworkPart({
+  order,
+  upload,
+  take,
+  liveTask,
+  unit,
+  sizeIsSaid,
+  quarterTurns,
+  onUseWidth,
+}: Props) {
   const artwork = order ? newestArtwork(order.artworks) : null;
   return (
     <section aria-label="Artwork" className="flex flex-col gap-4">
@@ -40,7 +49,11 @@ export function ArtworkPart({ order, upload, take, liveTask, unit, sizeIsSaid, q
             </p>
             <FileButton words="Send other artwork" onFile={upload.start} />
           </div>
-          <CheckedArtwork {...{ artwork, take, liveTask, unit, sizeIsSaid, quarterTurns, onUseWidth }} orderNumber={order!.number} previewUrl={upload.previewUrl} />
+          <CheckedArtwork
+            {...{ artwork, take, liveTask, unit, sizeIsSaid, quarterTurns, onUseWidth }}
+            orderNumber={order!.number}
+            previewUrl={upload.previewUrl}
+          />
         </>
       )}
     </section>
@@ -51,7 +64,14 @@ function Sending({ upload }: { upload: UploadState }) {
   const percent = Math.round((upload.progress ?? 0) * 100);
   return (
     <div className="flex flex-col gap-4 border border-edge bg-sheet p-6">
-      <ProgressRule progress={upload.progress} words={percent < 100 ? `Sending ${upload.fileName}: ${percent} %` : `${upload.fileName} has arrived. Reading it.`} />
+      <ProgressRule
+        progress={upload.progress}
+        words={
+          percent < 100
+            ? `Sending ${upload.fileName}: ${percent} %`
+            : `${upload.fileName} has arrived. Reading it.`
+        }
+      />
       <div>
         <Button onPress={upload.cancel}>Cancel sending</Button>
       </div>
@@ -65,17 +85,37 @@ interface CheckedProps extends Omit<Props, 'order' | 'upload'> {
   previewUrl: string | null;
 }
 
-function CheckedArtwork({ artwork, orderNumber, previewUrl, take, liveTask, unit, sizeIsSaid, quarterTurns, onUseWidth }: CheckedProps) {
+function CheckedArtwork({
+  artwork,
+  orderNumber,
+  previewUrl,
+  take,
+  liveTask,
+  unit,
+  sizeIsSaid,
+  quarterTurns,
+  onUseWidth,
+}: CheckedProps) {
   const { check } = artwork;
   const task = artwork.task.state === 'failed' ? artwork.task : (liveTask ?? artwork.task);
   const again = useMutation({
-    mutationFn: () => call('POST /api/orders/:number/artwork/:artworkVersion/check', { params: { number: orderNumber, artworkVersion: artwork.version }, body: {} }),
+    mutationFn: () =>
+      call('POST /api/orders/:number/artwork/:artworkVersion/check', {
+        params: { number: orderNumber, artworkVersion: artwork.version },
+        body: {},
+      }),
     onSuccess: ({ order }) => take(order),
   });
   const working = task.state === 'waiting' || task.state === 'running';
   const status = (
     <>
-      {working && <ProgressRule progress={task.state === 'running' ? task.progress : null} words={taskWords(task)} mayLeave />}
+      {working && (
+        <ProgressRule
+          progress={task.state === 'running' ? task.progress : null}
+          words={taskWords(task)}
+          mayLeave
+        />
+      )}
       {task.state === 'failed' && (
         <Notice title="The check did not finish." detail={task.problem}>
           <Button onPress={() => again.mutate()} isDisabled={again.isPending}>
@@ -85,7 +125,8 @@ function CheckedArtwork({ artwork, orderNumber, previewUrl, take, liveTask, unit
       )}
       {check && !sizeIsSaid && (
         <p className="text-13 text-quiet">
-          Looked at {Number(check.widthMm.toFixed(1))} mm wide for now. Say the size below, and it is looked at again.
+          Looked at {Number(check.widthMm.toFixed(1))} mm wide for now. Say the size below, and it is looked
+          at again.
         </p>
       )}
       {check?.artwork.remarks.map((remark) => (
@@ -98,7 +139,15 @@ function CheckedArtwork({ artwork, orderNumber, previewUrl, take, liveTask, unit
   if (!check) {
     return (
       <div className="grid gap-6 lg:grid-cols-[minmax(0,1fr)_300px]">
-        <div className="plate-well">{previewUrl && <img src={previewUrl} alt={`Preview of ${artwork.fileName}`} className="max-h-[480px] max-w-full bg-[#fff]" />}</div>
+        <div className="plate-well">
+          {previewUrl && (
+            <img
+              src={previewUrl}
+              alt={`Preview of ${artwork.fileName}`}
+              className="max-h-[480px] max-w-full bg-[#fff]"
+            />
+          )}
+        </div>
         <aside className="flex flex-col gap-4">{status}</aside>
       </div>
     );

@@ -42,9 +42,34 @@ export function BlankPart({ stocks, unit, beside }: Props) {
   const [source, outline] = useWatch({ control, name: ['blank.source', 'blank.outline'] });
   return (
     <Part title="Blank" words="The piece that will be engraved." beside={beside}>
-      <Controller control={control} name="blank.source" render={({ field }) => <RadioCards label="Where it comes from" choices={SOURCES} value={field.value} onChange={field.onChange} columns={2} small />} />
+      <Controller
+        control={control}
+        name="blank.source"
+        render={({ field }) => (
+          <RadioCards
+            label="Where it comes from"
+            choices={SOURCES}
+            value={field.value}
+            onChange={field.onChange}
+            columns={2}
+            small
+          />
+        )}
+      />
       <StockChoice stocks={stocks} own={source === 'customer'} />
-      <Controller control={control} name="blank.outline" render={({ field }) => <RadioCards label="Outline" choices={OUTLINES} value={field.value} onChange={field.onChange} small />} />
+      <Controller
+        control={control}
+        name="blank.outline"
+        render={({ field }) => (
+          <RadioCards
+            label="Outline"
+            choices={OUTLINES}
+            value={field.value}
+            onChange={field.onChange}
+            small
+          />
+        )}
+      />
       <div className="grid grid-cols-3 gap-4">
         <Length name="blank.widthMm" label={outline === 'round' ? 'Across' : 'Width'} unit={unit} minMm={5} />
         <Length name="blank.heightMm" label={outline === 'round' ? 'Down' : 'Height'} unit={unit} minMm={5} />
@@ -54,14 +79,22 @@ export function BlankPart({ stocks, unit, beside }: Props) {
         control={control}
         name="blank.grainDeg"
         render={({ field }) => (
-          <Select label="Grain" choices={GRAINS} value={field.value === null ? 'none' : String(field.value)} onChange={(id) => field.onChange(id === 'none' ? null : Number(id))} />
+          <Select
+            label="Grain"
+            choices={GRAINS}
+            value={field.value === null ? 'none' : String(field.value)}
+            onChange={(id) => field.onChange(id === 'none' ? null : Number(id))}
+          />
         )}
       />
       <Controller
         control={control}
         name="blank.side"
         render={({ field }) => (
-          <Checkbox isSelected={field.value === 'back'} onChange={(back) => field.onChange(back ? 'back' : 'front')}>
+          <Checkbox
+            isSelected={field.value === 'back'}
+            onChange={(back) => field.onChange(back ? 'back' : 'front')}
+          >
             Engrave the back
           </Checkbox>
         )}
@@ -79,11 +112,15 @@ function StockChoice({ stocks, own }: { stocks: readonly StockView[]; own: boole
     .map((stock) => ({
       id: String(stock.id),
       name: stock.name,
-      words: stock.forbidden ? 'Never engraved here' : [`${stock.thicknessMm} mm`, stock.finish].filter(Boolean).join(', '),
+      words: stock.forbidden
+        ? 'Never engraved here'
+        : [`${stock.thicknessMm} mm`, stock.finish].filter(Boolean).join(', '),
       drawing: <Swatch colour={stock.groundColour} />,
       disabled: stock.forbidden,
     }));
-  const unsure = own ? [{ id: UNIDENTIFIED, name: 'I do not know', words: 'The order waits until the shop has looked at it.' }] : [];
+  const unsure = own
+    ? [{ id: UNIDENTIFIED, name: 'I do not know', words: 'The order waits until the shop has looked at it.' }]
+    : [];
   return (
     <Controller
       control={control}
@@ -112,7 +149,15 @@ interface LengthProps {
 
 function Length({ name, maxMm = 3000, ...props }: LengthProps) {
   const { control } = useFormContext<DraftForm>();
-  return <Controller control={control} name={name} render={({ field }) => <LengthField {...props} maxMm={maxMm} valueMm={field.value} onChangeMm={field.onChange} />} />;
+  return (
+    <Controller
+      control={control}
+      name={name}
+      render={({ field }) => (
+        <LengthField {...props} maxMm={maxMm} valueMm={field.value} onChangeMm={field.onChange} />
+      )}
+    />
+  );
 }
 
 function OwnPiece() {
@@ -123,7 +168,15 @@ function OwnPiece() {
         control={control}
         name="blank.condition"
         render={({ field }) => (
-          <TextField label="Its condition" rows={2} value={field.value} onChange={field.onChange} onBlur={field.onBlur} why="Finish, scratches, what was done to it before. We may keep it waiting if this is unclear." maxLength={500} />
+          <TextField
+            label="Its condition"
+            rows={2}
+            value={field.value}
+            onChange={field.onChange}
+            onBlur={field.onBlur}
+            why="Finish, scratches, what was done to it before. We may keep it waiting if this is unclear."
+            maxLength={500}
+          />
         )}
       />
       <Controller

@@ -18,9 +18,14 @@ export function CustomerChoice({ value, onChange }: Props) {
   const [entering, setEntering] = useState(false);
   const people = useQuery({
     queryKey: ['people', 'customer'],
-    queryFn: async ({ signal }) => (await call('GET /api/people', { query: { role: 'customer' }, signal })).people,
+    queryFn: async ({ signal }) =>
+      (await call('GET /api/people', { query: { role: 'customer' }, signal })).people,
   });
-  const choices = (people.data ?? []).map((person) => ({ id: String(person.id), name: person.name, words: person.email }));
+  const choices = (people.data ?? []).map((person) => ({
+    id: String(person.id),
+    name: person.name,
+    words: person.email,
+  }));
   return (
     <Part title="Customer" words="Whose order this is. It cannot be changed once the draft is open.">
       {people.isError && <ProblemNotice problem={problemOf(people.error)} />}

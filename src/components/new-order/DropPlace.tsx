@@ -12,7 +12,8 @@ export function DropPlace({ onFile }: Props) {
     <div className="flex flex-col items-start gap-4 border border-dashed border-edge bg-sheet px-6 py-10 md:px-10 md:py-16">
       <p className="text-25 font-semibold">Drop your drawing or photograph here</p>
       <p className="text-quiet">
-        Or paste it, or choose a file. SVG is best for drawings; PNG, TIFF, JPEG, WebP, AVIF, GIF and BMP are taken too, up to 64 MiB.
+        Or paste it, or choose a file. SVG is best for drawings; PNG, TIFF, JPEG, WebP, AVIF, GIF and BMP are
+        taken too, up to 64 MiB.
       </p>
       <FileButton words="Choose a file" onFile={onFile} />
     </div>

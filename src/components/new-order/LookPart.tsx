@@ -42,7 +42,16 @@ export function LookPart({ check, stock }: Props) {
       <Controller
         control={control}
         name="treatment"
-        render={({ field }) => <RadioCards label="Treatment" choices={choices} value={field.value ?? suggested} onChange={field.onChange} columns={2} small />}
+        render={({ field }) => (
+          <RadioCards
+            label="Treatment"
+            choices={choices}
+            value={field.value ?? suggested}
+            onChange={field.onChange}
+            columns={2}
+            small
+          />
+        )}
       />
       <ShadeChoice stock={stock} />
       {stock && stock.routes.length > 0 && <RouteChoice stock={stock} />}
@@ -59,9 +68,20 @@ function ShadeChoice({ stock }: { stock: StockView | null }) {
     id: String(lstar),
     name,
     words: lstar === 28 ? 'L* 28 and below' : `L* ${lstar}`,
-    drawing: <span aria-hidden="true" className="block h-[40px] w-full border border-edge" style={{ background: withLightness(colour, lstar) }} />,
+    drawing: (
+      <span
+        aria-hidden="true"
+        className="block h-[40px] w-full border border-edge"
+        style={{ background: withLightness(colour, lstar) }}
+      />
+    ),
   }));
-  const none = { id: OPEN, name: 'As it comes', words: 'The shop chooses', drawing: <span aria-hidden="true" className="block h-[40px] w-full border border-dashed border-edge" /> };
+  const none = {
+    id: OPEN,
+    name: 'As it comes',
+    words: 'The shop chooses',
+    drawing: <span aria-hidden="true" className="block h-[40px] w-full border border-dashed border-edge" />,
+  };
   return (
     <Controller
       control={control}
@@ -88,5 +108,13 @@ function RouteChoice({ stock }: { stock: StockView }) {
     const refusal = routeRefusal(stock, route.id, use);
     return { ...route, words: refusal ?? route.words, disabled: refusal !== null };
   });
-  return <Controller control={control} name="route" render={({ field }) => <RadioCards label="Route" choices={choices} value={field.value} onChange={field.onChange} />} />;
+  return (
+    <Controller
+      control={control}
+      name="route"
+      render={({ field }) => (
+        <RadioCards label="Route" choices={choices} value={field.value} onChange={field.onChange} />
+      )}
+    />
+  );
 }

@@ -49,9 +49,15 @@ function Flow({ initial, role, unconfirmedEmail }: Props) {
   const mustName = role !== 'customer' && order === null;
   const mayStart = !mustName || customerId !== null;
   const over = useFileArrival((file) => mayStart && upload.start(file));
-  const stocks = useQuery({ queryKey: ['stocks'], queryFn: async ({ signal }) => (await call('GET /api/stocks', { signal })).stocks });
+  const stocks = useQuery({
+    queryKey: ['stocks'],
+    queryFn: async ({ signal }) => (await call('GET /api/stocks', { signal })).stocks,
+  });
   const check = (order && newestArtwork(order.artworks)?.check) ?? null;
-  const [widthMm, stockId, quarterTurns] = useWatch({ control: form.control, name: ['widthMm', 'blank.stockId', 'placement.quarterTurns'] });
+  const [widthMm, stockId, quarterTurns] = useWatch({
+    control: form.control,
+    name: ['widthMm', 'blank.stockId', 'placement.quarterTurns'],
+  });
   const stock = stocks.data?.find(({ id }) => id === stockId) ?? null;
   const useWidth = (width: number) => {
     // The check speaks of the artwork as it lies; the form of the artwork before its quarter turns.
@@ -63,12 +69,29 @@ function Flow({ initial, role, unconfirmedEmail }: Props) {
     <FormProvider {...form}>
       <div className="flex flex-col gap-10">
         {mustName && <CustomerChoice value={customerId} onChange={setCustomerId} />}
-        {over && <p className="fixed inset-x-0 top-0 z-50 bg-action py-4 text-center font-semibold text-ground">Let go to send it</p>}
+        {over && (
+          <p className="fixed inset-x-0 top-0 z-50 bg-action py-4 text-center font-semibold text-ground">
+            Let go to send it
+          </p>
+        )}
         {mayStart && (
           <>
-            <ArtworkPart order={order} upload={upload} take={draft.take} liveTask={task} unit={unit} sizeIsSaid={widthMm !== null} quarterTurns={quarterTurns} onUseWidth={useWidth} />
+            <ArtworkPart
+              order={order}
+              upload={upload}
+              take={draft.take}
+              liveTask={task}
+              unit={unit}
+              sizeIsSaid={widthMm !== null}
+              quarterTurns={quarterTurns}
+              onUseWidth={useWidth}
+            />
             <SizePart check={check} unit={unit} onUnit={setUnit} />
-            <BlankPart stocks={stocks.data ?? []} unit={unit} beside={<Placed order={order} form={form} stock={stock} />} />
+            <BlankPart
+              stocks={stocks.data ?? []}
+              unit={unit}
+              beside={<Placed order={order} form={form} stock={stock} />}
+            />
             <LookPart check={check} stock={stock} />
             <TermsPart />
             <SubmitPart draft={draft} unconfirmedEmail={unconfirmedEmail} />
@@ -98,7 +121,11 @@ interface PlacedProps {
 function Placed({ order, form, stock }: PlacedProps) {
   const { blank, placement, widthMm, heightMm } = useWatch({ control: form.control }) as DraftForm;
   if (blank.widthMm === null || blank.heightMm === null || widthMm === null || heightMm === null) {
-    return <p className="text-15 text-quiet">With the sizes of blank and engraving, this shows where the artwork will lie.</p>;
+    return (
+      <p className="text-15 text-quiet">
+        With the sizes of blank and engraving, this shows where the artwork will lie.
+      </p>
+    );
   }
   return (
     <PlacementFigure

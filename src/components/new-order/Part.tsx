@@ -12,7 +12,10 @@ interface Props {
 /** One part of the order: a single column, with at most a drawing beside it. */
 export function Part({ title, words, beside, children }: Props) {
   return (
-    <section className="grid gap-6 border-t border-hair pt-6 lg:grid-cols-[34em_minmax(0,1fr)] lg:gap-16" aria-label={title}>
+    <section
+      className="grid gap-6 border-t border-hair pt-6 lg:grid-cols-[34em_minmax(0,1fr)] lg:gap-16"
+      aria-label={title}
+    >
       <div className="flex max-w-form flex-col gap-4">
         <div>
           <h2>{title}</h2>

@@ -7,7 +7,13 @@ import { TextField } from '../TextField';
 import type { DraftForm } from './draft-form';
 import { DatumDrawing } from './drawings';
 
-const NAMES = { 'top-left': 'Top left', 'top-right': 'Top right', 'bottom-left': 'Bottom left', 'bottom-right': 'Bottom right', centre: 'Centre' } as const;
+const NAMES = {
+  'top-left': 'Top left',
+  'top-right': 'Top right',
+  'bottom-left': 'Bottom left',
+  'bottom-right': 'Bottom right',
+  centre: 'Centre',
+} as const;
 const CHOICES = DATUMS.map((id) => ({ id, name: NAMES[id], drawing: <DatumDrawing datum={id} /> }));
 const TURNS = [
   { id: '0', name: 'As it is' },
@@ -23,19 +29,49 @@ export function PlacementFields({ unit }: { unit: LengthUnit }) {
     <>
       <div className="pt-4">
         <h3>Placement</h3>
-        <p className="text-15 text-quiet">The same corner or centre of blank and artwork, and how far they lie apart.</p>
+        <p className="text-15 text-quiet">
+          The same corner or centre of blank and artwork, and how far they lie apart.
+        </p>
       </div>
-      <Controller control={control} name="placement.datum" render={({ field }) => <RadioCards label="Measured from" choices={CHOICES} value={field.value} onChange={field.onChange} columns={5} small />} />
+      <Controller
+        control={control}
+        name="placement.datum"
+        render={({ field }) => (
+          <RadioCards
+            label="Measured from"
+            choices={CHOICES}
+            value={field.value}
+            onChange={field.onChange}
+            columns={5}
+            small
+          />
+        )}
+      />
       <LengthPair unit={unit} />
       <Controller
         control={control}
         name="placement.quarterTurns"
-        render={({ field }) => <Select label="Turned" choices={TURNS} value={String(field.value)} onChange={(id) => field.onChange(Number(id))} />}
+        render={({ field }) => (
+          <Select
+            label="Turned"
+            choices={TURNS}
+            value={String(field.value)}
+            onChange={(id) => field.onChange(Number(id))}
+          />
+        )}
       />
       <Controller
         control={control}
         name="placement.fixture"
-        render={({ field }) => <TextField label="How it is held, if that matters" value={field.value} onChange={field.onChange} onBlur={field.onBlur} maxLength={200} />}
+        render={({ field }) => (
+          <TextField
+            label="How it is held, if that matters"
+            value={field.value}
+            onChange={field.onChange}
+            onBlur={field.onBlur}
+            maxLength={200}
+          />
+        )}
       />
     </>
   );
@@ -45,8 +81,34 @@ function LengthPair({ unit }: { unit: LengthUnit }) {
   const { control } = useFormContext<DraftForm>();
   return (
     <div className="grid grid-cols-2 gap-4">
-      <Controller control={control} name="placement.xMm" render={({ field }) => <LengthField label="To the right" unit={unit} minMm={-3000} maxMm={3000} valueMm={field.value} onChangeMm={(mm) => field.onChange(mm ?? 0)} />} />
-      <Controller control={control} name="placement.yMm" render={({ field }) => <LengthField label="Down" unit={unit} minMm={-3000} maxMm={3000} valueMm={field.value} onChangeMm={(mm) => field.onChange(mm ?? 0)} />} />
+      <Controller
+        control={control}
+        name="placement.xMm"
+        render={({ field }) => (
+          <LengthField
+            label="To the right"
+            unit={unit}
+            minMm={-3000}
+            maxMm={3000}
+            valueMm={field.value}
+            onChangeMm={(mm) => field.onChange(mm ?? 0)}
+          />
+        )}
+      />
+      <Controller
+        control={control}
+        name="placement.yMm"
+        render={({ field }) => (
+          <LengthField
+            label="Down"
+            unit={unit}
+            minMm={-3000}
+            maxMm={3000}
+            valueMm={field.value}
+            onChangeMm={(mm) => field.onChange(mm ?? 0)}
+          />
+        )}
+      />
     </div>
   );
 }

@@ -28,7 +28,10 @@ export function SizePart({ check, unit, onUnit }: Props) {
     if (locked && aspect !== null) return set(lockedSize(side, value, aspect));
     set(side === 'width' ? { widthMm: value, heightMm } : { widthMm, heightMm: value });
   };
-  const own = check?.artwork.ownWidthMm && check.artwork.ownHeightMm ? { widthMm: check.artwork.ownWidthMm, heightMm: check.artwork.ownHeightMm } : null;
+  const own =
+    check?.artwork.ownWidthMm && check.artwork.ownHeightMm
+      ? { widthMm: check.artwork.ownWidthMm, heightMm: check.artwork.ownHeightMm }
+      : null;
   return (
     <Part title="Size" words={<OwnSizeWords check={check} own={own} unit={unit} />}>
       {own && own.widthMm !== widthMm && (
@@ -37,8 +40,22 @@ export function SizePart({ check, unit, onUnit }: Props) {
         </div>
       )}
       <div className="grid grid-cols-2 gap-4">
-        <LengthField label="Width" unit={unit} valueMm={widthMm} onChangeMm={change('width')} minMm={1} maxMm={3000} />
-        <LengthField label="Height" unit={unit} valueMm={heightMm} onChangeMm={change('height')} minMm={1} maxMm={3000} />
+        <LengthField
+          label="Width"
+          unit={unit}
+          valueMm={widthMm}
+          onChangeMm={change('width')}
+          minMm={1}
+          maxMm={3000}
+        />
+        <LengthField
+          label="Height"
+          unit={unit}
+          valueMm={heightMm}
+          onChangeMm={change('height')}
+          minMm={1}
+          maxMm={3000}
+        />
       </div>
       <div className="flex flex-wrap items-center justify-between gap-x-6">
         <Checkbox isSelected={locked} onChange={setLocked}>
@@ -50,9 +67,18 @@ export function SizePart({ check, unit, onUnit }: Props) {
   );
 }
 
-function OwnSizeWords({ check, own, unit }: { check: CheckReport | null; own: { widthMm: number; heightMm: number } | null; unit: LengthUnit }) {
+function OwnSizeWords({
+  check,
+  own,
+  unit,
+}: {
+  check: CheckReport | null;
+  own: { widthMm: number; heightMm: number } | null;
+  unit: LengthUnit;
+}) {
   if (!check) return <>How wide and high the engraving shall be on the piece.</>;
-  if (!own) return <>The file does not say how big it is meant to be. Say the width, and the height follows.</>;
+  if (!own)
+    return <>The file does not say how big it is meant to be. Say the width, and the height follows.</>;
   return (
     <>
       The file says {shownLength(own.widthMm, unit)} × {shownLength(own.heightMm, unit)} {unit}.

@@ -23,16 +23,28 @@ export function SubmitPart({ draft, unconfirmedEmail }: Props) {
   const [rights, setRights] = useState(false);
   const [asked, setAsked] = useState(false);
   const form = useWatch({ control: useFormContext<DraftForm>().control }) as DraftForm;
+  const isSaid = form.blank.stockId !== null || form.blank.source === 'customer';
   const missing = missingWords(form, (draft.order?.artworks.length ?? 0) > 0);
   const waits = missing.length === 0 ? draft.order?.waitsFor.submit : undefined;
-  const submit = useMutation({ mutationFn: () => submitOrder(draft), onSuccess: ({ number }) => window.location.assign(`/orders/${number}?said=submitted`) });
+  const submit = useMutation({
+    mutationFn: () => submitOrder(draft),
+    onSuccess: ({ number }) => window.location.assign(`/orders/${number}?said=submitted`),
+  });
   const press = () => {
     setAsked(true);
     if (rights && missing.length === 0) submit.mutate();
   };
   return (
-    <Part title="Submit" beside={draft.order && <CautionList cautions={draft.order.cautions} />}>
-      <Checkbox isSelected={rights} onChange={setRights} wrong={asked && !rights ? 'Tick this first: without the right to the artwork we cannot engrave it.' : undefined}>
+    <Part title="Submit" beside={draft.order && isSaid && <CautionList cautions={draft.order.cautions} />}>
+      <Checkbox
+        isSelected={rights}
+        onChange={setRights}
+        wrong={
+          asked && !rights
+            ? 'Tick this first: without the right to the artwork we cannot engrave it.'
+            : undefined
+        }
+      >
         The artwork is mine, or I have the right to have it engraved.
       </Checkbox>
       {missing.length > 0 && (asked || draft.order) && (
@@ -45,7 +57,11 @@ export function SubmitPart({ draft, unconfirmedEmail }: Props) {
           </ul>
         </div>
       )}
-      {unconfirmedEmail ? <ConfirmAddress email={unconfirmedEmail} /> : waits && <p className="text-15 text-warning">{waits}</p>}
+      {unconfirmedEmail ? (
+        <ConfirmAddress email={unconfirmedEmail} />
+      ) : (
+        waits && <p className="text-15 text-warning">{waits}</p>
+      )}
       {submit.isError && <ProblemNotice problem={problemOf(submit.error)} />}
       {draft.problem && draft.keeping === 'not-kept' && <ProblemNotice problem={draft.problem} />}
       <div className="flex flex-wrap items-center gap-4">
@@ -68,6 +84,9 @@ function keptWords({ order, keeping }: Draft): string {
 
 async function submitOrder(draft: Draft): Promise<OrderView> {
   const { number, version } = await draft.keep();
-  const answer = await call('POST /api/orders/:number/events', { params: { number }, body: { event: 'submit', version, rightsConfirmed: true } });
+  const answer = await call('POST /api/orders/:number/events', {
+    params: { number },
+    body: { event: 'submit', version, rightsConfirmed: true },
+  });
   return answer.order;
 }

@@ -19,13 +19,76 @@ export function TermsPart() {
   const { control } = useFormContext<DraftForm>();
   return (
     <Part title="The order">
-      <Controller control={control} name="title" render={({ field }) => <TextField label="What you call it" value={field.value} onChange={field.onChange} onBlur={field.onBlur} maxLength={120} />} />
-      <Controller control={control} name="use" render={({ field }) => <RadioCards label="Use" choices={USES} value={field.value} onChange={field.onChange} columns={2} small />} />
+      <Controller
+        control={control}
+        name="title"
+        render={({ field }) => (
+          <TextField
+            label="What you call it"
+            value={field.value}
+            onChange={field.onChange}
+            onBlur={field.onBlur}
+            maxLength={120}
+          />
+        )}
+      />
+      <Controller
+        control={control}
+        name="use"
+        render={({ field }) => (
+          <RadioCards
+            label="Use"
+            choices={USES}
+            value={field.value}
+            onChange={field.onChange}
+            columns={2}
+            small
+          />
+        )}
+      />
       <div className="grid grid-cols-2 gap-4">
-        <Controller control={control} name="quantity" render={({ field }) => <NumberField label="Quantity" decimals={0} minValue={1} maxValue={10_000} value={field.value} onChange={field.onChange} />} />
-        <Controller control={control} name="dueOn" render={({ field }) => <TextField label="Needed by, if it matters" type="date" value={field.value} onChange={field.onChange} onBlur={field.onBlur} />} />
+        <Controller
+          control={control}
+          name="quantity"
+          render={({ field }) => (
+            <NumberField
+              label="Quantity"
+              decimals={0}
+              minValue={1}
+              maxValue={10_000}
+              value={field.value}
+              onChange={field.onChange}
+            />
+          )}
+        />
+        <Controller
+          control={control}
+          name="dueOn"
+          render={({ field }) => (
+            <TextField
+              label="Needed by, if it matters"
+              type="date"
+              value={field.value}
+              onChange={field.onChange}
+              onBlur={field.onBlur}
+            />
+          )}
+        />
       </div>
-      <Controller control={control} name="notes" render={({ field }) => <TextField label="Notes for the shop" rows={3} value={field.value} onChange={field.onChange} onBlur={field.onBlur} maxLength={2000} />} />
+      <Controller
+        control={control}
+        name="notes"
+        render={({ field }) => (
+          <TextField
+            label="Notes for the shop"
+            rows={3}
+            value={field.value}
+            onChange={field.onChange}
+            onBlur={field.onBlur}
+            maxLength={2000}
+          />
+        )}
+      />
       <Controller
         control={control}
         name="withoutProof"

@@ -12,7 +12,14 @@ export function UnitChoice({ unit, onUnit }: { unit: LengthUnit; onUnit: (unit: 
       <legend className="hidden-words">Unit of lengths</legend>
       {UNITS.map(({ id, name }) => (
         <label key={id} className="flex min-h-target cursor-pointer items-center gap-2">
-          <input type="radio" name="length-unit" value={id} checked={unit === id} onChange={() => onUnit(id)} className="h-[18px] w-[18px] accent-[--action]" />
+          <input
+            type="radio"
+            name="length-unit"
+            value={id}
+            checked={unit === id}
+            onChange={() => onUnit(id)}
+            className="h-[18px] w-[18px] accent-[--action]"
+          />
           {name}
         </label>
       ))}

@@ -1,5 +1,12 @@
 import type { CheckReport } from '@/lib/prepare/report';
-import { orderFieldsSchema, type Blank, type OrderFields, type OrderPatch, type Placement, type Use } from '@/lib/orders/order';
+import {
+  orderFieldsSchema,
+  type Blank,
+  type OrderFields,
+  type OrderPatch,
+  type Placement,
+  type Use,
+} from '@/lib/orders/order';
 import type { Treatment } from '@/lib/prepare/settings';
 import type { Route } from '@/lib/stock/stock';
 
@@ -86,7 +93,9 @@ export function changesSince(patch: OrderPatch, known: OrderFields): OrderPatch 
 }
 
 function blankIsEmpty(blank: DraftForm['blank']): boolean {
-  return blank.widthMm === null && blank.heightMm === null && blank.thicknessMm === null && blank.stockId === null;
+  return (
+    blank.widthMm === null && blank.heightMm === null && blank.thicknessMm === null && blank.stockId === null
+  );
 }
 
 /** Width ÷ height of the artwork before quarter turns; null until it has been read. */
@@ -125,7 +134,8 @@ export function missingWords(form: DraftForm, hasArtwork: boolean): string[] {
   const words: string[] = [];
   if (!hasArtwork) words.push('The artwork. Drop it at the top of this page.');
   if (form.widthMm === null || form.heightMm === null) words.push('The size of the engraving.');
-  if (blank.widthMm === null || blank.heightMm === null || blank.thicknessMm === null) words.push('The size of the blank.');
+  if (blank.widthMm === null || blank.heightMm === null || blank.thicknessMm === null)
+    words.push('The size of the blank.');
   if (blank.stockId === null && blank.source === 'shop') words.push('What the blank is made of.');
   if (form.quantity === null) words.push('How many pieces.');
   return words;

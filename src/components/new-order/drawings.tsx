@@ -6,7 +6,12 @@ const LINE = { fill: 'none', stroke: 'currentColor', strokeWidth: 1.5 } as const
 
 function Drawing({ children, wide = false }: { children: ReactNode; wide?: boolean }) {
   return (
-    <svg viewBox={wide ? '0 0 96 40' : '0 0 48 32'} aria-hidden="true" className={wide ? 'h-[48px] w-full text-ink' : 'h-[36px] w-[54px] text-ink'} preserveAspectRatio="xMinYMid meet">
+    <svg
+      viewBox={wide ? '0 0 96 40' : '0 0 48 32'}
+      aria-hidden="true"
+      className={wide ? 'h-[48px] w-full text-ink' : 'h-[36px] w-[54px] text-ink'}
+      preserveAspectRatio="xMinYMid meet"
+    >
       {children}
     </svg>
   );
@@ -17,7 +22,9 @@ export function OutlineDrawing({ outline }: { outline: Blank['outline'] }) {
     <Drawing>
       {outline === 'rectangle' && <rect x="3" y="4" width="42" height="24" {...LINE} />}
       {outline === 'round' && <circle cx="24" cy="16" r="13" {...LINE} />}
-      {outline === 'own' && <path d="M6 24 C2 10 16 2 24 8 S44 4 44 16 S32 30 24 25 S9 31 6 24 Z" {...LINE} />}
+      {outline === 'own' && (
+        <path d="M6 24 C2 10 16 2 24 8 S44 4 44 16 S32 30 24 25 S9 31 6 24 Z" {...LINE} />
+      )}
     </Drawing>
   );
 }
@@ -47,7 +54,9 @@ export function TreatmentDrawing({ treatment }: { treatment: Treatment }) {
           <path d="M30 27 C32 20 38 14 46 10 M46 23 C48 16 54 11 62 8 M34 26 C42 30 50 32 56 31 M52 21 C58 24 66 25 72 23" />
         </g>
       )}
-      {treatment === 'solid' && <path d={`${LEAF} ${RIB} C62 20 34 28 8 32 Z`} fill="currentColor" fillRule="evenodd" />}
+      {treatment === 'solid' && (
+        <path d={`${LEAF} ${RIB} C62 20 34 28 8 32 Z`} fill="currentColor" fillRule="evenodd" />
+      )}
       {treatment === 'halftone' && <Dots />}
       {treatment === 'continuous' && <Greys />}
     </Drawing>

@@ -23,14 +23,29 @@ const EXPORT_AS: Record<string, string> = {
 export function refusalBeforeUpload(file: Pick<File, 'name' | 'size'>): Problem | null {
   const ending = /\.([a-z0-9]+)$/i.exec(file.name)?.[1]?.toLowerCase() ?? '';
   if (file.size === 0) {
-    return refusal('empty-file', 'This file is empty.', 'Nothing was saved in it.', 'Export it again and drop it here.');
+    return refusal(
+      'empty-file',
+      'This file is empty.',
+      'Nothing was saved in it.',
+      'Export it again and drop it here.',
+    );
   }
   if (ending in EXPORT_AS) {
-    return refusal('unsupported-format', `A ${ending.toUpperCase()} file cannot be engraved as it is.`, 'We take drawings as SVG and pictures as PNG, TIFF, JPEG, WebP, AVIF, GIF or BMP.', EXPORT_AS[ending]);
+    return refusal(
+      'unsupported-format',
+      `A ${ending.toUpperCase()} file cannot be engraved as it is.`,
+      'We take drawings as SVG and pictures as PNG, TIFF, JPEG, WebP, AVIF, GIF or BMP.',
+      EXPORT_AS[ending],
+    );
   }
   if (file.size > LIMITS.maxBytes) {
     const size = `${(file.size / MIB).toFixed(0)} MiB`;
-    return refusal('too-large', 'This file is too large.', `It has ${size}; up to ${LIMITS.maxBytes / MIB} MiB are taken.`, 'Export it at the size at which it will be engraved and drop it here.');
+    return refusal(
+      'too-large',
+      'This file is too large.',
+      `It has ${size}; up to ${LIMITS.maxBytes / MIB} MiB are taken.`,
+      'Export it at the size at which it will be engraved and drop it here.',
+    );
   }
   return null;
 }

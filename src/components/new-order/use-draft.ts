@@ -20,7 +20,11 @@ export interface Draft {
 }
 
 /** Opens a draft at the first upload or field, and keeps every change on the server, one after another. */
-export function useDraft(form: UseFormReturn<DraftForm>, initial: OrderView | null, customerId: number | null): Draft {
+export function useDraft(
+  form: UseFormReturn<DraftForm>,
+  initial: OrderView | null,
+  customerId: number | null,
+): Draft {
   const queries = useQueryClient();
   const [order, setOrder] = useState(initial);
   const [keeping, setKeeping] = useState<Draft['keeping']>('kept');
@@ -41,7 +45,9 @@ export function useDraft(form: UseFormReturn<DraftForm>, initial: OrderView | nu
   const save = useCallback(async (): Promise<OrderView> => {
     const patch = patchOf(form.getValues());
     if (!latest.current) {
-      const answer = await call('POST /api/orders', { body: { ...patch, ...(customerId ? { customerId } : {}) } });
+      const answer = await call('POST /api/orders', {
+        body: { ...patch, ...(customerId ? { customerId } : {}) },
+      });
       take(answer.order);
       window.history.replaceState(null, '', `/orders/new?draft=${answer.order.number}`);
       return answer.order;
@@ -79,12 +85,19 @@ export function useDraft(form: UseFormReturn<DraftForm>, initial: OrderView | nu
 }
 
 /** One change with the version last seen; when something else was faster (an upload, a task), once more with the new one. */
-async function patchOnce(seen: OrderView, patch: ReturnType<typeof patchOf>, take: (order: OrderView) => void): Promise<OrderView> {
+async function patchOnce(
+  seen: OrderView,
+  patch: ReturnType<typeof patchOf>,
+  take: (order: OrderView) => void,
+): Promise<OrderView> {
   const params = { number: seen.number };
   const send = async (order: OrderView) => {
     const fields = changesSince(patch, order.fields);
     if (Object.keys(fields).length === 0) return order;
-    const answer = await call('PATCH /api/orders/:number', { params, body: { version: order.version, fields } });
+    const answer = await call('PATCH /api/orders/:number', {
+      params,
+      body: { version: order.version, fields },
+    });
     take(answer.order);
     return answer.order;
   };

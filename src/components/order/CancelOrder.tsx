@@ -14,15 +14,24 @@ export function CancelOrder({ order }: { order: OrderView }) {
       <Button kind="stop" onPress={() => setAsking(true)}>
         Cancel order
       </Button>
-      <Dialog title={`Cancel ${order.number}`} isOpen={asking} onClose={() => setAsking(false)} role="alertdialog">
-        <p className="text-15">Nothing is engraved, and the order stays in your list as cancelled. This cannot be taken back.</p>
+      <Dialog
+        title={`Cancel ${order.number}`}
+        isOpen={asking}
+        onClose={() => setAsking(false)}
+        role="alertdialog"
+      >
+        <p className="text-15">
+          Nothing is engraved, and the order stays in your list as cancelled. This cannot be taken back.
+        </p>
         <WordsForm
           label="Why"
           button="Cancel order"
           kind="stop"
           error={cancel.error}
           isPending={cancel.isPending}
-          onSend={(reason) => cancel.mutate({ event: 'cancel', reason }, { onSuccess: () => setAsking(false) })}
+          onSend={(reason) =>
+            cancel.mutate({ event: 'cancel', reason }, { onSuccess: () => setAsking(false) })
+          }
         />
       </Dialog>
     </>

@@ -10,11 +10,16 @@ export function History({ entries }: { entries: OrderView['history'] }) {
       <h2 className="mb-4">History</h2>
       <ol className="flex flex-col text-15">
         {newestFirst.map((entry, index) => (
-          <li key={`${entry.at}-${index}`} className="grid gap-x-6 border-b border-hair py-2 md:grid-cols-[13em_12em_1fr]">
+          <li
+            key={`${entry.at}-${index}`}
+            className="grid gap-x-6 border-b border-hair py-2 md:grid-cols-[13em_12em_1fr]"
+          >
             <time dateTime={entry.at} className="text-quiet">
               {timeWords(entry.at)}
             </time>
-            <span className="font-semibold">{entry.to ? STATE_WORDS[entry.to] : sentenceCase(entry.event)}</span>
+            <span className="font-semibold">
+              {entry.to ? STATE_WORDS[entry.to] : sentenceCase(entry.event)}
+            </span>
             <span className="min-w-0 break-words">{[entry.by, entry.words].filter(Boolean).join(': ')}</span>
           </li>
         ))}
@@ -23,4 +28,5 @@ export function History({ entries }: { entries: OrderView['history'] }) {
   );
 }
 
-const sentenceCase = (event: string): string => event.charAt(0).toUpperCase() + event.slice(1).replaceAll('-', ' ');
+const sentenceCase = (event: string): string =>
+  event.charAt(0).toUpperCase() + event.slice(1).replaceAll('-', ' ');

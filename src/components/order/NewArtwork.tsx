@@ -29,8 +29,14 @@ export function NewArtwork({ order }: { order: OrderView }) {
   return (
     <div className="flex max-w-form flex-col gap-2">
       {problem && <ProblemNotice problem={problem} />}
-      {progress !== null ? <ProgressRule progress={progress} words="Sending the new artwork" /> : <FileButton words="Send new artwork" onFile={send} />}
-      {VOIDS.some((state) => state === order.state) && <p className="text-13 text-quiet">New artwork is prepared anew and needs a new proof.</p>}
+      {progress !== null ? (
+        <ProgressRule progress={progress} words="Sending the new artwork" />
+      ) : (
+        <FileButton words="Send new artwork" onFile={send} />
+      )}
+      {VOIDS.some((state) => state === order.state) && (
+        <p className="text-13 text-quiet">New artwork is prepared anew and needs a new proof.</p>
+      )}
     </div>
   );
 }

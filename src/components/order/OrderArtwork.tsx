@@ -24,8 +24,16 @@ export function OrderArtwork({ order, tasks }: Props) {
         </a>
         <span className="text-quiet">, version {artwork.version}</span>
       </p>
-      {working && <ProgressRule progress={live.state === 'running' ? live.progress : null} words={taskWords(live)} mayLeave />}
-      {artwork.task.state === 'failed' && <Notice title="The check did not finish." detail={artwork.task.problem} />}
+      {working && (
+        <ProgressRule
+          progress={live.state === 'running' ? live.progress : null}
+          words={taskWords(live)}
+          mayLeave
+        />
+      )}
+      {artwork.task.state === 'failed' && (
+        <Notice title="The check did not finish." detail={artwork.task.problem} />
+      )}
     </>
   );
   const { check } = artwork;

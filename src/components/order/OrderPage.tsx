@@ -58,7 +58,11 @@ function Order({ initial, role }: Props) {
           </div>
         )}
       </header>
-      {proof ? <Proof order={order} proof={proof} role={role} /> : <OrderArtwork order={order} tasks={tasks} />}
+      {proof ? (
+        <Proof order={order} proof={proof} role={role} />
+      ) : (
+        <OrderArtwork order={order} tasks={tasks} />
+      )}
       <section aria-label="What was ordered" className="grid gap-10 border-t border-hair pt-6 lg:grid-cols-2">
         <div>
           <h2 className="mb-4">What was ordered</h2>

@@ -24,7 +24,14 @@ export function Proof({ order, proof, role }: Props) {
   const { settings } = report;
   return (
     <section aria-label="Proof" className="grid gap-6 lg:grid-cols-[minmax(0,1fr)_300px]">
-      <Plate src={proof.forecastUrl} alt={`Burn forecast of ${order.fields.title || order.number}`} widthMm={settings.widthMm} heightMm={settings.heightMm} linePitchMm={settings.scan.linePitchMm} laidDown />
+      <Plate
+        src={proof.forecastUrl}
+        alt={`Burn forecast of ${order.fields.title || order.number}`}
+        widthMm={settings.widthMm}
+        heightMm={settings.heightMm}
+        linePitchMm={settings.scan.linePitchMm}
+        laidDown
+      />
       <aside className="flex flex-col gap-6" aria-label="Decision">
         <div className="flex flex-col gap-2">
           <h2>Proof</h2>
@@ -39,7 +46,8 @@ export function Proof({ order, proof, role }: Props) {
             , shade <strong className="font-semibold">{shadeWords(order.fields.shadeLstar)}</strong>.
           </p>
           <p className="text-13 text-quiet">
-            This is a forecast, computed from the very file that will be run. Wood differs from board to board, so the brown will differ a little.
+            This is a forecast, computed from the very file that will be run. Wood differs from board to
+            board, so the brown will differ a little.
           </p>
           <TrueSize src={proof.forecastUrl} widthMm={settings.widthMm} heightMm={settings.heightMm} />
         </div>
@@ -65,11 +73,19 @@ function Decision({ order, proof, role }: Props) {
   return (
     <div className="flex flex-col gap-4 border-t border-hair pt-6">
       {approve.error && <ProblemNotice problem={problemOf(approve.error)} />}
-      <Button kind="filled" isDisabled={approve.isPending} onPress={() => approve.mutate({ event: 'approve', manifestSha256: proof.manifestSha256, inPerson: null })}>
+      <Button
+        kind="filled"
+        isDisabled={approve.isPending}
+        onPress={() =>
+          approve.mutate({ event: 'approve', manifestSha256: proof.manifestSha256, inPerson: null })
+        }
+      >
         Approve proof
       </Button>
       <Button onPress={() => setAsking(true)}>Ask for changes</Button>
-      <p className="text-13 text-quiet">Your approval is for exactly this file. If anything in it changes, we ask again.</p>
+      <p className="text-13 text-quiet">
+        Your approval is for exactly this file. If anything in it changes, we ask again.
+      </p>
       <Dialog title="Ask for changes" isOpen={asking} onClose={() => setAsking(false)}>
         <WordsForm
           label="What should be different"
@@ -77,7 +93,9 @@ function Decision({ order, proof, role }: Props) {
           button="Send to the shop"
           error={changes.error}
           isPending={changes.isPending}
-          onSend={(words) => changes.mutate({ event: 'ask-for-changes', words }, { onSuccess: () => setAsking(false) })}
+          onSend={(words) =>
+            changes.mutate({ event: 'ask-for-changes', words }, { onSuccess: () => setAsking(false) })
+          }
         />
       </Dialog>
     </div>

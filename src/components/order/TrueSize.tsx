@@ -21,7 +21,11 @@ export function TrueSize({ src, widthMm, heightMm }: Props) {
   return (
     <div>
       <Button onPress={open}>See true size</Button>
-      <Dialog title={scale === null ? 'How big is your screen?' : 'True size'} isOpen={isOpen} onClose={() => setOpen(false)}>
+      <Dialog
+        title={scale === null ? 'How big is your screen?' : 'True size'}
+        isOpen={isOpen}
+        onClose={() => setOpen(false)}
+      >
         {scale === null ? (
           <CardMeasure
             onDone={(pxPerMm) => {
@@ -31,8 +35,18 @@ export function TrueSize({ src, widthMm, heightMm }: Props) {
           />
         ) : (
           <>
-            <div className="max-h-[70vh] overflow-auto bg-well" tabIndex={0} role="region" aria-label="Forecast at true size">
-              <img src={src} alt="The burn forecast at true size" className="max-w-none" style={{ width: widthMm * scale, height: heightMm * scale }} />
+            <div
+              className="max-h-[70vh] overflow-auto bg-well"
+              tabIndex={0}
+              role="region"
+              aria-label="Forecast at true size"
+            >
+              <img
+                src={src}
+                alt="The burn forecast at true size"
+                className="max-w-none"
+                style={{ width: widthMm * scale, height: heightMm * scale }}
+              />
             </div>
             <div className="flex flex-wrap gap-2">
               <Button onPress={() => setScale(null)}>Measure the screen again</Button>
@@ -45,15 +59,32 @@ export function TrueSize({ src, widthMm, heightMm }: Props) {
   );
 }
 
-function CardMeasure({ onDone }: { onDone: (pxPerMm: number) => void }) {
+/** A drawing of a bank card that is made as wide as a real one: what a screen's pixels measure. */
+export function CardMeasure({ onDone }: { onDone: (pxPerMm: number) => void }) {
   const [pxPerMm, setPxPerMm] = useState(CLAIMED_PX_PER_MM);
   return (
     <>
-      <p className="text-15">Hold a bank card against the screen, and slide until the drawing is as wide as the card. It is asked only once.</p>
+      <p className="text-15">
+        Hold a bank card against the screen, and slide until the drawing is as wide as the card. It is asked
+        only once.
+      </p>
       <div className="overflow-hidden">
-        <div className="rounded border border-ink" style={{ width: CARD_WIDTH_MM * pxPerMm, height: CARD_HEIGHT_MM * pxPerMm }} aria-hidden="true" />
+        <div
+          className="rounded border border-ink"
+          style={{ width: CARD_WIDTH_MM * pxPerMm, height: CARD_HEIGHT_MM * pxPerMm }}
+          aria-hidden="true"
+        />
       </div>
-      <Slider label="Width of the drawing" value={Math.round(CARD_WIDTH_MM * pxPerMm)} onChange={(px) => setPxPerMm(px / CARD_WIDTH_MM)} min={180} max={900} step={1} unit="px" decimals={0} />
+      <Slider
+        label="Width of the drawing"
+        value={Math.round(CARD_WIDTH_MM * pxPerMm)}
+        onChange={(px) => setPxPerMm(px / CARD_WIDTH_MM)}
+        min={180}
+        max={900}
+        step={1}
+        unit="px"
+        decimals={0}
+      />
       <div>
         <Button onPress={() => onDone(pxPerMm)}>It matches</Button>
       </div>

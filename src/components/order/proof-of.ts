@@ -11,7 +11,14 @@ export interface ProofFacts {
   manifestSha256: string;
 }
 
-const SHOWN: readonly OrderState[] = ['proof-sent', 'approved', 'released', 'running', 'finished', 'handed-over'];
+const SHOWN: readonly OrderState[] = [
+  'proof-sent',
+  'approved',
+  'released',
+  'running',
+  'finished',
+  'handed-over',
+];
 
 /** What the customer approves: the passed preparation with its forecast; null until a proof was sent. */
 export function proofOf(order: OrderView): ProofFacts | null {
