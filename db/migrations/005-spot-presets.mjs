@@ -1,8 +1,9 @@
 /** @param {import('knex').Knex} knex */
 export async function up(knex) {
+  // autoincrement: an old preparation names its preset by id, which no later preset may take over.
   await knex.schema.raw(`
     create table spot_presets (
-      id integer primary key,
+      id integer primary key autoincrement,
       machine_id integer not null references machines (id) on delete cascade,
       name text not null collate nocase,
       width_mm real not null,
