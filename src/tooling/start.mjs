@@ -62,19 +62,22 @@ for (const signal of ['SIGTERM', 'SIGINT']) {
 
 const address = `http://${process.env.HOST === '0.0.0.0' ? 'localhost' : process.env.HOST.replace('127.0.0.1', 'localhost')}:${process.env.PORT}`;
 
+/** Waits for the site's own word that it is well; a refusal is said once, with its reason in the log above it. */
 async function waitUntilHealthy() {
   const probe = `http://127.0.0.1:${process.env.PORT}/health`;
-  for (let attempt = 0; attempt < 100; attempt += 1) {
+  let problem = '';
+  for (let attempt = 0; attempt < 20; attempt += 1) {
     try {
       const response = await fetch(probe);
-      const health = await response.json();
-      if (health.ok) return;
-      if (attempt === 99) refuse(`The site runs but is not well: ${JSON.stringify(health)}`);
+      const text = await response.text();
+      if (response.ok && JSON.parse(text).ok) return;
+      problem = `it answers ${response.status}: ${text.slice(0, 300)}`;
     } catch (error) {
-      if (attempt === 99) refuse(`The site does not answer: ${error.message}`);
+      problem = error.message;
     }
-    await new Promise((done) => setTimeout(done, 100));
+    await new Promise((done) => setTimeout(done, 250));
   }
+  refuse(`The site does not come up well: ${problem}`);
 }
 
 await waitUntilHealthy();

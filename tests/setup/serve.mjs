@@ -1,5 +1,6 @@
 // Starts the built site on a free port with a data folder of its own; for browser tests and the proof of `npm start`.
 import { spawn, spawnSync } from 'node:child_process';
+import { randomBytes } from 'node:crypto';
 import { mkdtempSync, rmSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
@@ -37,7 +38,14 @@ export async function serve(env = {}) {
   const root = path.resolve(import.meta.dirname, '../..');
   const dataDir = env.DATA_DIR ?? mkdtempSync(path.join(tmpdir(), 'umberline-data-'));
   const port = await freePort();
-  const childEnv = { ...process.env, NODE_ENV: 'development', ...env, PORT: String(port), DATA_DIR: dataDir };
+  const childEnv = {
+    ...process.env,
+    NODE_ENV: 'development',
+    SESSION_SECRET: `development-${randomBytes(32).toString('base64url')}`,
+    ...env,
+    PORT: String(port),
+    DATA_DIR: dataDir,
+  };
   const migrated = spawnSync(process.execPath, ['src/tooling/migrate.mjs'], { cwd: root, env: childEnv, encoding: 'utf8' });
   if (migrated.status !== 0) throw new Error(`the database could not be made: ${migrated.stderr}`);
   const child = spawn(process.execPath, ['src/tooling/start.mjs'], { cwd: root, env: childEnv, stdio: ['ignore', 'pipe', 'pipe'] });
