@@ -3,6 +3,7 @@ import path from 'node:path';
 import { expect } from 'vitest';
 import { diffuse } from '../../src/lib/prepare/screen/diffuse';
 import { FLOYD_STEINBERG, JARVIS_JUDICE_NINKE, STUCKI, type Kernel } from '../../src/lib/prepare/screen/kernels';
+import { screenWhole } from '../../src/lib/prepare/screen/screener';
 import { referenceCheck } from './check';
 
 interface GoldenCase {
@@ -27,7 +28,7 @@ function inputOf(name: string): { width: number; burn: Float64Array } {
 function dotsOf(kernel: Kernel, { serpentine, input }: GoldenCase): string[] {
   const { width, burn } = inputOf(input);
   const screener = diffuse(kernel, width, serpentine ? 'serpentine' : 'left-to-right');
-  const dots = [...screener.push(burn), ...screener.end()];
+  const dots = [...screenWhole(screener, burn)];
   return Array.from({ length: dots.length / width }, (_, row) => dots.slice(row * width, (row + 1) * width).join(''));
 }
 

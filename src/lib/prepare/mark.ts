@@ -5,7 +5,7 @@ import type { ScanFrame } from './resample/scan-frame';
 import { screen } from './screen/screen';
 import type { Settings } from './settings';
 import { burnTable, untouchedLuminance } from './tone/burn-table';
-import { tone } from './tone/tone';
+import { toner } from './tone/tone';
 import type { PipelineTools } from './tools';
 import type { Stopwatch } from './stopwatch';
 
@@ -49,24 +49,22 @@ export async function mark(
     outside: untouchedLuminance(settings),
   } as const;
   const bands = resample(artwork, frame, placement, tools);
-  const table = burnTable(settings);
+  const toned = toner(burnTable(settings));
   const screener = screen(settings, width);
   const next = () => stopwatch.time('resample', () => bands.next());
-  let data: Uint8Array | null = null;
+  const data = new Uint8Array(width * height);
   let done = 0;
-  const keep = (rows: Uint8Array): void => {
-    if (settings.mirror) reverseRows(rows, width);
-    data ??= new Uint8Array(width * height);
-    data.set(rows, done);
-    done += rows.length;
-    onProgress(done / (width * height));
+  const keep = (until: number): void => {
+    if (settings.mirror) reverseRows(data.subarray(done, until), width);
+    done = until;
+    onProgress(done / data.length);
   };
   for (let band = await next(); !band.done; band = await next()) {
     const lightness = band.value;
-    const burn = stopwatch.timeNow('tone', () => tone(lightness, table));
-    stopwatch.timeNow('screen', () => keep(screener.push(burn.data)));
+    const burn = stopwatch.timeNow('tone', () => toned(lightness));
+    stopwatch.timeNow('screen', () => keep(screener.push(burn.data, data, done)));
   }
-  stopwatch.timeNow('screen', () => keep(screener.end()));
+  stopwatch.timeNow('screen', () => keep(screener.end(data, done)));
   const kind = settings.treatment === 'continuous' ? 'levels' : 'mask';
-  return { kind, width, height, data: data ?? new Uint8Array(width * height), pitchXMm, pitchYMm };
+  return { kind, width, height, data, pitchXMm, pitchYMm };
 }

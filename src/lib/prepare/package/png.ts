@@ -68,7 +68,7 @@ export async function writePng(marks: MarkRaster): Promise<Uint8Array> {
   const { width, height, pitchXMm, pitchYMm } = marks;
   const dots = marks.kind === 'mask';
   const rows = dots ? packBits(marks, Math.ceil(width / 8), 1) : filteredRows(width, height, marks.data);
-  return assemble([header(width, height, dots ? 1 : 8, 0), physicalSize(pitchXMm, pitchYMm)], rows, 6);
+  return assemble([header(width, height, dots ? 1 : 8, 0), physicalSize(pitchXMm, pitchYMm)], rows, 4);
 }
 
 /**

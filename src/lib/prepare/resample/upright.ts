@@ -20,31 +20,29 @@ export type RowReader = (count: number) => Uint16Array;
 const clampSample = (value: number): number =>
   value <= 0 ? 0 : value >= FULL_LUMINANCE ? FULL_LUMINANCE : value + 0.5;
 
-/** One row brought to the asked columns; `values` turns a sample into the light that is averaged. */
-function resampleRow(
-  grey: Grey,
-  row: number,
-  axis: AxisWeights,
-  values: Float32Array,
-  into: Float32Array,
-): void {
-  const { taps, first, shares } = axis;
-  const { data } = grey;
-  const start = row * grey.width;
+/** One row of a picture in the light that is averaged; `values` says what a sample counts. */
+function lightRow({ width, data }: Grey, row: number, values: Float32Array | null, into: Float32Array): void {
+  const start = row * width;
+  if (values === null) into.set(data.subarray(start, start + width));
+  else for (let x = 0; x < width; x++) into[x] = values[data[start + x]];
+}
+
+/** One row brought to the asked columns. */
+function resampleRow(line: Float32Array, { taps, first, shares }: AxisWeights, into: Float32Array): void {
   if (taps === 4) {
     for (let i = 0, s = 0; i < into.length; i++, s += 4) {
-      const at = start + first[i];
+      const at = first[i];
       into[i] =
-        values[data[at]] * shares[s] +
-        values[data[at + 1]] * shares[s + 1] +
-        values[data[at + 2]] * shares[s + 2] +
-        values[data[at + 3]] * shares[s + 3];
+        line[at] * shares[s] +
+        line[at + 1] * shares[s + 1] +
+        line[at + 2] * shares[s + 2] +
+        line[at + 3] * shares[s + 3];
     }
     return;
   }
   for (let i = 0, s = 0; i < into.length; i++) {
     let sum = 0;
-    for (let at = start + first[i], end = at + taps; at < end; at++, s++) sum += values[data[at]] * shares[s];
+    for (let at = first[i], end = at + taps; at < end; at++, s++) sum += line[at] * shares[s];
     into[i] = sum;
   }
 }
@@ -58,8 +56,9 @@ function combineFour(
 ): void {
   const [a, b, c, d] = rows;
   const [wa, wb, wc, wd] = [shares[s], shares[s + 1], shares[s + 2], shares[s + 3]];
-  for (let i = 0; i < a.length; i++) {
-    into[start + i] = clampSample(a[i] * wa + b[i] * wb + c[i] * wc + d[i] * wd);
+  for (let i = 0, to = start; i < a.length; i++, to++) {
+    const value = a[i] * wa + b[i] * wb + c[i] * wc + d[i] * wd;
+    into[to] = value <= 0 ? 0 : value >= FULL_LUMINANCE ? FULL_LUMINANCE : (value + 0.5) | 0;
   }
 }
 
@@ -77,21 +76,17 @@ function combine(
     const row = rows[tap];
     if (share !== 0) for (let i = 0; i < sum.length; i++) sum[i] += row[i] * share;
   }
-  for (let i = 0; i < sum.length; i++) into[start + i] = clampSample(sum[i]);
+  for (let i = 0; i < sum.length; i++) {
+    const value = sum[i];
+    into[start + i] = value <= 0 ? 0 : value >= FULL_LUMINANCE ? FULL_LUMINANCE : (value + 0.5) | 0;
+  }
 }
 
-const scaled: { linear: Float32Array | null; coverage: Float32Array | null } = {
-  linear: null,
-  coverage: null,
-};
+let scaledCodes: Float32Array | null = null;
 
-/** What a sample counts in the asked light, 0–65535. */
-function lightTable(light: Light): Float32Array {
-  scaled[light] ??=
-    light === 'linear'
-      ? Float32Array.from({ length: FULL_LUMINANCE + 1 }, (_, y) => y)
-      : codeValues().map((code) => code * FULL_LUMINANCE);
-  return scaled[light];
+/** What a sample counts in code values, 0–65535. */
+function codeTable(): Float32Array {
+  return (scaledCodes ??= codeValues().map((code) => code * FULL_LUMINANCE));
 }
 
 /** Code values 0–65535 brought back to linear luminance, in place. */
@@ -114,16 +109,19 @@ function makeLinear(samples: Uint16Array): void {
 export function uprightReader(grey: Grey, columns: number, rows: number, light: Light): RowReader {
   const across = axisWeights(grey.width, columns);
   const down = axisWeights(grey.height, rows);
-  const values = lightTable(light);
+  const values = light === 'coverage' ? codeTable() : null;
   const identity = grey.width === columns && grey.height === rows;
   const ring = Array.from({ length: down.taps }, () => new Float32Array(identity ? 0 : columns));
+  const line = new Float32Array(grey.width);
   const sum = new Float64Array(identity || down.taps === 4 ? 0 : columns);
   let done = 0;
   let next = 0;
   let band = new Uint16Array(0);
   const rowInto = (row: number, start: number): void => {
-    for (; next < down.first[row] + down.taps; next++)
-      resampleRow(grey, next, across, values, ring[next % down.taps]);
+    for (; next < down.first[row] + down.taps; next++) {
+      lightRow(grey, next, values, line);
+      resampleRow(line, across, ring[next % down.taps]);
+    }
     const sources = ring.map((_, tap) => ring[(down.first[row] + tap) % down.taps]);
     if (down.taps === 4) combineFour(sources, down.shares, row * 4, band, start);
     else combine(sources, down.shares, row * down.taps, sum, band, start);

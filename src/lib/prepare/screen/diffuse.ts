@@ -78,21 +78,20 @@ export function diffuse(
     row++;
   };
   return {
-    push(burn) {
-      const given = burn.length / width;
-      const dots = new Uint8Array(Math.max(0, rows.count + given - (depth - 1)) * width);
-      for (let i = 0, at = 0; i < given; i++) {
-        rows.load(burn, i * width);
+    push(burn, dots, at) {
+      let to = at;
+      for (let from = 0; from < burn.length; from += width) {
+        rows.load(burn, from);
         if (rows.count < depth) continue;
-        finish(dots, at);
-        at += width;
+        finish(dots, to);
+        to += width;
       }
-      return dots;
+      return to;
     },
-    end() {
-      const dots = new Uint8Array(rows.count * width);
-      for (let at = 0; rows.count > 0; at += width) finish(dots, at);
-      return dots;
+    end(dots, at) {
+      let to = at;
+      for (; rows.count > 0; to += width) finish(dots, to);
+      return to;
     },
   };
 }

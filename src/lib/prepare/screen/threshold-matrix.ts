@@ -18,14 +18,14 @@ export function compareWith({ size, ranks }: Ranks, width: number): Screener {
   const thresholds = Float32Array.from(ranks, (rank) => (rank + 0.5) / (size * size));
   let row = 0;
   return {
-    push(burn) {
-      const dots = new Uint8Array(burn.length);
-      for (let at = 0; at < burn.length; row++) {
+    push(burn, dots, at) {
+      for (let from = 0; from < burn.length; row++) {
         const line = (row % size) * size;
-        for (let x = 0; x < width; x++, at++) dots[at] = burn[at] > thresholds[line + (x % size)] ? 1 : 0;
+        for (let x = 0; x < width; x++, from++)
+          dots[at + from] = burn[from] > thresholds[line + (x % size)] ? 1 : 0;
       }
-      return dots;
+      return at + burn.length;
     },
-    end: () => new Uint8Array(0),
+    end: (_dots, at) => at,
   };
 }

@@ -13,11 +13,10 @@ import type { Screener } from './screener';
 export function twoLevels(dividingLstar: number): Screener {
   const level = 1 - linearToSrgb(luminanceOfLstar(dividingLstar));
   return {
-    push(burn) {
-      const dots = new Uint8Array(burn.length);
-      for (let i = 0; i < burn.length; i++) dots[i] = burn[i] > level ? 1 : 0;
-      return dots;
+    push(burn, dots, at) {
+      for (let i = 0; i < burn.length; i++) dots[at + i] = burn[i] > level ? 1 : 0;
+      return at + burn.length;
     },
-    end: () => new Uint8Array(0),
+    end: (_dots, at) => at,
   };
 }
