@@ -25,5 +25,12 @@ export default defineConfig({
     },
   },
   devToolbar: { enabled: false },
-  vite: { plugins: [nodeWorker()], ssr: { noExternal: ['zod'] } },
+  // Hashes of the islands' inline scripts; the middleware builds the page's policy from them.
+  experimental: { csp: true },
+  vite: {
+    plugins: [nodeWorker()],
+    // Small fonts would otherwise become data: addresses, which the policy refuses.
+    build: { assetsInlineLimit: 0 },
+    ssr: { noExternal: ['zod'] },
+  },
 });
