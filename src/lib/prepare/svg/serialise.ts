@@ -21,7 +21,7 @@ function startTag(node: SvgNode, style: Style): string {
   return `<${node.name}${written.join('')}`;
 }
 
-function write(node: SvgNode, styles: Map<SvgNode, Style>, parts: string[]): void {
+function write(node: SvgNode, styles: ReadonlyMap<SvgNode, Style>, parts: string[]): void {
   parts.push(startTag(node, styles.get(node) ?? {}));
   if (node.children.length === 0) {
     parts.push('/>');
@@ -33,6 +33,19 @@ function write(node: SvgNode, styles: Map<SvgNode, Style>, parts: string[]): voi
     else write(child, styles, parts);
   }
   parts.push(`</${node.name}>`);
+}
+
+/**
+ * Text of a drawing that was sanitised, written and parsed before, with its root as it stands.
+ * @param root outer root as `serialise` wrote it; unchanged
+ * @param styles properties of its elements, which take the place of their style attributes
+ */
+export function serialiseTree(root: SvgNode, styles: ReadonlyMap<SvgNode, Style>): string {
+  const { width, height, viewBox } = root.attributes;
+  const parts = [rootTag(Number(width), Number(height), viewBox.split(' ').map(Number))];
+  for (const child of root.children) if (typeof child !== 'string') write(child, styles, parts);
+  parts.push('</svg>');
+  return parts.join('');
 }
 
 /**

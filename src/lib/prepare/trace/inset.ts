@@ -1,0 +1,59 @@
+import { spotArea, type Spot } from '../../machines/spot';
+import type { Point } from './curve';
+import {
+  EMPTY,
+  offsetByDisc,
+  signedArea,
+  simplify,
+  subtract,
+  sweepByRectangle,
+  unite,
+  type Region,
+} from './region';
+
+/** Arcs are drawn to this share of half the line extent. */
+const ARC_TOLERANCE = 0.01;
+/** Shares of the line extent by which outlines are drawn in, where an area is too narrow for the one before. */
+const SHARES = [1, 0.75, 0.5, 0.25, 0.08];
+/** What a drawn-in outline leaves uncovered counts from this share of the spot's area; corners of 60° and wider leave less. */
+const LEFTOVER_SHARE = 0.25;
+
+const scale = (region: Region, x: number, y: number): Region =>
+  region.map((path) => path.map((p): Point => [p[0] * x, p[1] * y]));
+
+/** The points at which a spot, made smaller by a share, lies wholly within a region. */
+export function erode(region: Region, spot: Spot, share = 1): Region {
+  const [w, h] = [(spot.widthMm / 2) * share, (spot.heightMm / 2) * share];
+  if (spot.shape === 'rectangle') return subtract(region, sweepByRectangle(region, w, h));
+  return scale(offsetByDisc(scale(region, 1 / w, 1 / h), -1, ARC_TOLERANCE), w, h);
+}
+
+/** What a spot, made smaller by a share, covers when its centre takes every point of a region. */
+export function dilate(region: Region, spot: Spot, share = 1): Region {
+  const [w, h] = [(spot.widthMm / 2) * share, (spot.heightMm / 2) * share];
+  if (spot.shape === 'rectangle') return unite(region, sweepByRectangle(region, w, h));
+  return scale(offsetByDisc(scale(region, 1 / w, 1 / h), 1, ARC_TOLERANCE), w, h);
+}
+
+/**
+ * Lines along which a spot burns a region so that the burned edge keeps the region's edge: its outlines drawn in by half
+ * the line extent. Parts too narrow for that get outlines drawn in by less, so that they burn as one line and are not lost.
+ * Erosion by the spot (Minkowski difference); what an opening by the spot leaves goes round again with a smaller share.
+ * @param region mm; unchanged
+ * @param spot mm
+ * @returns closed outlines; empty for an empty region
+ */
+export function insetOutlines(region: Region, spot: Spot): Region {
+  const fine = Math.min(spot.widthMm, spot.heightMm) / 2;
+  const least = LEFTOVER_SHARE * spotArea(spot);
+  let outlines: Region = EMPTY;
+  let rest = region;
+  for (const share of SHARES) {
+    if (rest.length === 0) break;
+    const eroded = erode(rest, spot, share);
+    outlines = [...outlines, ...simplify(eroded, fine * ARC_TOLERANCE)];
+    const left = eroded.length === 0 ? rest : subtract(rest, dilate(eroded, spot, share));
+    rest = left.filter((path) => Math.abs(signedArea(path)) >= least);
+  }
+  return outlines;
+}
