@@ -40,11 +40,12 @@ export function LifeRule({ state, reached = null }: Props) {
             <span className={`max-md:hidden ${index === at ? 'font-semibold text-ink' : ''}`}>
               {STATE_WORDS[name]}
             </span>
-            <span
-              aria-hidden="true"
-              className={`w-px ${index <= at ? 'bg-ink' : 'bg-edge'}`}
-              style={{ height: index === at ? 12 : 6 }}
-            />
+            <span aria-hidden="true" className="flex h-3 items-end">
+              <span
+                className={`w-px ${index <= at ? 'bg-ink' : 'bg-edge'}`}
+                style={{ height: index === at ? 12 : 6 }}
+              />
+            </span>
           </li>
         ))}
       </ol>

@@ -1,10 +1,12 @@
 import { placeOnBlank, type Blank, type Placement } from '@/lib/orders/order';
+import { lstarOf } from './lightness-colour';
 
 interface Props {
   blank: Pick<Blank, 'outline' | 'widthMm' | 'heightMm' | 'grainDeg'>;
   placement: Placement;
   /** before quarter turns */
   artworkMm: { widthMm: number; heightMm: number };
+  /** the artwork as it is placed */
   pictureUrl?: string | null;
   /** colour of the stock's ground; without it the drawing is plain */
   groundColour?: string | null;
@@ -23,6 +25,9 @@ export function PlacementFigure({ blank, placement, artworkMm, pictureUrl, groun
     topMm < -0.005 ||
     leftMm + width > blank.widthMm + 0.005 ||
     topMm + height > blank.heightMm + 0.005;
+  const dark = groundColour ? lstarOf(groundColour) < 45 : false;
+  // On a stock's colour the lines are the same in both themes.
+  const ink = groundColour ? (dark ? '#ffffff' : '#342117') : 'var(--ink)';
   const words = `Blank of ${blank.widthMm} by ${blank.heightMm} mm, artwork ${round(leftMm)} mm from its left and ${round(topMm)} mm from its top edge`;
   const box = [-room, -room, blank.widthMm + room * 1.4, blank.heightMm + room * 1.4].join(' ');
   return (
@@ -37,27 +42,28 @@ export function PlacementFigure({ blank, placement, artworkMm, pictureUrl, groun
         fill="none"
         strokeWidth={unit}
       >
-        <Outline blank={blank} fill={groundColour ?? 'var(--sheet)'} />
-        {blank.grainDeg !== null && <Grain blank={blank} unit={unit} />}
-        <g transform={`translate(${leftMm} ${topMm})`}>
-          {pictureUrl && (
-            <image
-              href={pictureUrl}
-              width={artworkMm.widthMm}
-              height={artworkMm.heightMm}
-              preserveAspectRatio="none"
-              transform={`translate(${width / 2} ${height / 2}) rotate(${90 * placement.quarterTurns}) translate(${-artworkMm.widthMm / 2} ${-artworkMm.heightMm / 2})`}
-              style={{ mixBlendMode: 'multiply' }}
+        <g stroke={ink}>
+          <Outline blank={blank} fill={groundColour ?? 'var(--sheet)'} />
+          {blank.grainDeg !== null && <Grain blank={blank} unit={unit} />}
+          <g transform={`translate(${leftMm} ${topMm})`}>
+            {pictureUrl && (
+              <image
+                href={pictureUrl}
+                width={width}
+                height={height}
+                preserveAspectRatio="none"
+                style={dark ? { filter: 'invert(1)', mixBlendMode: 'screen' } : { mixBlendMode: 'multiply' }}
+              />
+            )}
+            <rect
+              width={width}
+              height={height}
+              stroke={outside ? 'var(--mark-stop)' : undefined}
+              strokeDasharray={`${4 * unit} ${3 * unit}`}
             />
-          )}
-          <rect
-            width={width}
-            height={height}
-            stroke={outside ? 'var(--stop)' : 'var(--ink)'}
-            strokeDasharray={`${4 * unit} ${3 * unit}`}
-          />
+          </g>
+          <Datum blank={blank} placement={placement} unit={unit} />
         </g>
-        <Datum blank={blank} placement={placement} unit={unit} />
         <Sizes blank={blank} unit={unit} />
       </svg>
       <figcaption className={`text-13 ${outside ? 'text-stop' : 'text-quiet'}`}>
@@ -106,7 +112,7 @@ function Datum({ blank, placement, unit }: { blank: Props['blank']; placement: P
   const y = datum === 'centre' ? blank.heightMm / 2 : datum.startsWith('bottom') ? blank.heightMm : 0;
   return (
     <g transform={`translate(${x} ${y})`}>
-      <circle r={4 * unit} fill="var(--sheet)" />
+      <circle r={4 * unit} />
       <path d={`M${-9 * unit} 0 H${9 * unit} M0 ${-9 * unit} V${9 * unit}`} />
     </g>
   );

@@ -1,4 +1,4 @@
-import type { CSSProperties, ReactNode } from 'react';
+import type { ReactNode } from 'react';
 import type { Finding } from '@/lib/preflight/finding';
 import { DimensionLine } from './DimensionLine';
 import { Places } from './Places';
@@ -12,8 +12,6 @@ interface Props {
   heightMm: number;
   unit?: 'mm' | 'in';
   linePitchMm?: number | null;
-  /** turns clockwise that the picture, but not the places, still lacks */
-  quarterTurns?: 0 | 1 | 2 | 3;
   findings?: readonly Finding[];
   lit?: string | null;
   onLit?: (findingId: string | null) => void;
@@ -32,7 +30,6 @@ export function Plate({
   heightMm,
   unit,
   linePitchMm,
-  quarterTurns = 0,
   findings = [],
   lit = null,
   onLit,
@@ -52,19 +49,10 @@ export function Plate({
             <DimensionLine lengthMm={heightMm} along="y" unit={unit} />
           </div>
           <div
-            className={`relative w-full overflow-hidden bg-[#fff] ${laidDown ? 'laid-down' : ''}`}
+            className={`w-full bg-[#fff] ${laidDown ? 'laid-down' : ''}`}
             style={{ aspectRatio: `${widthMm} / ${heightMm}` }}
           >
-            {src ? (
-              <img
-                src={src}
-                alt={alt}
-                className="absolute left-1/2 top-1/2 max-w-none"
-                style={turned(quarterTurns, aspect)}
-              />
-            ) : (
-              children
-            )}
+            {src ? <img src={src} alt={alt} className="block h-full w-full" /> : children}
           </div>
           <Places findings={findings} widthMm={widthMm} heightMm={heightMm} lit={lit} onLit={onLit} />
         </div>
@@ -76,14 +64,4 @@ export function Plate({
       </div>
     </div>
   );
-}
-
-/** The picture is as wide as it will lie: a quarter turn swaps its sides before it turns. */
-function turned(quarterTurns: number, aspect: number): CSSProperties {
-  const odd = quarterTurns % 2 === 1;
-  return {
-    width: `${odd ? 100 / aspect : 100}%`,
-    height: `${odd ? 100 * aspect : 100}%`,
-    transform: `translate(-50%, -50%) rotate(${90 * quarterTurns}deg)`,
-  };
 }

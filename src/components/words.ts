@@ -46,11 +46,21 @@ const TIME = new Intl.DateTimeFormat('en-GB', {
   minute: '2-digit',
   timeZone: 'UTC',
 });
+const SHORT_TIME = new Intl.DateTimeFormat('en-GB', {
+  day: 'numeric',
+  month: 'short',
+  hour: '2-digit',
+  minute: '2-digit',
+  timeZone: 'UTC',
+});
 
 /** 2026-12-01 is 1 December 2026. */
 export const dateWords = (isoDate: string): string => DATE.format(new Date(isoDate));
 /** 1 Dec 2026, 15:20 UTC: the same on server and client. */
 export const timeWords = (isoTime: string): string => `${TIME.format(new Date(isoTime))} UTC`;
+
+/** 1 Dec, 15:20. */
+export const shortTimeWords = (isoTime: string): string => SHORT_TIME.format(new Date(isoTime));
 
 /** 84 mm, 84.5 mm: a length without needless decimals. */
 export const mmWords = (mm: number): string => String(Number(mm.toFixed(2)));

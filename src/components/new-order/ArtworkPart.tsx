@@ -5,7 +5,7 @@ import { call } from '../api';
 import { Button } from '../Button';
 import { Notice, ProblemNotice } from '../Notice';
 import { ProgressRule } from '../ProgressRule';
-import { newestArtwork } from '../newest-artwork';
+import { newestArtwork, pictureOf } from '../newest-artwork';
 import { DropPlace, FileButton } from './DropPlace';
 import { SoundWidth } from './SoundWidth';
 import { taskWords } from './task-words';
@@ -19,21 +19,11 @@ interface Props {
   liveTask: TaskView | null;
   unit: 'mm' | 'in';
   sizeIsSaid: boolean;
-  quarterTurns: 0 | 1 | 2 | 3;
   onUseWidth: (widthMm: number) => void;
 }
 
 /** The artwork: dropped, sent, looked at; its findings in the margin. */
-export function ArtworkPart({
-  order,
-  upload,
-  take,
-  liveTask,
-  unit,
-  sizeIsSaid,
-  quarterTurns,
-  onUseWidth,
-}: Props) {
+export function ArtworkPart({ order, upload, take, liveTask, unit, sizeIsSaid, onUseWidth }: Props) {
   const artwork = order ? newestArtwork(order.artworks) : null;
   return (
     <section aria-label="Artwork" className="flex flex-col gap-4">
@@ -50,7 +40,7 @@ export function ArtworkPart({
             <FileButton words="Send other artwork" onFile={upload.start} />
           </div>
           <CheckedArtwork
-            {...{ artwork, take, liveTask, unit, sizeIsSaid, quarterTurns, onUseWidth }}
+            {...{ artwork, take, liveTask, unit, sizeIsSaid, onUseWidth }}
             orderNumber={order!.number}
             previewUrl={upload.previewUrl}
           />
@@ -93,7 +83,6 @@ function CheckedArtwork({
   liveTask,
   unit,
   sizeIsSaid,
-  quarterTurns,
   onUseWidth,
 }: CheckedProps) {
   const { check } = artwork;
@@ -154,12 +143,11 @@ function CheckedArtwork({
   }
   return (
     <AnnotatedPlate
-      src={artwork.pictureUrl ?? previewUrl}
+      src={pictureOf(artwork) ?? previewUrl}
       alt={`Your artwork ${artwork.fileName}`}
       widthMm={check.widthMm}
       heightMm={check.heightMm}
       unit={unit}
-      quarterTurns={quarterTurns}
       linePitchMm={check.sizeAcrossMm}
       findings={check.findings}
       before={status}

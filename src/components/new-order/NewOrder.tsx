@@ -6,7 +6,7 @@ import type { Role } from '@/lib/orders/state';
 import { call } from '../api';
 import { Island } from '../Island';
 import type { LengthUnit } from '../LengthField';
-import { newestArtwork } from '../newest-artwork';
+import { newestArtwork, pictureOf } from '../newest-artwork';
 import { PlacementFigure } from '../PlacementFigure';
 import { useOrder } from '../use-order';
 import { useProgress } from '../use-progress';
@@ -83,7 +83,6 @@ function Flow({ initial, role, unconfirmedEmail }: Props) {
               liveTask={task}
               unit={unit}
               sizeIsSaid={widthMm !== null}
-              quarterTurns={quarterTurns}
               onUseWidth={useWidth}
             />
             <SizePart check={check} unit={unit} onUnit={setUnit} />
@@ -132,7 +131,7 @@ function Placed({ order, form, stock }: PlacedProps) {
       blank={{ ...blank, widthMm: blank.widthMm, heightMm: blank.heightMm }}
       placement={placement}
       artworkMm={{ widthMm, heightMm }}
-      pictureUrl={order && newestArtwork(order.artworks)?.pictureUrl}
+      pictureUrl={order && pictureOf(newestArtwork(order.artworks))}
       groundColour={stock?.groundColour}
     />
   );

@@ -1,5 +1,5 @@
 import type { OrderView } from '@/lib/orders/views';
-import { STATE_WORDS } from '../state-words';
+import { EVENT_WORDS } from './event-words';
 import { timeWords } from '../words';
 
 /** What happened to an order, newest first. */
@@ -17,9 +17,7 @@ export function History({ entries }: { entries: OrderView['history'] }) {
             <time dateTime={entry.at} className="text-quiet">
               {timeWords(entry.at)}
             </time>
-            <span className="font-semibold">
-              {entry.to ? STATE_WORDS[entry.to] : sentenceCase(entry.event)}
-            </span>
+            <span className="font-semibold">{EVENT_WORDS[entry.event] ?? sentenceCase(entry.event)}</span>
             <span className="min-w-0 break-words">{[entry.by, entry.words].filter(Boolean).join(': ')}</span>
           </li>
         ))}

@@ -1,7 +1,7 @@
 import type { OrderView, ProgressEvent } from '@/lib/orders/views';
 import { AnnotatedPlate } from '../AnnotatedPlate';
 import { taskWords } from '../new-order/task-words';
-import { newestArtwork } from '../newest-artwork';
+import { newestArtwork, pictureOf } from '../newest-artwork';
 import { Notice } from '../Notice';
 import { ProgressRule } from '../ProgressRule';
 
@@ -40,11 +40,10 @@ export function OrderArtwork({ order, tasks }: Props) {
   if (!check) return <div className="flex flex-col gap-4">{status}</div>;
   return (
     <AnnotatedPlate
-      src={artwork.pictureUrl}
+      src={pictureOf(artwork)}
       alt={`Artwork ${artwork.fileName}`}
       widthMm={check.widthMm}
       heightMm={check.heightMm}
-      quarterTurns={order.fields.placement.quarterTurns}
       linePitchMm={check.sizeAcrossMm}
       findings={check.findings}
       before={status}

@@ -5,7 +5,7 @@ import { Island } from '../Island';
 import { LifeRule } from '../LifeRule';
 import { LinkButton } from '../LinkButton';
 import { Notice } from '../Notice';
-import { newestArtwork } from '../newest-artwork';
+import { newestArtwork, pictureOf } from '../newest-artwork';
 import { PlacementFigure } from '../PlacementFigure';
 import { NEXT_WORDS } from '../state-words';
 import { useOrder } from '../use-order';
@@ -80,14 +80,14 @@ function Order({ initial, role }: Props) {
             blank={fields.blank}
             placement={fields.placement}
             artworkMm={{ widthMm: fields.widthMm, heightMm: fields.heightMm }}
-            pictureUrl={newestArtwork(order.artworks)?.pictureUrl}
+            pictureUrl={pictureOf(newestArtwork(order.artworks))}
             groundColour={order.stock?.groundColour}
           />
         )}
       </section>
       <CautionList cautions={order.cautions} />
       <History entries={order.history} />
-      <div className="flex flex-wrap gap-4">
+      <div className="flex flex-wrap items-start gap-4">
         {order.events.includes('new-artwork') && order.state !== 'draft' && <NewArtwork order={order} />}
         {order.events.includes('cancel') && <CancelOrder order={order} />}
       </div>
