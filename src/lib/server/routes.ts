@@ -110,7 +110,9 @@ export const ROUTES = [
   { method: 'GET', path: '/api/orders/:number/ticket', access: STAFF, summary: 'What the job ticket says', response: z.object({ order: orderViewSchema, preparation: preparationViewSchema, sentence: z.string(), placementWords: z.string(), blank: blankSchema.nullable(), fields: orderFieldsSchema }) },
 ] as const satisfies readonly Route[];
 
-export type RouteKey = `${(typeof ROUTES)[number]['method']} ${(typeof ROUTES)[number]['path']}`;
+type KeyOf<R> = R extends { method: infer M extends string; path: infer P extends string } ? `${M} ${P}` : never;
+/** Method and path of a listed route, such as `GET /api/orders`. */
+export type RouteKey = KeyOf<(typeof ROUTES)[number]>;
 
 /** The refusal that every route may answer with. */
 export const refusalSchema = problemSchema;
