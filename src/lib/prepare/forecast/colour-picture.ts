@@ -9,7 +9,7 @@ type Turns = 0 | 1 | 2 | 3;
 
 async function openPicture(bytes: Uint8Array) {
   if (fileType(bytes) !== 'bmp')
-    return sharp(bytes, { limitInputPixels: LIMITS.maxPixels, failOn: 'truncated' }).autoOrient();
+    return sharp(bytes, { limitInputPixels: LIMITS.maxPixels, failOn: 'error' }).autoOrient();
   const { width, height, data } = await decodeBmp(bytes);
   return sharp(data, { raw: { width, height, channels: 4 } });
 }

@@ -8,7 +8,7 @@ async function decodeWithSharp(header: PictureHeader, bytes: Uint8Array): Promis
   const deep = header.depth === 16;
   const { data, info } = await sharp(bytes, {
     limitInputPixels: LIMITS.maxPixels,
-    failOn: 'truncated',
+    failOn: 'error',
     sequentialRead: true,
   })
     .autoOrient()

@@ -29,7 +29,7 @@ function isAnimatedPng(bytes: Uint8Array): boolean {
 const MAX_16_BIT_PX = 20_000_000;
 
 async function decodedHeader(type: PictureHeader['type'], bytes: Uint8Array): Promise<PictureHeader> {
-  const meta = await sharp(bytes, { limitInputPixels: false, failOn: 'truncated' }).metadata();
+  const meta = await sharp(bytes, { limitInputPixels: false, failOn: 'error' }).metadata();
   const remarks: string[] = [];
   const frames = type === 'png' ? (isAnimatedPng(bytes) ? 2 : 1) : (meta.pages ?? 1);
   if (frames > 1) {
