@@ -53,7 +53,7 @@ const pinholes = (): string =>
     `<path fill-rule="evenodd" d="M4 4H26V16H4Z${[0, 1, 2].map((i) => `M${9 + 6 * i} 10h0.05v0.05h-0.05Z`).join('')}"/>`,
   ]));
 
-const tip = (): string => inMm(30, 20, '  <path d="M3 10L27 7V13Z"/>');
+const tip = (): string => inMm(30, 20, '  <path d="M3 10L17 6.25V13.75Z"/>');
 
 const tinyType = (): string =>
   inMm(40, 12, lines([
@@ -66,7 +66,7 @@ const missingFont = (): string =>
 
 const strokes = (): string =>
   inMm(50, 30, lines([
-    '<g fill="none" stroke="#000" stroke-width="0.4" stroke-linecap="round">',
+    '<g fill="none" stroke="#000" stroke-width="0.15" stroke-linecap="round">',
     '  <circle cx="15" cy="15" r="10"/>',
     '  <path d="M15 5V25M5 15H25M8 8L22 22M22 8L8 22"/>',
     '  <path d="M30 22C34 8 38 8 40 15S44 24 46 9"/>',

@@ -64,7 +64,7 @@ const colours: Picture = {
 async function sixteenBit(): Promise<Buffer> {
   const [width, height] = [512, 128];
   const data = Uint16Array.from({ length: width * height }, (_, i) => Math.round(((i % width) / (width - 1)) * 65_535));
-  return sharp(data, { raw: { width, height, channels: 1 } }).toColourspace('grey16').png().toBuffer();
+  return sizeless(sharp(data, { raw: { width, height, channels: 1 } }).toColourspace('grey16'));
 }
 
 async function animated(): Promise<Buffer> {
@@ -77,7 +77,14 @@ async function transparent(): Promise<Buffer> {
   const { width, height, at } = stamp(400, 400, BLACK, WHITE);
   const data = new Uint8Array(width * height * 4);
   for (let i = 0; i < width * height; i++) data[4 * i + 3] = at(i % width, Math.floor(i / width))[0] === 0 ? 255 : 0;
-  return sharp(data, { raw: { width, height, channels: 4 } }).png().toBuffer();
+  return sizeless(sharp(data, { raw: { width, height, channels: 4 } }));
+}
+
+/** A PNG without its pHYs chunk: the encoder states one pixel a millimetre where nothing is known of the size. */
+async function sizeless(picture: Sharp): Promise<Buffer> {
+  const png = await picture.png().toBuffer();
+  const at = png.indexOf('pHYs') - 4;
+  return at < 0 ? png : Buffer.concat([png.subarray(0, at), png.subarray(at + 12 + png.readUInt32BE(at))]);
 }
 
 /** A Windows bitmap of 24 bits a pixel, rows from the bottom up, each padded to four bytes. */
@@ -107,7 +114,7 @@ async function photograph(): Promise<Buffer> {
 }
 
 const truncated = async (): Promise<Buffer> => {
-  const whole = await rgb(stillLife(300, 200, 0, 255)).png().toBuffer();
+  const whole = await sizeless(rgb(stillLife(300, 200, 0, 255)));
   return whole.subarray(0, Math.floor(whole.length / 2));
 };
 
@@ -115,11 +122,11 @@ const truncated = async (): Promise<Buffer> => {
 export const PICTURES: Readonly<Record<string, () => Promise<Buffer> | Buffer>> = {
   'alpine-photograph.jpg': photograph,
   'stamp.png': () => rgb(stamp(1200, 1200, BLACK, WHITE)).png({ palette: true, colours: 2, dither: 0 }).withDensity(508).toBuffer(),
-  'coarse-stamp.png': () => rgb(stamp(60, 60, BLACK, WHITE)).png().toBuffer(),
+  'coarse-stamp.png': () => sizeless(rgb(stamp(60, 60, BLACK, WHITE))),
   'off-white.jpg': () => rgb(stamp(900, 900, [40, 34, 30], [246, 242, 232])).jpeg({ quality: 90 }).toBuffer(),
-  'still-life.png': () => rgb(stillLife(900, 600, 0, 255)).toColourspace('b-w').png().toBuffer(),
+  'still-life.png': () => sizeless(rgb(stillLife(900, 600, 0, 255)).toColourspace('b-w')),
   'flat-light.webp': () => rgb(stillLife(900, 600, 120, 176)).webp({ quality: 90 }).toBuffer(),
-  'colours.png': () => rgb(colours).png().toBuffer(),
+  'colours.png': () => sizeless(rgb(colours)),
   'cmyk.jpg': () => rgb(stillLife(600, 400, 20, 235)).toColourspace('cmyk').jpeg({ quality: 90 }).toBuffer(),
   'cmyk.tif': () => rgb(stamp(900, 900, BLACK, WHITE)).toColourspace('cmyk').tiff({ compression: 'lzw' }).withDensity(300).toBuffer(),
   'sixteen-bit.png': sixteenBit,
@@ -128,7 +135,7 @@ export const PICTURES: Readonly<Record<string, () => Promise<Buffer> | Buffer>> 
   'transparent.png': transparent,
   'stamp.bmp': () => bitmap(stamp(301, 240, BLACK, WHITE)),
   'still-life.avif': () => rgb(stillLife(600, 400, 0, 255)).avif({ quality: 60, effort: 2 }).toBuffer(),
-  'empty.png': () => rgb({ width: 40, height: 20, at: () => WHITE }).png().toBuffer(),
+  'empty.png': () => sizeless(rgb({ width: 400, height: 200, at: () => WHITE })),
   'half-a-file.png': truncated,
   'no-bytes.png': () => Buffer.alloc(0),
   'not-artwork.pdf': () => Buffer.from('%PDF-1.4\n1 0 obj\n<< /Type /Catalog >>\nendobj\ntrailer\n<< /Root 1 0 R >>\n%%EOF\n'),
