@@ -1,3 +1,4 @@
+import '../../setup/database';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { bench, blankOf, cause, change, design, finding, open, openShop, orderAt, prepare, read, settled, startShopQueue, stopShopQueue, upload, type Shop } from './shop';
 import { database } from '@/lib/server/db';

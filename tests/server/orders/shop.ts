@@ -212,7 +212,7 @@ export async function upload(who: Person, number: string, content = 'picture', n
 }
 
 export async function settled(who: Person, number: string): Promise<OrderView> {
-  for (let tries = 0; tries < 400; tries += 1) {
+  for (const until = Date.now() + 30_000; Date.now() < until; ) {
     const order = await read(who, number);
     const tasks = [...order.artworks, ...order.preparations].map(({ task }) => task.state);
     if (!tasks.some((state) => state === 'waiting' || state === 'running')) return order;
