@@ -26,6 +26,8 @@ interface Props extends Pick<SelectProps<Choice>, 'name' | 'isDisabled' | 'isReq
   why?: string;
   wrong?: string;
   placeholder?: string;
+  /** the label is read out, not shown: where what stands beside it says the same */
+  hideLabel?: boolean;
 }
 
 export function Select({
@@ -36,6 +38,7 @@ export function Select({
   why,
   wrong,
   placeholder = 'Choose',
+  hideLabel = false,
   ...props
 }: Props) {
   return (
@@ -48,7 +51,7 @@ export function Select({
       validationBehavior="aria"
       className="field"
     >
-      <Label className="field-label">{label}</Label>
+      <Label className={hideLabel ? 'hidden-words' : 'field-label'}>{label}</Label>
       {why && (
         <Text slot="description" className="field-why">
           {why}

@@ -70,11 +70,21 @@ export function OrderTable({ rows, columns, query, onQuery, hrefBase, today }: P
                 const sort = SORTS[header.column.id as ColumnId];
                 const active = sort !== undefined && query.sort === sort;
                 return (
-                  <th key={header.id} scope="col" aria-sort={active ? (query.order === 'up' ? 'ascending' : 'descending') : undefined}>
+                  <th
+                    key={header.id}
+                    scope="col"
+                    aria-sort={active ? (query.order === 'up' ? 'ascending' : 'descending') : undefined}
+                  >
                     {sort ? (
-                      <button type="button" onClick={() => onQuery(sortedBy(query, sort))} className="ledger-sort">
+                      <button
+                        type="button"
+                        onClick={() => onQuery(sortedBy(query, sort))}
+                        className="ledger-sort"
+                      >
                         <FlexRender header={header} />
-                        <span className={`transition-transform ${active ? '' : 'opacity-0'} ${active && query.order === 'up' ? 'rotate-180' : ''}`}>
+                        <span
+                          className={`transition-transform ${active ? '' : 'opacity-0'} ${active && query.order === 'up' ? 'rotate-180' : ''}`}
+                        >
                           <DropArrow />
                         </span>
                       </button>

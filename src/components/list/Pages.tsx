@@ -15,7 +15,9 @@ export function Pages({ page, perPage, total, onPage }: Props) {
   return (
     <nav aria-label="Pages" className="flex flex-wrap items-center gap-4 pt-4 text-15">
       <p role="status">
-        {first > total ? `Past the end: ${total} in all` : `${first.toLocaleString('en-GB')} to ${until.toLocaleString('en-GB')} of ${total.toLocaleString('en-GB')}`}
+        {first > total
+          ? `Past the end: ${total} in all`
+          : `${first.toLocaleString('en-GB')} to ${until.toLocaleString('en-GB')} of ${total.toLocaleString('en-GB')}`}
       </p>
       {last > 1 && (
         <>

@@ -1,4 +1,9 @@
-import { createColumnHelper, rowPaginationFeature, rowSortingFeature, tableFeatures } from '@tanstack/react-table';
+import {
+  createColumnHelper,
+  rowPaginationFeature,
+  rowSortingFeature,
+  tableFeatures,
+} from '@tanstack/react-table';
 import type { OrderRow } from '@/lib/orders/views';
 import { SeverityMark } from '../SeverityMark';
 import { STATE_WORDS } from '../state-words';
@@ -37,7 +42,9 @@ export function Due({ row, today }: { row: OrderRow; today: string }) {
   return (
     <span className="figure">
       {dayWords(row.dueOn)}
-      {open && <span className={`block text-13 ${late ? 'font-semibold text-stop' : 'text-quiet'}`}>{words}</span>}
+      {open && (
+        <span className={`block text-13 ${late ? 'font-semibold text-stop' : 'text-quiet'}`}>{words}</span>
+      )}
     </span>
   );
 }
@@ -45,16 +52,36 @@ export function Due({ row, today }: { row: OrderRow; today: string }) {
 export function Thumbnail({ row }: { row: OrderRow }) {
   return (
     <span className="flex h-[44px] w-[60px] flex-none items-center justify-center bg-well p-1">
-      {row.pictureUrl && <img src={row.pictureUrl} alt="" loading="lazy" className="max-h-full max-w-full object-contain" />}
+      {row.pictureUrl && (
+        <img src={row.pictureUrl} alt="" loading="lazy" className="max-h-full max-w-full object-contain" />
+      )}
     </span>
   );
 }
 
-export const COLUMN_IDS = ['number', 'title', 'customer', 'state', 'findings', 'machine', 'stock', 'quantity', 'time', 'due', 'updated'] as const;
+export const COLUMN_IDS = [
+  'number',
+  'title',
+  'customer',
+  'state',
+  'findings',
+  'machine',
+  'stock',
+  'quantity',
+  'time',
+  'due',
+  'updated',
+] as const;
 export type ColumnId = (typeof COLUMN_IDS)[number];
 
 /** Columns that the server can sort by, and what it calls that. */
-export const SORTS: Partial<Record<ColumnId, ListQuery['sort']>> = { number: 'number', customer: 'customer', state: 'state', due: 'due', updated: 'updated' };
+export const SORTS: Partial<Record<ColumnId, ListQuery['sort']>> = {
+  number: 'number',
+  customer: 'customer',
+  state: 'state',
+  due: 'due',
+  updated: 'updated',
+};
 
 /** All columns an order list can have, in reading order; a page names those that it shows. */
 export function orderColumns(hrefBase: string, today: string) {
@@ -78,21 +105,57 @@ export function orderColumns(hrefBase: string, today: string) {
         </span>
       ),
     }),
-    column.accessor('customerName', { id: 'customer', header: 'Customer', cell: ({ getValue }) => getValue() }),
-    column.accessor('state', { id: 'state', header: 'State', cell: ({ getValue }) => STATE_WORDS[getValue()] }),
-    column.accessor('blockers', { id: 'findings', header: 'Findings', cell: ({ row }) => <FindingCounts row={row.original} /> }),
-    column.accessor('machineName', { id: 'machine', header: 'Machine', cell: ({ getValue }) => getValue() || <span className="text-quiet">not chosen</span> }),
-    column.accessor('stockName', { id: 'stock', header: 'Stock', cell: ({ getValue }) => getValue() || <span className="text-quiet">not named</span> }),
-    column.accessor('quantity', { id: 'quantity', header: 'Pieces', cell: ({ getValue }) => getValue().toLocaleString('en-GB') }),
+    column.accessor('customerName', {
+      id: 'customer',
+      header: 'Customer',
+      cell: ({ getValue }) => getValue(),
+    }),
+    column.accessor('state', {
+      id: 'state',
+      header: 'State',
+      cell: ({ getValue }) => STATE_WORDS[getValue()],
+    }),
+    column.accessor('blockers', {
+      id: 'findings',
+      header: 'Findings',
+      cell: ({ row }) => <FindingCounts row={row.original} />,
+    }),
+    column.accessor('machineName', {
+      id: 'machine',
+      header: 'Machine',
+      cell: ({ getValue }) => getValue() || <span className="text-quiet">not chosen</span>,
+    }),
+    column.accessor('stockName', {
+      id: 'stock',
+      header: 'Stock',
+      cell: ({ getValue }) => getValue() || <span className="text-quiet">not named</span>,
+    }),
+    column.accessor('quantity', {
+      id: 'quantity',
+      header: 'Pieces',
+      cell: ({ getValue }) => getValue().toLocaleString('en-GB'),
+    }),
     column.accessor('scanSeconds', {
       id: 'time',
       header: 'Time a piece',
       cell: ({ getValue }) => {
         const seconds = getValue();
-        return seconds === null ? <span className="text-quiet">not known</span> : <span className="figure">{durationWords(seconds)}</span>;
+        return seconds === null ? (
+          <span className="text-quiet">not known</span>
+        ) : (
+          <span className="figure">{durationWords(seconds)}</span>
+        );
       },
     }),
-    column.accessor('dueOn', { id: 'due', header: 'Due', cell: ({ row }) => <Due row={row.original} today={today} /> }),
-    column.accessor('updatedAt', { id: 'updated', header: 'Last change', cell: ({ getValue }) => <span className="figure">{dayWords(getValue())}</span> }),
+    column.accessor('dueOn', {
+      id: 'due',
+      header: 'Due',
+      cell: ({ row }) => <Due row={row.original} today={today} />,
+    }),
+    column.accessor('updatedAt', {
+      id: 'updated',
+      header: 'Last change',
+      cell: ({ getValue }) => <span className="figure">{dayWords(getValue())}</span>,
+    }),
   ]);
 }

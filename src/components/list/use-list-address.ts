@@ -21,6 +21,9 @@ export function useListAddress(initialSearch: string, own: Partial<ListQuery>) {
     },
     [own],
   );
-  const change = useCallback((part: Partial<ListQuery>, way?: 'push' | 'replace') => go(changedList(query, part), way), [go, query]);
+  const change = useCallback(
+    (part: Partial<ListQuery>, way?: 'push' | 'replace') => go(changedList(query, part), way),
+    [go, query],
+  );
   return { query, go, change };
 }

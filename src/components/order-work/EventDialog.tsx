@@ -38,10 +38,24 @@ function missing(field: AskedField, value: Answers[string]): string | null {
   if (field.kind === 'choice') return value ? null : 'Choose one.';
   if (field.kind === 'figure') return null;
   const length = String(value ?? '').trim().length;
-  return length >= (field.least ?? 0) ? null : field.least === 1 ? 'Fill this in.' : `Write at least ${field.least} characters.`;
+  return length >= (field.least ?? 0)
+    ? null
+    : field.least === 1
+      ? 'Fill this in.'
+      : `Write at least ${field.least} characters.`;
 }
 
-function Field({ field, value, wrong, onChange }: { field: AskedField; value: Answers[string]; wrong?: string; onChange: (value: Answers[string]) => void }) {
+function Field({
+  field,
+  value,
+  wrong,
+  onChange,
+}: {
+  field: AskedField;
+  value: Answers[string];
+  wrong?: string;
+  onChange: (value: Answers[string]) => void;
+}) {
   const { label, why, kind } = field;
   if (kind === 'tick') {
     return (
@@ -50,9 +64,41 @@ function Field({ field, value, wrong, onChange }: { field: AskedField; value: An
       </Checkbox>
     );
   }
-  if (kind === 'choice') return <Select label={label} why={why} wrong={wrong} value={value ? String(value) : null} onChange={onChange} choices={field.choices ?? []} />;
-  if (kind === 'figure') return <NumberField label={label} why={why} unit={field.unit} decimals={1} minValue={0} maxValue={100} value={typeof value === 'number' ? value : null} onChange={onChange} />;
-  return <TextField label={label} why={why} wrong={wrong} rows={kind === 'long-words' ? 3 : undefined} value={String(value ?? '')} onChange={onChange} maxLength={field.most ?? 1000} />;
+  if (kind === 'choice')
+    return (
+      <Select
+        label={label}
+        why={why}
+        wrong={wrong}
+        value={value ? String(value) : null}
+        onChange={onChange}
+        choices={field.choices ?? []}
+      />
+    );
+  if (kind === 'figure')
+    return (
+      <NumberField
+        label={label}
+        why={why}
+        unit={field.unit}
+        decimals={1}
+        minValue={0}
+        maxValue={100}
+        value={typeof value === 'number' ? value : null}
+        onChange={onChange}
+      />
+    );
+  return (
+    <TextField
+      label={label}
+      why={why}
+      wrong={wrong}
+      rows={kind === 'long-words' ? 3 : undefined}
+      value={String(value ?? '')}
+      onChange={onChange}
+      maxLength={field.most ?? 1000}
+    />
+  );
 }
 
 /** A step of an order's life that needs words or ticks: asks for exactly those, keeps them when the server refuses. */

@@ -4,10 +4,8 @@ import { newestArtwork } from '../newest-artwork';
 import { PlacementFigure } from '../PlacementFigure';
 import { CautionList } from '../CautionList';
 import { dayWords } from '../time-words';
+import { ROUTE_WORDS, shadeWords, USE_WORDS } from '../words';
 import { Pairs } from './PreparationFacts';
-
-const ROUTE_WORDS = { 'bare-burn': 'bare burn', 'darkening-wash': 'darkening wash', 'paint-fill': 'paint fill' } as const;
-const USE_WORDS = { decoration: 'decoration', 'touches-food': 'touches food', 'for-a-child': 'for a child', outdoors: 'outdoors' } as const;
 
 /** What the customer asked for: blank, placement, route, use, words; and the cautions that follow. */
 export function OrderFacts({ order }: { order: OrderView }) {
@@ -23,7 +21,7 @@ export function OrderFacts({ order }: { order: OrderView }) {
             ['Pieces', fields.quantity.toLocaleString('en-GB')],
             ['Blank', blank ? blankWords(blank, stock?.name ?? null) : 'not named'],
             ['Placement', placementWords(fields)],
-            ['Shade', fields.shadeLstar === null ? 'as it comes' : `L* ${fields.shadeLstar}`],
+            ['Shade', shadeWords(fields.shadeLstar)],
             ['Route', ROUTE_WORDS[fields.route]],
             ['Use', USE_WORDS[fields.use]],
             ['Proof', fields.withoutProof ? 'the customer goes without' : 'wanted'],
@@ -52,13 +50,18 @@ export function ArtworkVersions({ order }: { order: OrderView }) {
   return (
     <ul className="flex flex-col">
       {versions.map((artwork) => (
-        <li key={artwork.version} className="flex flex-wrap items-baseline justify-between gap-x-6 border-b border-hair py-2.5 text-15">
+        <li
+          key={artwork.version}
+          className="flex flex-wrap items-baseline justify-between gap-x-6 border-b border-hair py-2.5 text-15"
+        >
           <a href={artwork.originalUrl} download className="link py-1">
             Version {artwork.version}, {artwork.fileName}
           </a>
           <span className="text-13 text-quiet">
             {artwork.uploadedBy}, {dayWords(artwork.uploadedAt)}
-            {artwork.task.state === 'failed' && <span className="stop">. Could not be checked: {artwork.task.problem}</span>}
+            {artwork.task.state === 'failed' && (
+              <span className="stop">. Could not be checked: {artwork.task.problem}</span>
+            )}
           </span>
         </li>
       ))}

@@ -6,6 +6,8 @@ import type { Design, MachineView, OrderView, TaskView } from '@/lib/orders/view
 import { call, problemOf } from '../api';
 import { Island } from '../Island';
 import { LifeRule } from '../LifeRule';
+import { History } from '../order/History';
+import { NewArtwork } from '../order/NewArtwork';
 import { newestArtwork } from '../newest-artwork';
 import { Notice, ProblemNotice } from '../Notice';
 import { choiceContext } from '../sentence/context';
@@ -16,8 +18,6 @@ import { useProgress } from '../use-progress';
 import { picturesOf } from '../viewer/pictures';
 import { Viewer } from '../viewer/Viewer';
 import { ChangeOrder } from './ChangeOrder';
-import { History } from './History';
-import { NewArtwork } from './NewArtwork';
 import { ArtworkVersions, OrderFacts } from './OrderFacts';
 import { Prepare } from './Prepare';
 import { PreparationFacts } from './PreparationFacts';
@@ -25,15 +25,33 @@ import { Steps } from './Steps';
 import { useDesign } from './use-design';
 import { Waive } from './Waive';
 
-const OFFERED: readonly OrderEvent[] = ['take', 'pass', 'send-proof', 'approve', 'approve-without-proof', 'ask-for-changes', 'release', 'recall', 'hand-over', 'hold', 'resume', 'cancel'];
+const OFFERED: readonly OrderEvent[] = [
+  'take',
+  'pass',
+  'send-proof',
+  'approve',
+  'approve-without-proof',
+  'ask-for-changes',
+  'release',
+  'recall',
+  'hand-over',
+  'hold',
+  'resume',
+  'cancel',
+];
 const PREPARABLE = ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'];
 
 /** The choices a designer starts from where none are kept yet: the shop's first machine, the suggested treatment. */
 function startingDesign(order: OrderView, machines: readonly MachineView[]): Design | null {
   const machine = machines.find((m) => !m.retired && m.spotPresets.length > 0);
   if (!machine) return null;
-  const treatment = order.fields.treatment ?? newestArtwork(order.artworks)?.check?.artwork.suggestedTreatment ?? 'halftone';
-  return firstDesign({ machineId: machine.id, spotPresetId: machine.spotPresets[0].id }, machine.spotPresets[0], treatment);
+  const treatment =
+    order.fields.treatment ?? newestArtwork(order.artworks)?.check?.artwork.suggestedTreatment ?? 'halftone';
+  return firstDesign(
+    { machineId: machine.id, spotPresetId: machine.spotPresets[0].id },
+    machine.spotPresets[0],
+    treatment,
+  );
 }
 
 /** The state that an order on hold or cancelled had reached, from its history. */
@@ -49,7 +67,8 @@ function Head({ order }: { order: OrderView }) {
         <span className="figure">{order.number}</span> {fields.title || 'Without a title'}
       </h1>
       <p className="max-w-none text-quiet">
-        {order.customer.name}, {fields.quantity.toLocaleString('en-GB')} {fields.quantity === 1 ? 'piece' : 'pieces'}
+        {order.customer.name}, {fields.quantity.toLocaleString('en-GB')}{' '}
+        {fields.quantity === 1 ? 'piece' : 'pieces'}
         {fields.dueOn ? `, due ${dayWords(fields.dueOn)}` : ', no due date'}
       </p>
       {order.state === 'on-hold' && <Notice kind="warning" title="On hold." detail={order.heldBecause} />}
@@ -59,15 +78,32 @@ function Head({ order }: { order: OrderView }) {
 
 function Work({ number, initial }: { number: string; initial?: OrderView }) {
   const { data: order, error } = useOrder(number, initial);
-  const machines = useQuery({ queryKey: ['machines'], queryFn: ({ signal }) => call('GET /api/machines', { signal }) });
+  const machines = useQuery({
+    queryKey: ['machines'],
+    queryFn: ({ signal }) => call('GET /api/machines', { signal }),
+  });
   const tasks = useProgress(number);
-  if (!order) return error ? <ProblemNotice problem={problemOf(error)} /> : <p role="status">Fetching the order.</p>;
-  if (!machines.data) return machines.error ? <ProblemNotice problem={problemOf(machines.error)} /> : <p role="status">Fetching the machines.</p>;
+  if (!order)
+    return error ? <ProblemNotice problem={problemOf(error)} /> : <p role="status">Fetching the order.</p>;
+  if (!machines.data)
+    return machines.error ? (
+      <ProblemNotice problem={problemOf(machines.error)} />
+    ) : (
+      <p role="status">Fetching the machines.</p>
+    );
   const prepareTask = tasks.find((task) => task.kind === 'prepare') ?? null;
   return <LoadedWork order={order} machines={machines.data.machines} liveTask={prepareTask} />;
 }
 
-function LoadedWork({ order, machines, liveTask }: { order: OrderView; machines: readonly MachineView[]; liveTask: TaskView | null }) {
+function LoadedWork({
+  order,
+  machines,
+  liveTask,
+}: {
+  order: OrderView;
+  machines: readonly MachineView[];
+  liveTask: TaskView | null;
+}) {
   const first = startingDesign(order, machines);
   const work = useDesign(order, first);
   const artwork = newestArtwork(order.artworks);
@@ -75,11 +111,21 @@ function LoadedWork({ order, machines, liveTask }: { order: OrderView; machines:
   const finished = order.preparations.find((p) => p.task.state === 'done' && p.report !== null) ?? null;
   const open = PREPARABLE.includes(order.state);
   const size = finished?.report ?? placedSize(order.fields) ?? artwork?.check ?? null;
-  const report = finished?.report && finished.artworkVersion === artwork?.version ? finished.report : (artwork?.check ?? null);
+  const report =
+    finished?.report && finished.artworkVersion === artwork?.version
+      ? finished.report
+      : (artwork?.check ?? null);
   const { design } = work;
   const context = design && choiceContext(design, machines, order);
   const before = latest?.design ?? first ?? design;
-  const isStale = Boolean(open && design && context && (!latest || latest.artworkVersion !== artwork?.version || changedChoices(latest.design, design, context).length > 0));
+  const isStale = Boolean(
+    open &&
+    design &&
+    context &&
+    (!latest ||
+      latest.artworkVersion !== artwork?.version ||
+      changedChoices(latest.design, design, context).length > 0),
+  );
   return (
     <div className="flex flex-col gap-10">
       <div className="flex flex-col gap-6">
@@ -89,12 +135,33 @@ function LoadedWork({ order, machines, liveTask }: { order: OrderView; machines:
       </div>
       {design && context && before ? (
         <div className="flex flex-col gap-4">
-          <Sentence design={design} before={before} context={context} onChange={work.change} isDisabled={!open} />
+          <Sentence
+            design={design}
+            before={before}
+            context={context}
+            onChange={work.change}
+            isDisabled={!open}
+          />
           {work.keep.error && <ProblemNotice problem={problemOf(work.keep.error)} />}
-          {open && <Prepare order={order} latest={latest} liveTask={liveTask} isStale={isStale} isBusy={work.prepare.isPending} isDisabled={!artwork || !placedSize(order.fields)} error={work.prepare.error} onPrepare={() => work.prepare.mutateAsync()} />}
+          {open && (
+            <Prepare
+              order={order}
+              latest={latest}
+              liveTask={liveTask}
+              isStale={isStale}
+              isBusy={work.prepare.isPending}
+              isDisabled={!artwork || !placedSize(order.fields)}
+              error={work.prepare.error}
+              onPrepare={() => work.prepare.mutateAsync()}
+            />
+          )}
         </div>
       ) : (
-        <Notice kind="warning" title="There is no machine with a spot preset." action="An admin adds one under Machines." />
+        <Notice
+          kind="warning"
+          title="There is no machine with a spot preset."
+          action="An admin adds one under Machines."
+        />
       )}
       {artwork && size ? (
         <Viewer
@@ -106,7 +173,9 @@ function LoadedWork({ order, machines, liveTask }: { order: OrderView; machines:
           resultKey={finished?.key ?? null}
           clear={report ? 'Nothing to note on this artwork.' : 'The artwork is still being checked.'}
           before={<h2>Notes</h2>}
-          action={(finding) => <Waive order={order} finding={finding} artworkVersion={artwork.version} mayWaive={open} />}
+          action={(finding) => (
+            <Waive order={order} finding={finding} artworkVersion={artwork.version} mayWaive={open} />
+          )}
         />
       ) : (
         <p>There is no artwork yet.</p>
@@ -117,12 +186,9 @@ function LoadedWork({ order, machines, liveTask }: { order: OrderView; machines:
       <section aria-label="Artwork versions" className="flex flex-col gap-2">
         <h2>Artwork as it was sent</h2>
         <ArtworkVersions order={order} />
-        <NewArtwork order={order} />
+        {order.events.includes('new-artwork') && <NewArtwork order={order} />}
       </section>
-      <section aria-label="History" className="flex flex-col gap-2">
-        <h2>History</h2>
-        <History history={order.history} />
-      </section>
+      <History entries={order.history} />
     </div>
   );
 }

@@ -17,14 +17,17 @@ export function Pairs({ pairs }: { pairs: readonly (readonly [string, React.Reac
   );
 }
 
-const bytesWords = (bytes: number): string => (bytes < 100_000 ? `${(bytes / 1000).toFixed(1)} kB` : `${(bytes / 1e6).toFixed(2)} MB`);
+const bytesWords = (bytes: number): string =>
+  bytes < 100_000 ? `${(bytes / 1000).toFixed(1)} kB` : `${(bytes / 1e6).toFixed(2)} MB`;
 
 export function passWords(pass: PassReport): string {
   return [
     `${pass.lines.toLocaleString('en-GB')} lines at ${angleWords(pass.directionDeg)}`,
     `${pitchWords(pass.linePitchMm)} apart`,
     `${pass.pixelsAlong.toLocaleString('en-GB')} pixels along a line`,
-    ...(pass.doseJPerMm2 === null ? [] : [`${pass.doseJPerMm2.toFixed(3)} J/mm²${pass.assumesLinearPower ? ', assumes linear power' : ''}`]),
+    ...(pass.doseJPerMm2 === null
+      ? []
+      : [`${pass.doseJPerMm2.toFixed(3)} J/mm²${pass.assumesLinearPower ? ', assumes linear power' : ''}`]),
     ...(pass.runOffMm === null ? [] : [`run-off ${pass.runOffMm.toFixed(1)} mm`]),
     ...(pass.scanSeconds === null ? [] : [durationWords(pass.scanSeconds)]),
   ].join(', ');
@@ -33,8 +36,14 @@ export function passWords(pass: PassReport): string {
 function tracePairs(preparation: PreparationView): [string, string][] {
   const trace = preparation.report?.trace;
   if (!trace) return [];
-  const boundary = trace.meanBoundaryMm === null ? '' : `, ${trace.meanBoundaryMm.toFixed(3)} mm from the mask on average`;
-  return [['Linework', `${trace.method}: ${trace.paths.toLocaleString('en-GB')} paths, ${trace.nodes.toLocaleString('en-GB')} nodes, ${trace.lengthMm.toFixed(0)} mm long, ${trace.islandsDropped} islands dropped${boundary}`]];
+  const boundary =
+    trace.meanBoundaryMm === null ? '' : `, ${trace.meanBoundaryMm.toFixed(3)} mm from the mask on average`;
+  return [
+    [
+      'Linework',
+      `${trace.method}: ${trace.paths.toLocaleString('en-GB')} paths, ${trace.nodes.toLocaleString('en-GB')} nodes, ${trace.lengthMm.toFixed(0)} mm long, ${trace.islandsDropped} islands dropped${boundary}`,
+    ],
+  ];
 }
 
 /** What the preparation gave: passes, dose, time, and the files for the machine. */
@@ -48,10 +57,21 @@ export function PreparationFacts({ preparation }: { preparation: PreparationView
       <Pairs
         pairs={[
           ['Size', `${Number(report.widthMm.toFixed(2))} × ${Number(report.heightMm.toFixed(2))} mm`],
-          ...report.passes.map((pass) => [report.passes.length > 1 ? `Pass ${pass.pass}` : 'Pass', passWords(pass)] as const),
+          ...report.passes.map(
+            (pass) => [report.passes.length > 1 ? `Pass ${pass.pass}` : 'Pass', passWords(pass)] as const,
+          ),
           ...tracePairs(preparation),
-          ...(report.totalDoseJPerMm2 === null ? [] : [['Dose in all', `${report.totalDoseJPerMm2.toFixed(3)} J/mm²${linear ? ', assumes linear power' : ''}`] as const]),
-          ...(report.totalSeconds === null ? [] : [['Time a piece', durationWords(report.totalSeconds)] as const]),
+          ...(report.totalDoseJPerMm2 === null
+            ? []
+            : [
+                [
+                  'Dose in all',
+                  `${report.totalDoseJPerMm2.toFixed(3)} J/mm²${linear ? ', assumes linear power' : ''}`,
+                ] as const,
+              ]),
+          ...(report.totalSeconds === null
+            ? []
+            : [['Time a piece', durationWords(report.totalSeconds)] as const]),
         ]}
       />
       <div>
@@ -66,7 +86,10 @@ export function FileList({ files }: { files: PreparationView['files'] }) {
   return (
     <ul className="flex flex-col">
       {files.map((file) => (
-        <li key={file.name} className="flex flex-wrap items-baseline justify-between gap-x-6 border-b border-hair py-2.5">
+        <li
+          key={file.name}
+          className="flex flex-wrap items-baseline justify-between gap-x-6 border-b border-hair py-2.5"
+        >
           <a href={file.url} download={file.name} className="link break-all py-1 text-15">
             {file.name}
           </a>

@@ -35,16 +35,28 @@ export function Prepare({ order, latest, liveTask, isStale, isBusy, isDisabled, 
   return (
     <section aria-label="Preparation" className="flex flex-col gap-3">
       {running ? (
-        <ProgressRule progress={task?.progress ?? null} words={task ? stageWords(task) : 'Sending the choices'} mayLeave />
+        <ProgressRule
+          progress={task?.progress ?? null}
+          words={task ? stageWords(task) : 'Sending the choices'}
+          mayLeave
+        />
       ) : (
         <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
-          <Button kind={isStale ? 'filled' : 'outlined'} isDisabled={isDisabled} onPress={() => (voids ? setAsking(true) : void onPrepare().catch(() => undefined))}>
+          <Button
+            kind={isStale ? 'filled' : 'outlined'}
+            isDisabled={isDisabled}
+            onPress={() => (voids ? setAsking(true) : void onPrepare().catch(() => undefined))}
+          >
             {name}
           </Button>
-          {isStale && latest && <p className="text-15 text-quiet">The choices have changed since the pictures below were made.</p>}
+          {isStale && latest && (
+            <p className="text-15 text-quiet">The choices have changed since the pictures below were made.</p>
+          )}
         </div>
       )}
-      {!running && latest?.task.state === 'failed' && <Notice title="This preparation failed." detail={latest.task.problem} action="Start it again." />}
+      {!running && latest?.task.state === 'failed' && (
+        <Notice title="This preparation failed." detail={latest.task.problem} action="Start it again." />
+      )}
       {error !== null && error !== undefined && <ProblemNotice problem={problemOf(error)} />}
       {asking && (
         <EventDialog

@@ -44,7 +44,12 @@ export function Steps({ order, offered, quiet = false }: Props) {
           </Button>
         ))}
         {others.map((event) => (
-          <Button key={event} kind="text" isDisabled={move.isPending || Boolean(order.waitsFor[event])} onPress={() => act(event)}>
+          <Button
+            key={event}
+            kind="text"
+            isDisabled={move.isPending || Boolean(order.waitsFor[event])}
+            onPress={() => act(event)}
+          >
             {EVENT_FORMS[event]?.name}
           </Button>
         ))}

@@ -24,18 +24,23 @@ export function Waive({ order, finding, artworkVersion, mayWaive }: Props) {
   const params = { number: order.number };
   const keep = (answer: { order: OrderView }) => queries.setQueryData(orderKey(order.number), answer.order);
   const waive = useMutation({
-    mutationFn: (reason: string) => call('POST /api/orders/:number/waivers', { params, body: { version: order.version, findingId: finding.id, reason } }),
+    mutationFn: (reason: string) =>
+      call('POST /api/orders/:number/waivers', {
+        params,
+        body: { version: order.version, findingId: finding.id, reason },
+      }),
     onSuccess: keep,
   });
   const takeBack = useMutation({
-    mutationFn: () => call('DELETE /api/orders/:number/waivers/:findingId', { params: { ...params, findingId: finding.id } }),
+    mutationFn: () =>
+      call('DELETE /api/orders/:number/waivers/:findingId', { params: { ...params, findingId: finding.id } }),
     onSuccess: keep,
   });
   const waiver = order.waivers.find((w) => w.findingId === finding.id && w.artworkVersion === artworkVersion);
   if (waiver) {
     return (
       <div className="mt-2 text-13 text-ink">
-        <p>
+        <p className="pl-2">
           <span className="font-semibold">Waived</span> by {waiver.by}, {dayWords(waiver.at)}: {waiver.reason}
         </p>
         {mayWaive && (
@@ -48,7 +53,7 @@ export function Waive({ order, finding, artworkVersion, mayWaive }: Props) {
     );
   }
   if (finding.severity === 'note' || !mayWaive) return null;
-  if (!finding.waivable) return <p className="mt-1 text-13 text-quiet">This cannot be waived.</p>;
+  if (!finding.waivable) return <p className="mt-1 pl-2 text-13 text-quiet">This cannot be waived.</p>;
   return (
     <>
       <Button kind="text" onPress={() => setAsking(true)}>

@@ -18,11 +18,23 @@ export interface EventForm {
 }
 
 const text = (value: Answers[string]): string => String(value ?? '').trim();
-const reason: AskedField = { name: 'reason', label: 'Reason', kind: 'long-words', least: 3, why: 'It is kept in the record.' };
+const reason: AskedField = {
+  name: 'reason',
+  label: 'Reason',
+  kind: 'long-words',
+  least: 3,
+  why: 'It is kept in the record.',
+};
 
 /** Every step that staff can take from an order's page: its words, what it asks, and what is sent. */
 export const EVENT_FORMS: Partial<Record<OrderEvent, EventForm>> = {
-  take: { name: 'Take this order', title: 'Take this order', ask: false, fields: [], body: () => ({ event: 'take' }) },
+  take: {
+    name: 'Take this order',
+    title: 'Take this order',
+    ask: false,
+    fields: [],
+    body: () => ({ event: 'take' }),
+  },
   pass: {
     name: 'Pass the prepared file',
     title: 'Pass the prepared file',
@@ -46,7 +58,14 @@ export const EVENT_FORMS: Partial<Record<OrderEvent, EventForm>> = {
     ask: true,
     fields: [
       { name: 'who', label: 'Who gave it', kind: 'words', least: 1, most: 120 },
-      { name: 'how', label: 'How it was given', kind: 'words', least: 1, most: 200, why: 'Such as: at the counter, looking at the proof on the screen.' },
+      {
+        name: 'how',
+        label: 'How it was given',
+        kind: 'words',
+        least: 1,
+        most: 200,
+        why: 'Such as: at the counter, looking at the proof on the screen.',
+      },
     ],
     body: (answers, order) => ({
       event: 'approve',
@@ -77,7 +96,13 @@ export const EVENT_FORMS: Partial<Record<OrderEvent, EventForm>> = {
     fields: [],
     body: () => ({ event: 'release' }),
   },
-  recall: { name: 'Recall the ticket', title: 'Recall the ticket', ask: true, fields: [reason], body: (answers) => ({ event: 'recall', reason: text(answers.reason) }) },
+  recall: {
+    name: 'Recall the ticket',
+    title: 'Recall the ticket',
+    ask: true,
+    fields: [reason],
+    body: (answers) => ({ event: 'recall', reason: text(answers.reason) }),
+  },
   'on-the-machine': {
     name: 'On the machine',
     title: 'On the machine',
@@ -91,10 +116,20 @@ export const EVENT_FORMS: Partial<Record<OrderEvent, EventForm>> = {
     title: 'Done: how did it come out?',
     ask: true,
     fields: [
-      { name: 'words', label: 'What you saw, if anything', kind: 'long-words', most: 2000, why: 'Evenness, edges, scorch, smell: what the next recipe should know.' },
+      {
+        name: 'words',
+        label: 'What you saw, if anything',
+        kind: 'long-words',
+        most: 2000,
+        why: 'Evenness, edges, scorch, smell: what the next recipe should know.',
+      },
       { name: 'lstar', label: 'Measured shade, if measured', kind: 'figure', unit: 'L*' },
     ],
-    body: (answers) => ({ event: 'done', words: text(answers.words), measuredLstar: typeof answers.lstar === 'number' ? answers.lstar : null }),
+    body: (answers) => ({
+      event: 'done',
+      words: text(answers.words),
+      measuredLstar: typeof answers.lstar === 'number' ? answers.lstar : null,
+    }),
   },
   spoiled: {
     name: 'Spoiled',
@@ -104,25 +139,81 @@ export const EVENT_FORMS: Partial<Record<OrderEvent, EventForm>> = {
     stop: true,
     fields: [
       { ...reason, label: 'What happened', most: 2000 },
-      { name: 'newBlank', label: 'New blank', kind: 'words', least: 1, most: 200, why: 'Where it comes from: the shelf, the customer’s spare, one to be ordered.' },
+      {
+        name: 'newBlank',
+        label: 'New blank',
+        kind: 'words',
+        least: 1,
+        most: 200,
+        why: 'Where it comes from: the shelf, the customer’s spare, one to be ordered.',
+      },
       { name: 'cost', label: 'Cost, if known', kind: 'words', most: 60 },
     ],
-    body: (answers) => ({ event: 'spoiled', reason: text(answers.reason), newBlank: text(answers.newBlank), cost: text(answers.cost) }),
+    body: (answers) => ({
+      event: 'spoiled',
+      reason: text(answers.reason),
+      newBlank: text(answers.newBlank),
+      cost: text(answers.cost),
+    }),
   },
   'hand-over': {
     name: 'Hand over',
     title: 'Hand over',
     ask: true,
     fields: [
-      { name: 'how', label: 'How it leaves', kind: 'choice', choices: [{ id: 'collected', name: 'Collected' }, { id: 'sent', name: 'Sent' }] },
-      { name: 'byWhom', label: 'By whom', kind: 'words', least: 1, most: 120, why: 'Who collected it, or who sent it.' },
+      {
+        name: 'how',
+        label: 'How it leaves',
+        kind: 'choice',
+        choices: [
+          { id: 'collected', name: 'Collected' },
+          { id: 'sent', name: 'Sent' },
+        ],
+      },
+      {
+        name: 'byWhom',
+        label: 'By whom',
+        kind: 'words',
+        least: 1,
+        most: 120,
+        why: 'Who collected it, or who sent it.',
+      },
     ],
-    body: (answers) => ({ event: 'hand-over', how: answers.how === 'sent' ? 'sent' : 'collected', byWhom: text(answers.byWhom) }),
+    body: (answers) => ({
+      event: 'hand-over',
+      how: answers.how === 'sent' ? 'sent' : 'collected',
+      byWhom: text(answers.byWhom),
+    }),
   },
-  hold: { name: 'Put on hold', title: 'Put on hold', intro: 'The customer gets a mail with the reason.', ask: true, fields: [reason], body: (answers) => ({ event: 'hold', reason: text(answers.reason) }) },
+  hold: {
+    name: 'Put on hold',
+    title: 'Put on hold',
+    intro: 'The customer gets a mail with the reason.',
+    ask: true,
+    fields: [reason],
+    body: (answers) => ({ event: 'hold', reason: text(answers.reason) }),
+  },
   resume: { name: 'Resume', title: 'Resume', ask: false, fields: [], body: () => ({ event: 'resume' }) },
-  cancel: { name: 'Cancel the order', title: 'Cancel the order', stop: true, ask: true, fields: [reason], body: (answers) => ({ event: 'cancel', reason: text(answers.reason) }) },
+  cancel: {
+    name: 'Cancel the order',
+    title: 'Cancel the order',
+    stop: true,
+    ask: true,
+    fields: [reason],
+    body: (answers) => ({ event: 'cancel', reason: text(answers.reason) }),
+  },
 };
 
 /** Steps that carry an order on, in the order in which they are offered; the others stand below as words. */
-export const ONWARD: readonly OrderEvent[] = ['take', 'resume', 'pass', 'send-proof', 'approve', 'approve-without-proof', 'release', 'on-the-machine', 'done', 'hand-over'];
+export const ONWARD: readonly OrderEvent[] = [
+  'take',
+  'resume',
+  'pass',
+  'send-proof',
+  'approve',
+  'approve-without-proof',
+  'release',
+  'on-the-machine',
+  'done',
+  'hand-over',
+];

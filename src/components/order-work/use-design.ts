@@ -26,7 +26,8 @@ export function useDesign(order: OrderView, first: Design | null) {
   };
   const params = { number: order.number };
   const keep = useMutation({
-    mutationFn: (design: Design) => call('PUT /api/orders/:number/design', { params, body: { version: version.current, design } }),
+    mutationFn: (design: Design) =>
+      call('PUT /api/orders/:number/design', { params, body: { version: version.current, design } }),
     onSuccess: ({ order: next }, design) => {
       take(next);
       setDraft((now) => (now === design ? null : now));

@@ -20,20 +20,55 @@ interface Props {
 
 type FigureName = { [K in keyof Figures]: Figures[K] extends number | null ? K : never }[keyof Figures];
 
-const FIELDS: readonly { name: FigureName; label: string; unit?: string; decimals: number; least: number; most: number }[] = [
+const FIELDS: readonly {
+  name: FigureName;
+  label: string;
+  unit?: string;
+  decimals: number;
+  least: number;
+  most: number;
+}[] = [
   { name: 'linePitchMm', label: 'Line pitch', unit: 'mm', decimals: 3, least: 0.01, most: 2 },
   { name: 'alongPitchMm', label: 'Pixel pitch along a line', unit: 'mm', decimals: 3, least: 0.01, most: 2 },
   { name: 'directionDeg', label: 'Scan direction', unit: '°', decimals: 2, least: -180, most: 180 },
-  { name: 'perpendicularPitchMm', label: 'Line pitch of the perpendicular pass, empty for none', unit: 'mm', decimals: 3, least: 0.01, most: 2 },
+  {
+    name: 'perpendicularPitchMm',
+    label: 'Line pitch of the perpendicular pass, empty for none',
+    unit: 'mm',
+    decimals: 3,
+    least: 0.01,
+    most: 2,
+  },
   { name: 'blackPoint', label: 'Black point, as a ratio', decimals: 3, least: 0, most: 0.95 },
   { name: 'whitePoint', label: 'White point, as a ratio', decimals: 3, least: 0.05, most: 1 },
   { name: 'gamma', label: 'Gamma', decimals: 2, least: 0.2, most: 5 },
   { name: 'dividingLstar', label: 'Dividing level', unit: 'L*', decimals: 1, least: 1, most: 99 },
   { name: 'powerPercent', label: 'Power', unit: '%', decimals: 1, least: 1, most: 100 },
   { name: 'speedMmPerS', label: 'Speed', unit: 'mm/s', decimals: 2, least: 0.1, most: 20_000 },
-  { name: 'secondPowerPercent', label: 'Power of the perpendicular pass', unit: '%', decimals: 1, least: 1, most: 100 },
-  { name: 'secondSpeedMmPerS', label: 'Speed of the perpendicular pass', unit: 'mm/s', decimals: 2, least: 0.1, most: 20_000 },
-  { name: 'focusOffsetMm', label: 'Focus offset, above focus', unit: 'mm', decimals: 2, least: -20, most: 50 },
+  {
+    name: 'secondPowerPercent',
+    label: 'Power of the perpendicular pass',
+    unit: '%',
+    decimals: 1,
+    least: 1,
+    most: 100,
+  },
+  {
+    name: 'secondSpeedMmPerS',
+    label: 'Speed of the perpendicular pass',
+    unit: 'mm/s',
+    decimals: 2,
+    least: 0.1,
+    most: 20_000,
+  },
+  {
+    name: 'focusOffsetMm',
+    label: 'Focus offset, above focus',
+    unit: 'mm',
+    decimals: 2,
+    least: -20,
+    most: 50,
+  },
 ];
 
 function FigureFields({ control }: { control: Control<Figures> }) {
@@ -43,7 +78,17 @@ function FigureFields({ control }: { control: Control<Figures> }) {
       control={control}
       name={name}
       render={({ field, fieldState }) => (
-        <NumberField label={label} unit={unit} decimals={decimals} minValue={least} maxValue={most} value={field.value} onChange={field.onChange} onBlur={field.onBlur} wrong={fieldState.error?.message} />
+        <NumberField
+          label={label}
+          unit={unit}
+          decimals={decimals}
+          minValue={least}
+          maxValue={most}
+          value={field.value}
+          onChange={field.onChange}
+          onBlur={field.onBlur}
+          wrong={fieldState.error?.message}
+        />
       )}
     />
   ));
@@ -51,19 +96,51 @@ function FigureFields({ control }: { control: Control<Figures> }) {
 
 function WordFields({ control, context }: { control: Control<Figures>; context: ChoiceContext }) {
   const presets = context.machines.flatMap((machine) =>
-    machine.spotPresets.map((preset) => ({ id: `${machine.id}/${preset.id}`, name: `${machine.name}, ${preset.name}` })),
+    machine.spotPresets.map((preset) => ({
+      id: `${machine.id}/${preset.id}`,
+      name: `${machine.name}, ${preset.name}`,
+    })),
   );
   const lists = [
-    { name: 'treatment', label: 'Treatment', choices: treatmentSchema.options.map((id) => ({ id, name: TREATMENT_WORDS[id] })) },
-    { name: 'screen', label: 'Screen, for halftone', choices: SCREEN_NAMES.map((id) => ({ id, name: SCREEN_WORDS[id] })) },
-    { name: 'toneMode', label: 'Tones', choices: [{ id: 'absolute', name: 'absolute' }, { id: 'scaled', name: 'scaled' }] },
-    { name: 'corners', label: 'Corners of traced outlines', choices: [{ id: 'kept', name: 'kept' }, { id: 'eased', name: 'eased' }] },
+    {
+      name: 'treatment',
+      label: 'Treatment',
+      choices: treatmentSchema.options.map((id) => ({ id, name: TREATMENT_WORDS[id] })),
+    },
+    {
+      name: 'screen',
+      label: 'Screen, for halftone',
+      choices: SCREEN_NAMES.map((id) => ({ id, name: SCREEN_WORDS[id] })),
+    },
+    {
+      name: 'toneMode',
+      label: 'Tones',
+      choices: [
+        { id: 'absolute', name: 'absolute' },
+        { id: 'scaled', name: 'scaled' },
+      ],
+    },
+    {
+      name: 'corners',
+      label: 'Corners of traced outlines',
+      choices: [
+        { id: 'kept', name: 'kept' },
+        { id: 'eased', name: 'eased' },
+      ],
+    },
     { name: 'machineAndSpot', label: 'Machine and spot preset', choices: presets },
   ] as const;
   return (
     <>
       {lists.map(({ name, label, choices }) => (
-        <Controller key={name} control={control} name={name} render={({ field }) => <Select label={label} choices={choices} value={field.value} onChange={field.onChange} />} />
+        <Controller
+          key={name}
+          control={control}
+          name={name}
+          render={({ field }) => (
+            <Select label={label} choices={choices} value={field.value} onChange={field.onChange} />
+          )}
+        />
       ))}
       <Controller
         control={control}

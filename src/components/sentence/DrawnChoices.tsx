@@ -34,7 +34,12 @@ const published = SCREEN_NAMES.filter((name) => name.startsWith('published:'));
 
 export function ScreenChoice({ design, onChange }: ChoiceProps) {
   const choose = (id: string) => onChange({ ...design, screen: screenNameSchema.parse(id) });
-  const card = (id: (typeof SCREEN_NAMES)[number], name: string, words?: string) => ({ id, name, words, drawing: <ScreenDrawing screen={id} /> });
+  const card = (id: (typeof SCREEN_NAMES)[number], name: string, words?: string) => ({
+    id,
+    name,
+    words,
+    drawing: <ScreenDrawing screen={id} />,
+  });
   return (
     <div className="flex flex-col gap-6">
       <RadioCards
@@ -65,8 +70,18 @@ export function CornersChoice({ design, onChange }: ChoiceProps) {
       value={design.corners}
       onChange={(id) => onChange({ ...design, corners: id === 'eased' ? 'eased' : 'kept' })}
       choices={[
-        { id: 'kept', name: 'Kept', words: 'As sharp as they were drawn.', drawing: <CornersDrawing corners="kept" /> },
-        { id: 'eased', name: 'Eased', words: 'Rounded, so that the head need not stop.', drawing: <CornersDrawing corners="eased" /> },
+        {
+          id: 'kept',
+          name: 'Kept',
+          words: 'As sharp as they were drawn.',
+          drawing: <CornersDrawing corners="kept" />,
+        },
+        {
+          id: 'eased',
+          name: 'Eased',
+          words: 'Rounded, so that the head need not stop.',
+          drawing: <CornersDrawing corners="eased" />,
+        },
       ]}
     />
   );
@@ -81,8 +96,18 @@ export function MirrorChoice({ design, onChange }: ChoiceProps) {
       value={design.mirror ? 'yes' : 'no'}
       onChange={(id) => onChange({ ...design, mirror: id === 'yes' })}
       choices={[
-        { id: 'no', name: 'Not mirrored', words: 'Seen from the engraved side.', drawing: <MirrorDrawing mirror={false} /> },
-        { id: 'yes', name: 'Mirrored', words: 'Seen through the back, or for a stamp.', drawing: <MirrorDrawing mirror /> },
+        {
+          id: 'no',
+          name: 'Not mirrored',
+          words: 'Seen from the engraved side.',
+          drawing: <MirrorDrawing mirror={false} />,
+        },
+        {
+          id: 'yes',
+          name: 'Mirrored',
+          words: 'Seen through the back, or for a stamp.',
+          drawing: <MirrorDrawing mirror />,
+        },
       ]}
     />
   );

@@ -6,10 +6,13 @@ import { SpotFigure } from '../SpotFigure';
 import type { ChoiceProps } from './context';
 
 export function MachineChoice({ design, context, onChange }: ChoiceProps) {
-  const usable = context.machines.filter((m) => (!m.retired && m.spotPresets.length > 0) || m.id === design.machineId);
+  const usable = context.machines.filter(
+    (m) => (!m.retired && m.spotPresets.length > 0) || m.id === design.machineId,
+  );
   const chooseMachine = (id: string) => {
     const machine = usable.find((m) => m.id === Number(id));
-    if (machine && machine.id !== design.machineId) onChange({ ...design, machineId: machine.id, spotPresetId: machine.spotPresets[0].id });
+    if (machine && machine.id !== design.machineId)
+      onChange({ ...design, machineId: machine.id, spotPresetId: machine.spotPresets[0].id });
   };
   const asked = scanFor(context.spot, design.scan.directionDeg).linePitchMm;
   const differs = Math.abs(asked - design.scan.linePitchMm) > 0.0005;
@@ -19,7 +22,11 @@ export function MachineChoice({ design, context, onChange }: ChoiceProps) {
         label="Machine"
         value={String(design.machineId)}
         onChange={chooseMachine}
-        choices={usable.map((m) => ({ id: String(m.id), name: m.name, words: `${m.bedWidthMm} × ${m.bedHeightMm} mm, ${m.wattsAtFull} W, ${m.firing}` }))}
+        choices={usable.map((m) => ({
+          id: String(m.id),
+          name: m.name,
+          words: `${m.bedWidthMm} × ${m.bedHeightMm} mm, ${m.wattsAtFull} W, ${m.firing}`,
+        }))}
       />
       <RadioCards
         label="Spot preset"
@@ -36,7 +43,8 @@ export function MachineChoice({ design, context, onChange }: ChoiceProps) {
       />
       {differs && design.treatment !== 'linework' && (
         <p className="text-15">
-          This spot asks for lines {pitchWords(asked)} apart; they are {pitchWords(design.scan.linePitchMm)} apart and stay so until you change them.
+          This spot asks for lines {pitchWords(asked)} apart; they are {pitchWords(design.scan.linePitchMm)}{' '}
+          apart and stay so until you change them.
         </p>
       )}
     </div>

@@ -87,7 +87,9 @@ export function RecipeChoice({ design, context, onChange }: ChoiceProps) {
         why="0 is in focus. A few mm upward can darken."
       />
       <p className="text-15 font-semibold" role="status">
-        {complete ? recipeOutcome({ ...design, recipe: complete }, context) : 'Dose and time follow once every figure is typed.'}
+        {complete
+          ? recipeOutcome({ ...design, recipe: complete }, context)
+          : 'Dose and time follow once every figure is typed.'}
       </p>
     </div>
   );

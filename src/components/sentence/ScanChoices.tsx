@@ -24,14 +24,26 @@ export function PitchChoice({ design, context, onChange }: ChoiceProps) {
   const asked = scanFor(context.spot, scan.directionDeg).linePitchMm;
   const same = scan.alongPitchMm === scan.linePitchMm;
   const setLine = (value: number | null) => {
-    if (inPitchRange(value)) onChange({ ...design, scan: { ...scan, linePitchMm: value, alongPitchMm: same ? value : scan.alongPitchMm } });
+    if (inPitchRange(value))
+      onChange({
+        ...design,
+        scan: { ...scan, linePitchMm: value, alongPitchMm: same ? value : scan.alongPitchMm },
+      });
   };
   return (
     <div className="flex flex-col gap-4">
       <LinesDrawing spot={context.spot} directionDeg={scan.directionDeg} linePitchMm={scan.linePitchMm} />
-      <NumberField label="Distance between scan lines" {...PITCH} step={0.001} value={scan.linePitchMm} onChange={setLine} why="From 0.010 to 2.000 mm. Lines that overlap darken and turn uneven; lines that part turn lighter and striped." />
+      <NumberField
+        label="Distance between scan lines"
+        {...PITCH}
+        step={0.001}
+        value={scan.linePitchMm}
+        onChange={setLine}
+        why="From 0.010 to 2.000 mm. Lines that overlap darken and turn uneven; lines that part turn lighter and striped."
+      />
       <p className="text-15">
-        Pitch ratio {ratio.toFixed(2)}: {words}. {Number(pitchToLinesPerCm(scan.linePitchMm).toFixed(1))} lines per cm. {rowsWords({ design, context })}
+        Pitch ratio {ratio.toFixed(2)}: {words}. {Number(pitchToLinesPerCm(scan.linePitchMm).toFixed(1))}{' '}
+        lines per cm. {rowsWords({ design, context })}
       </p>
       {Math.abs(scan.linePitchMm - asked) > 0.0005 && (
         <p className="text-15">
@@ -41,7 +53,15 @@ export function PitchChoice({ design, context, onChange }: ChoiceProps) {
           </Button>
         </p>
       )}
-      <Checkbox isSelected={same} onChange={(selected) => onChange({ ...design, scan: { ...scan, alongPitchMm: selected ? scan.linePitchMm : scan.alongPitchMm + 0.01 } })}>
+      <Checkbox
+        isSelected={same}
+        onChange={(selected) =>
+          onChange({
+            ...design,
+            scan: { ...scan, alongPitchMm: selected ? scan.linePitchMm : scan.alongPitchMm + 0.01 },
+          })
+        }
+      >
         The same distance between pixels along a line
       </Checkbox>
       {!same && (
@@ -50,7 +70,9 @@ export function PitchChoice({ design, context, onChange }: ChoiceProps) {
           {...PITCH}
           step={0.001}
           value={scan.alongPitchMm}
-          onChange={(value) => inPitchRange(value) && onChange({ ...design, scan: { ...scan, alongPitchMm: value } })}
+          onChange={(value) =>
+            inPitchRange(value) && onChange({ ...design, scan: { ...scan, alongPitchMm: value } })
+          }
         />
       )}
     </div>
@@ -71,7 +93,11 @@ export function DirectionChoice({ design, context, onChange }: ChoiceProps) {
         small
         value={COMMON_ANGLES.some((a) => a === scan.directionDeg) ? String(scan.directionDeg) : null}
         onChange={(id) => set(Number(id))}
-        choices={COMMON_ANGLES.map((angle) => ({ id: String(angle), name: angleWords(angle), drawing: <DirectionDrawing directionDeg={angle} /> }))}
+        choices={COMMON_ANGLES.map((angle) => ({
+          id: String(angle),
+          name: angleWords(angle),
+          drawing: <DirectionDrawing directionDeg={angle} />,
+        }))}
       />
       <NumberField
         label="Another angle to X"
@@ -84,7 +110,11 @@ export function DirectionChoice({ design, context, onChange }: ChoiceProps) {
         why="From −180 to 180°. Across the grain hides the lines; along it follows them."
       />
       <p className="text-15">
-        {pitchConsequence(context.spot, scan.directionDeg, scan.linePitchMm).words.replace(/^./, (c) => c.toUpperCase())} at {pitchWords(scan.linePitchMm)}. This spot asks for {pitchWords(asked)} at this angle; the pitch stays as it is until you change it.
+        {pitchConsequence(context.spot, scan.directionDeg, scan.linePitchMm).words.replace(/^./, (c) =>
+          c.toUpperCase(),
+        )}{' '}
+        at {pitchWords(scan.linePitchMm)}. This spot asks for {pitchWords(asked)} at this angle; the pitch
+        stays as it is until you change it.
       </p>
     </div>
   );
@@ -103,8 +133,18 @@ export function PassesChoice({ design, context, onChange }: ChoiceProps) {
         value={perpendicular ? 'two' : 'one'}
         onChange={(id) => onChange({ ...design, perpendicular: id === 'two' ? second : null })}
         choices={[
-          { id: 'one', name: 'One pass', words: 'The usual.', drawing: <DirectionDrawing directionDeg={scan.directionDeg} /> },
-          { id: 'two', name: 'And a perpendicular one', words: 'Darker, more even, deeper.', drawing: <DirectionDrawing directionDeg={scan.directionDeg} second /> },
+          {
+            id: 'one',
+            name: 'One pass',
+            words: 'The usual.',
+            drawing: <DirectionDrawing directionDeg={scan.directionDeg} />,
+          },
+          {
+            id: 'two',
+            name: 'And a perpendicular one',
+            words: 'Darker, more even, deeper.',
+            drawing: <DirectionDrawing directionDeg={scan.directionDeg} second />,
+          },
         ]}
       />
       {perpendicular && (
@@ -113,7 +153,10 @@ export function PassesChoice({ design, context, onChange }: ChoiceProps) {
           {...PITCH}
           step={0.001}
           value={perpendicular.linePitchMm}
-          onChange={(value) => inPitchRange(value) && onChange({ ...design, perpendicular: { linePitchMm: value, alongPitchMm: value } })}
+          onChange={(value) =>
+            inPitchRange(value) &&
+            onChange({ ...design, perpendicular: { linePitchMm: value, alongPitchMm: value } })
+          }
           why={`The spot is ${across.linePitchMm.toFixed(3)} mm across the second direction.`}
         />
       )}

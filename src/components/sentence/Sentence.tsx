@@ -34,7 +34,11 @@ export function Sentence({ design, before, context, onChange, isDisabled = false
               {changed.includes(choice) && (
                 <>
                   {' '}
-                  <button type="button" className="put-back" onClick={() => onChange(putBack(choice, before, design))}>
+                  <button
+                    type="button"
+                    className="put-back"
+                    onClick={() => onChange(putBack(choice, before, design))}
+                  >
                     Put back<span className="hidden-words"> {CHOICE_TITLES[choice].toLowerCase()}</span>
                   </button>
                 </>
@@ -45,10 +49,19 @@ export function Sentence({ design, before, context, onChange, isDisabled = false
       </p>
       {!isDisabled && (
         <>
-          <Button kind="text" onPress={() => setAllOpen(true)}>
-            All figures
-          </Button>
-          {allOpen && <AllFigures design={design} context={context} onChange={onChange} onClose={() => setAllOpen(false)} />}
+          <span className="-ml-2">
+            <Button kind="text" onPress={() => setAllOpen(true)}>
+              All figures
+            </Button>
+          </span>
+          {allOpen && (
+            <AllFigures
+              design={design}
+              context={context}
+              onChange={onChange}
+              onClose={() => setAllOpen(false)}
+            />
+          )}
         </>
       )}
     </section>

@@ -32,14 +32,20 @@ export const figuresSchema = z
     focusOffsetMm: range(-20, 50).nullable(),
   })
   .superRefine((figures, context) => {
-    const say = (path: string, message: string) => context.addIssue({ code: 'custom', path: [path], message });
-    if (figures.blackPoint >= figures.whitePoint) say('blackPoint', 'Enter a black point below the white point.');
+    const say = (path: string, message: string) =>
+      context.addIssue({ code: 'custom', path: [path], message });
+    if (figures.blackPoint >= figures.whitePoint)
+      say('blackPoint', 'Enter a black point below the white point.');
     const typed = figures.powerPercent !== null || figures.speedMmPerS !== null;
-    if (typed && figures.powerPercent === null) say('powerPercent', 'Type the power that goes with this speed.');
-    if (typed && figures.speedMmPerS === null) say('speedMmPerS', 'Type the speed that goes with this power.');
+    if (typed && figures.powerPercent === null)
+      say('powerPercent', 'Type the power that goes with this speed.');
+    if (typed && figures.speedMmPerS === null)
+      say('speedMmPerS', 'Type the speed that goes with this power.');
     if (typed && figures.perpendicularPitchMm !== null) {
-      if (figures.secondPowerPercent === null) say('secondPowerPercent', 'Type the power of the perpendicular pass.');
-      if (figures.secondSpeedMmPerS === null) say('secondSpeedMmPerS', 'Type the speed of the perpendicular pass.');
+      if (figures.secondPowerPercent === null)
+        say('secondPowerPercent', 'Type the power of the perpendicular pass.');
+      if (figures.secondSpeedMmPerS === null)
+        say('secondSpeedMmPerS', 'Type the speed of the perpendicular pass.');
     }
   });
 export type Figures = z.infer<typeof figuresSchema>;
@@ -70,7 +76,8 @@ export function figuresOf(design: Design): Figures {
 function recipeOf(figures: Figures): Design['recipe'] {
   const { powerPercent, speedMmPerS, secondPowerPercent, secondSpeedMmPerS } = figures;
   if (powerPercent === null || speedMmPerS === null) return null;
-  const second = figures.perpendicularPitchMm !== null && secondPowerPercent !== null && secondSpeedMmPerS !== null;
+  const second =
+    figures.perpendicularPitchMm !== null && secondPowerPercent !== null && secondSpeedMmPerS !== null;
   return {
     powerPercent,
     speedMmPerS,
@@ -79,7 +86,10 @@ function recipeOf(figures: Figures): Design['recipe'] {
   };
 }
 
-function perpendicularOf(linePitchMm: number | null, before: Design['perpendicular']): Design['perpendicular'] {
+function perpendicularOf(
+  linePitchMm: number | null,
+  before: Design['perpendicular'],
+): Design['perpendicular'] {
   if (linePitchMm === null) return null;
   return before?.linePitchMm === linePitchMm ? before : { linePitchMm, alongPitchMm: linePitchMm };
 }
@@ -93,9 +103,18 @@ export function designOf(figures: Figures, before: Design): Design {
     spotPresetId,
     treatment: figures.treatment,
     screen: figures.screen,
-    scan: { directionDeg: figures.directionDeg, linePitchMm: figures.linePitchMm, alongPitchMm: figures.alongPitchMm },
+    scan: {
+      directionDeg: figures.directionDeg,
+      linePitchMm: figures.linePitchMm,
+      alongPitchMm: figures.alongPitchMm,
+    },
     perpendicular: perpendicularOf(second, before.perpendicular),
-    tone: { mode: figures.toneMode, blackPoint: figures.blackPoint, whitePoint: figures.whitePoint, gamma: figures.gamma },
+    tone: {
+      mode: figures.toneMode,
+      blackPoint: figures.blackPoint,
+      whitePoint: figures.whitePoint,
+      gamma: figures.gamma,
+    },
     dividingLstar: figures.dividingLstar,
     corners: figures.corners,
     mirror: figures.mirror,

@@ -21,13 +21,28 @@ export function draftOf(recipe: Design['recipe']): RecipeDraft {
   };
 }
 
-const within = (value: number | null, least: number, most: number): value is number => value !== null && value >= least && value <= most;
+const within = (value: number | null, least: number, most: number): value is number =>
+  value !== null && value >= least && value <= most;
 
 /** The recipe once every figure that its passes need is typed and in range; null until then. Nothing is filled in. */
-export function completeRecipe(draft: RecipeDraft, perpendicular: Design['perpendicular'], fastestMmPerS: number): Recipe | null {
+export function completeRecipe(
+  draft: RecipeDraft,
+  perpendicular: Design['perpendicular'],
+  fastestMmPerS: number,
+): Recipe | null {
   const { powerPercent, speedMmPerS, secondPowerPercent, secondSpeedMmPerS, focusOffsetMm } = draft;
-  if (!within(powerPercent, 1, 100) || !within(speedMmPerS, 0.1, fastestMmPerS) || !within(focusOffsetMm, -20, 50)) return null;
+  if (
+    !within(powerPercent, 1, 100) ||
+    !within(speedMmPerS, 0.1, fastestMmPerS) ||
+    !within(focusOffsetMm, -20, 50)
+  )
+    return null;
   if (!perpendicular) return { powerPercent, speedMmPerS, focusOffsetMm, perpendicular: null };
   if (!within(secondPowerPercent, 1, 100) || !within(secondSpeedMmPerS, 0.1, fastestMmPerS)) return null;
-  return { powerPercent, speedMmPerS, focusOffsetMm, perpendicular: { powerPercent: secondPowerPercent, speedMmPerS: secondSpeedMmPerS } };
+  return {
+    powerPercent,
+    speedMmPerS,
+    focusOffsetMm,
+    perpendicular: { powerPercent: secondPowerPercent, speedMmPerS: secondSpeedMmPerS },
+  };
 }

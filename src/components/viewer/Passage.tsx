@@ -26,10 +26,14 @@ export function Passage({ pictures, compared, onChoose }: Props) {
                 aria-label={`${PICTURE_WORDS[name].name}, ${PICTURE_WORDS[name].words}`}
                 className="flex w-full cursor-pointer flex-col gap-1 border-b-2 border-transparent pb-1 text-left disabled:cursor-default data-[selected]:border-action"
               >
-                <span className="flex aspect-[4/3] w-full items-center justify-center overflow-hidden bg-well p-1">
-                  {picture && <img src={picture.url} alt="" className="max-h-full max-w-full object-contain" />}
+                <span className="flex aspect-[2/1] w-full items-center justify-center overflow-hidden bg-well p-1">
+                  {picture && (
+                    <img src={picture.url} alt="" className="max-h-full max-w-full object-contain" />
+                  )}
                 </span>
-                <span className={`truncate text-13 ${picture ? 'text-ink' : 'text-quiet'} ${chosen >= 0 ? 'font-semibold' : ''}`}>
+                <span
+                  className={`truncate text-13 ${picture ? 'text-ink' : 'text-quiet'} ${chosen >= 0 ? 'font-semibold' : ''}`}
+                >
                   {PICTURE_WORDS[name].name}
                 </span>
               </ToggleButton>

@@ -39,7 +39,8 @@ function layersOf({ shown, loaded, way, held, sweep }: Props): PaneLayer[][] {
   const [first, second] = shown;
   if (!first) return [[]];
   if (!second) return [[layer(first, 0, 1)]];
-  if (held) return way === 'side-by-side' ? [[layer(second, 0, 1)], [layer(first, 0, 1)]] : [[layer(second, 0, 1)]];
+  if (held)
+    return way === 'side-by-side' ? [[layer(second, 0, 1)], [layer(first, 0, 1)]] : [[layer(second, 0, 1)]];
   if (way === 'side-by-side') return [[layer(first, 0, 1)], [layer(second, 0, 1)]];
   if (way === 'hold') return [[layer(first, 0, 1)]];
   return [[layer(first, 0, sweep), layer(second, sweep, 1)]];
@@ -47,7 +48,9 @@ function layersOf({ shown, loaded, way, held, sweep }: Props): PaneLayer[][] {
 
 function Caption({ name, side }: { name: ViewerPicture['name']; side: 'left' | 'right' }) {
   return (
-    <span className={`pointer-events-none absolute bottom-2 z-[1] bg-sheet px-2 py-0.5 text-13 text-ink ${side === 'left' ? 'left-2' : 'right-2'}`}>
+    <span
+      className={`pointer-events-none absolute bottom-2 z-[1] bg-sheet px-2 py-0.5 text-13 text-ink ${side === 'left' ? 'left-2' : 'right-2'}`}
+    >
       {PICTURE_WORDS[name].name}
     </span>
   );
@@ -70,14 +73,39 @@ export function Plate(props: Props) {
     >
       {panes.map((layers, index) => (
         <div key={index} className="relative min-h-0 min-w-0 flex-1 overflow-hidden bg-well">
-          <Pane layers={layers} view={control.view} frame={control.frame} plate={plate} laid={props.laid} onSize={index === 0 ? control.setFrame : undefined} />
-          <Places findings={findings} view={control.view} frame={control.frame} lit={lit} onLight={onLit} onChoose={onLit} />
+          <Pane
+            layers={layers}
+            view={control.view}
+            frame={control.frame}
+            plate={plate}
+            laid={props.laid}
+            onSize={index === 0 ? control.setFrame : undefined}
+          />
+          <Places
+            findings={findings}
+            view={control.view}
+            frame={control.frame}
+            lit={lit}
+            onLight={onLit}
+            onChoose={onLit}
+          />
           {layers.map((layer, place) => (
-            <Caption key={layer.picture.name} name={layer.picture.name} side={place === 0 ? 'left' : 'right'} />
+            <Caption
+              key={layer.picture.name}
+              name={layer.picture.name}
+              side={place === 0 ? 'left' : 'right'}
+            />
           ))}
         </div>
       ))}
-      {sweeping && <SweepHandle share={sweep} onChange={onSweep} leftName={PICTURE_WORDS[shown[0].name].name} rightName={PICTURE_WORDS[shown[1].name].name} />}
+      {sweeping && (
+        <SweepHandle
+          share={sweep}
+          onChange={onSweep}
+          leftName={PICTURE_WORDS[shown[0].name].name}
+          rightName={PICTURE_WORDS[shown[1].name].name}
+        />
+      )}
     </div>
   );
 }

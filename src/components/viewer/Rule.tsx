@@ -23,7 +23,14 @@ function Ticks({ ticks, up }: { ticks: readonly Tick[]; up: boolean }) {
       />
       {ticks.map((t) =>
         t.label === null ? null : (
-          <text key={t.xPx} x={t.xPx} y={up ? MIDDLE - 14 : MIDDLE + 23} textAnchor="middle" fill="var(--quiet)" fontSize="13">
+          <text
+            key={t.xPx}
+            x={t.xPx}
+            y={up ? MIDDLE - 14 : MIDDLE + 23}
+            textAnchor="middle"
+            fill="var(--quiet)"
+            fontSize="13"
+          >
             {t.label}
           </text>
         ),
@@ -41,7 +48,13 @@ export function Rule({ view, widthPx, extentMm, pitchMm }: Props) {
   const magnification = view.pxPerMm * cssPxToMm(1);
   return (
     <div className="rule">
-      <svg height="56" viewBox={`0 0 ${widthPx} 56`} style={{ width: widthPx }} aria-hidden="true" className="overflow-hidden">
+      <svg
+        height="56"
+        viewBox={`0 0 ${widthPx} 56`}
+        style={{ width: widthPx }}
+        aria-hidden="true"
+        className="overflow-hidden"
+      >
         <path d={`M${left} ${MIDDLE} H${right}`} stroke="var(--ink)" strokeWidth="1" />
         <Ticks ticks={ticks.mm} up />
         <Ticks ticks={ticks.lines} up={false} />

@@ -18,14 +18,14 @@ export function ViewWords({ control, pitchMm, children }: Props) {
     control.change((view: View) => ({ ...view, pxPerMm: wholePixelZoom(pitchMm, SINGLE_PX * ratio, ratio) }));
   };
   return (
-    <div className="flex flex-wrap items-center gap-x-1">
+    <div className="-ml-2 flex flex-wrap items-center">
       <Button kind="text" onPress={() => control.zoom(1.5)}>
         Closer
       </Button>
       <Button kind="text" onPress={() => control.zoom(1 / 1.5)}>
         Further
       </Button>
-      <Button kind="text" onPress={control.fit} isDisabled={control.isFitted}>
+      <Button kind="text" onPress={control.fit}>
         Whole artwork
       </Button>
       <Button kind="text" onPress={single}>

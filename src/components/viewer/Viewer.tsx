@@ -44,7 +44,18 @@ function firstPair(pictures: readonly ViewerPicture[]): PassagePicture[] {
 }
 
 /** Passage, plate, rule and margin: any two pictures of a preparation compared down to one prepared pixel. */
-export function Viewer({ pictures, widthMm, heightMm, pitchMm, findings, resultKey, action, clear, before, after }: Props) {
+export function Viewer({
+  pictures,
+  widthMm,
+  heightMm,
+  pitchMm,
+  findings,
+  resultKey,
+  action,
+  clear,
+  before,
+  after,
+}: Props) {
   const container = useRef<HTMLDivElement>(null);
   const element = useRef<HTMLDivElement>(null);
   const [chosen, setChosen] = useState<PassagePicture[] | null>(null);
@@ -72,7 +83,10 @@ export function Viewer({ pictures, widthMm, heightMm, pitchMm, findings, resultK
   const detailUrl = closer?.detail?.url ?? null;
   if (detailUrl && detailUrl !== wanted) setWanted(detailUrl);
 
-  const laid = useLaidDown(resultKey, shown.every((p) => loaded(p.url).image !== null));
+  const laid = useLaidDown(
+    resultKey,
+    shown.every((p) => loaded(p.url).image !== null),
+  );
   const goTo = useCallback(
     (finding: Finding, placeIndex: number) => {
       const place = finding.places[placeIndex % finding.places.length];
@@ -100,7 +114,11 @@ export function Viewer({ pictures, widthMm, heightMm, pitchMm, findings, resultK
 
   return (
     <section aria-label="Artwork and findings" className="flex flex-col gap-4">
-      <Passage pictures={pictures} compared={compared} onChoose={(name) => setChosen(chooseTwo(compared, name, existing))} />
+      <Passage
+        pictures={pictures}
+        compared={compared}
+        onChoose={(name) => setChosen(chooseTwo(compared, name, existing))}
+      />
       <div ref={container} className="relative grid gap-6 lg:grid-cols-[minmax(0,1fr)_300px]">
         <div className="min-w-0">
           <Plate
@@ -122,7 +140,11 @@ export function Viewer({ pictures, widthMm, heightMm, pitchMm, findings, resultK
           />
           <Rule view={control.view} widthPx={control.frame.widthPx} extentMm={widthMm} pitchMm={pitchMm} />
           <p role="status" className="text-13 text-quiet">
-            {failed ? `“${PICTURE_WORDS[failed.name].name}” could not be fetched. Load the page again.` : detailUrl && !loaded(detailUrl).image && !loaded(detailUrl).failed ? 'Fetching the prepared file itself.' : ''}
+            {failed
+              ? `“${PICTURE_WORDS[failed.name].name}” could not be fetched. Load the page again.`
+              : detailUrl && !loaded(detailUrl).image && !loaded(detailUrl).failed
+                ? 'Fetching the prepared file itself.'
+                : ''}
           </p>
           <div className="flex flex-wrap items-center justify-between gap-x-6">
             <ViewWords control={control} pitchMm={pitchMm}>
@@ -153,14 +175,14 @@ export function Viewer({ pictures, widthMm, heightMm, pitchMm, findings, resultK
             onLit={setLit}
             clear={clear}
             action={(finding) => (
-              <>
+              <div className="-ml-2">
                 {finding.places.length > 0 && (
                   <Button kind="text" onPress={() => nextPlace(finding)}>
                     {finding.places.length === 1 ? 'Show the place' : 'Show the next place'}
                   </Button>
                 )}
                 {action?.(finding)}
-              </>
+              </div>
             )}
           />
           {after}

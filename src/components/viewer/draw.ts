@@ -48,7 +48,11 @@ function drawUpright(
 }
 
 /** Draws a picture over the artwork's extent; one of another shape (a quarter turn apart) keeps its own, centred. */
-export function drawPicture(context: CanvasRenderingContext2D, image: HTMLImageElement, drawing: Drawing): void {
+export function drawPicture(
+  context: CanvasRenderingContext2D,
+  image: HTMLImageElement,
+  drawing: Drawing,
+): void {
   const { view, frame, plate, ratio } = drawing;
   const origin = toFrame(view, frame, 0, 0);
   const full = { width: plate.widthMm * view.pxPerMm * ratio, height: plate.heightMm * view.pxPerMm * ratio };
@@ -61,30 +65,31 @@ export function drawPicture(context: CanvasRenderingContext2D, image: HTMLImageE
   drawUpright(context, image, { x, y, width, height }, context.canvas);
 }
 
-/** Draws the prepared raster itself: its own pixels, in its own frame, read the right way round where it is mirrored. */
+/** Draws the prepared raster itself: its own pixels, in its own frame. */
 export function drawDetail(
   context: CanvasRenderingContext2D,
   image: HTMLImageElement,
   detail: DetailFrame,
   drawing: Drawing,
 ): void {
-  const { view, frame, plate, ratio } = drawing;
+  const { view, frame, ratio } = drawing;
   const scale = view.pxPerMm * ratio;
   const width = detail.widthPx * detail.xPitchMm;
   const height = detail.heightPx * detail.yPitchMm;
-  if (detail.angleDeg === 0 && !detail.mirror) {
+  if (detail.angleDeg === 0) {
     const corner = toFrame(view, frame, detail.originXMm, detail.originYMm);
-    const box = { x: corner.xPx * ratio, y: corner.yPx * ratio, width: width * scale, height: height * scale };
+    const box = {
+      x: corner.xPx * ratio,
+      y: corner.yPx * ratio,
+      width: width * scale,
+      height: height * scale,
+    };
     return drawUpright(context, image, box, context.canvas);
   }
   const origin = toFrame(view, frame, 0, 0);
   context.save();
   context.translate(origin.xPx * ratio, origin.yPx * ratio);
   context.scale(scale, scale);
-  if (detail.mirror) {
-    context.translate(plate.widthMm, 0);
-    context.scale(-1, 1);
-  }
   context.translate(detail.originXMm, detail.originYMm);
   context.rotate((detail.angleDeg * Math.PI) / 180);
   context.imageSmoothingEnabled = detail.xPitchMm * scale < 1;

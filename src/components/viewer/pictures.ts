@@ -20,7 +20,6 @@ export interface DetailFrame {
   angleDeg: number;
   originXMm: number;
   originYMm: number;
-  mirror: boolean;
 }
 
 export interface ViewerPicture {
@@ -32,10 +31,13 @@ export interface ViewerPicture {
 
 function detailOf(preparation: PreparationView): DetailFrame | null {
   const { report } = preparation;
-  const raster = report?.files.find((f) => f.role === 'raster' && f.mediaType === 'image/png' && f.pass === 1);
+  const raster = report?.files.find(
+    (f) => f.role === 'raster' && f.mediaType === 'image/png' && f.pass === 1,
+  );
   const file = preparation.files.find((f) => f.name === raster?.name);
   const pass = report?.passes.find((p) => p.pass === 1);
-  if (!report || !raster || !file || !pass || raster.widthPx === null || raster.heightPx === null) return null;
+  if (!report || !raster || !file || !pass || raster.widthPx === null || raster.heightPx === null)
+    return null;
   return {
     url: file.url,
     widthPx: raster.widthPx,
@@ -45,7 +47,6 @@ function detailOf(preparation: PreparationView): DetailFrame | null {
     angleDeg: pass.scanFrame?.angleDeg ?? 0,
     originXMm: pass.scanFrame?.originXMm ?? 0,
     originYMm: pass.scanFrame?.originYMm ?? 0,
-    mirror: report.settings.mirror,
   };
 }
 

@@ -33,7 +33,12 @@ export function plainNumber(value: number): string {
   return part ? `${grouped}.${part}` : grouped;
 }
 
-function span(view: View, widthPx: number, unitMm: number, extentMm: number): { first: number; last: number } {
+function span(
+  view: View,
+  widthPx: number,
+  unitMm: number,
+  extentMm: number,
+): { first: number; last: number } {
   const left = Math.max(0, view.centreXMm - widthPx / 2 / view.pxPerMm);
   const right = Math.min(extentMm, view.centreXMm + widthPx / 2 / view.pxPerMm);
   return { first: Math.ceil(left / unitMm - 1e-9), last: Math.floor(right / unitMm + 1e-9) };
@@ -57,7 +62,8 @@ function ticksOf(
 
 function mmTicks(view: View, widthPx: number, extentMm: number): Tick[] {
   const label = stepFor(view.pxPerMm, CLOSEST_LABEL_PX);
-  const small = [10, 5, 2].map((parts) => label / parts).find((step) => step * view.pxPerMm >= CLOSEST_TICK_PX) ?? label;
+  const small =
+    [10, 5, 2].map((parts) => label / parts).find((step) => step * view.pxPerMm >= CLOSEST_TICK_PX) ?? label;
   const perLabel = Math.round(label / small);
   return ticksOf(view, widthPx, small, extentMm, (index) => {
     const labelled = index % perLabel === 0;

@@ -17,7 +17,8 @@ export function useImages(urls: readonly (string | null)[]): (url: string | null
       const image = new Image();
       image.decoding = 'async';
       image.onload = () => !left && setLoaded((known) => ({ ...known, [url]: { image, failed: false } }));
-      image.onerror = () => !left && setLoaded((known) => ({ ...known, [url]: { image: null, failed: true } }));
+      image.onerror = () =>
+        !left && setLoaded((known) => ({ ...known, [url]: { image: null, failed: true } }));
       image.src = url;
     }
     return () => {

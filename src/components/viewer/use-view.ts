@@ -21,10 +21,15 @@ export function useView(plate: PlateSize, pitchMm: number): ViewControl {
   const [chosen, setChosen] = useState<View | null>(null);
   const limits = useMemo(() => zoomLimits(plate, frame, pitchMm), [plate, frame, pitchMm]);
   const fitted = useMemo(() => fitView(plate, frame), [plate, frame]);
-  const view = useMemo(() => (chosen ? keepInFrame(chosen, plate, frame) : fitted), [chosen, fitted, plate, frame]);
+  const view = useMemo(
+    () => (chosen ? keepInFrame(chosen, plate, frame) : fitted),
+    [chosen, fitted, plate, frame],
+  );
 
   const setFrame = useCallback((next: FrameSize) => {
-    setFrameState((known) => (known.widthPx === next.widthPx && known.heightPx === next.heightPx ? known : next));
+    setFrameState((known) =>
+      known.widthPx === next.widthPx && known.heightPx === next.heightPx ? known : next,
+    );
   }, []);
   const change = useCallback(
     (next: (view: View, frame: FrameSize) => View) => {
@@ -38,7 +43,9 @@ export function useView(plate: PlateSize, pitchMm: number): ViewControl {
   const fit = useCallback(() => setChosen(null), []);
   const zoom = useCallback(
     (factor: number, at?: { xPx: number; yPx: number }) =>
-      change((from, size) => zoomAt(from, size, at ?? { xPx: size.widthPx / 2, yPx: size.heightPx / 2 }, factor, limits)),
+      change((from, size) =>
+        zoomAt(from, size, at ?? { xPx: size.widthPx / 2, yPx: size.heightPx / 2 }, factor, limits),
+      ),
     [change, limits],
   );
   const isFitted = Math.abs(view.pxPerMm - fitted.pxPerMm) < SAME * fitted.pxPerMm;

@@ -42,7 +42,8 @@ export function zoomLimits(plate: PlateSize, frame: FrameSize, pitchMm: number):
   return { least: fitted / 2, most: Math.max(fitted, CLOSEST_PX / pitchMm) };
 }
 
-export const clamp = (value: number, least: number, most: number): number => Math.min(most, Math.max(least, value));
+export const clamp = (value: number, least: number, most: number): number =>
+  Math.min(most, Math.max(least, value));
 
 /** Keeps the artwork from leaving the frame: no gap beside it where it is larger, centred where it is smaller. */
 export function keepInFrame(view: View, plate: PlateSize, frame: FrameSize): View {
@@ -57,14 +58,24 @@ export function keepInFrame(view: View, plate: PlateSize, frame: FrameSize): Vie
   };
 }
 
-export function toFrame(view: View, frame: FrameSize, xMm: number, yMm: number): { xPx: number; yPx: number } {
+export function toFrame(
+  view: View,
+  frame: FrameSize,
+  xMm: number,
+  yMm: number,
+): { xPx: number; yPx: number } {
   return {
     xPx: frame.widthPx / 2 + (xMm - view.centreXMm) * view.pxPerMm,
     yPx: frame.heightPx / 2 + (yMm - view.centreYMm) * view.pxPerMm,
   };
 }
 
-export function toPlate(view: View, frame: FrameSize, xPx: number, yPx: number): { xMm: number; yMm: number } {
+export function toPlate(
+  view: View,
+  frame: FrameSize,
+  xPx: number,
+  yPx: number,
+): { xMm: number; yMm: number } {
   return {
     xMm: view.centreXMm + (xPx - frame.widthPx / 2) / view.pxPerMm,
     yMm: view.centreYMm + (yPx - frame.heightPx / 2) / view.pxPerMm,
