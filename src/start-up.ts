@@ -1,4 +1,5 @@
 import { openDemoShop } from './lib/server/demo/open-demo-shop';
+import { config } from './lib/server/config';
 import { log } from './lib/server/log';
 import { deliverSoon } from './lib/server/mail/deliver';
 import { introduceFirstAdmin } from './lib/server/usecases/introduce-first-admin';
@@ -15,7 +16,9 @@ async function start(): Promise<void> {
     void openDemoShop().catch((error: unknown) => log.error({ err: error }, 'the demo shop stayed empty'));
   } catch (error) {
     log.fatal({ err: error }, 'the server cannot start');
-    throw error;
+    if (!config().isProduction) throw error;
+    console.error(`umberline: ${error instanceof Error ? error.message : String(error)}`);
+    process.exit(1);
   }
 }
 

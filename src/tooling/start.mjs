@@ -20,6 +20,9 @@ if (production) {
     refuse('In production SESSION_SECRET must be your own, not the generated one. Set it to 32 or more random characters.');
   }
   if (secret.length < 32) refuse(`SESSION_SECRET has ${secret.length} characters; 32 or more are needed.`);
+  if (!process.env.SMTP_URL || !process.env.MAIL_FROM) {
+    refuse('In production SMTP_URL and MAIL_FROM must name the mail server and the address that mails come from.');
+  }
 }
 
 process.env.ASTRO_NODE_AUTOSTART = 'disabled';
