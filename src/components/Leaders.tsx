@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useState, type RefObject } from 'react';
+import { useEffect, useState, type RefObject } from 'react';
 
 interface Props {
   /** holds both the plate (`data-place`) and the notes (`data-note`) */
@@ -37,18 +37,14 @@ function measure(root: HTMLElement): Leader[] {
 /** Thin lines from the notes in the margin to their places on the plate. */
 export function Leaders({ container, lit, revision }: Props) {
   const [leaders, setLeaders] = useState<Leader[]>([]);
-  const update = useCallback(
-    () => setLeaders(container.current ? measure(container.current) : []),
-    [container],
-  );
   useEffect(() => {
     const root = container.current;
     if (!root || typeof ResizeObserver === 'undefined') return;
-    const observer = new ResizeObserver(update);
+    const observer = new ResizeObserver(() => setLeaders(measure(root)));
     observer.observe(root);
     for (const part of root.querySelectorAll('[data-note], .plate-picture')) observer.observe(part);
     return () => observer.disconnect();
-  }, [container, update, revision]);
+  }, [container, revision]);
   return (
     <svg className="leaders max-lg:hidden" aria-hidden="true">
       {leaders.map(({ id, d }) => (

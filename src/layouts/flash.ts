@@ -13,5 +13,5 @@ export type Said = keyof typeof SAID;
 
 export function flashOf(url: URL): string | null {
   const name = url.searchParams.get('said');
-  return name !== null && name in SAID ? SAID[name as Said] : null;
+  return name !== null && Object.hasOwn(SAID, name) ? SAID[name as Said] : null;
 }

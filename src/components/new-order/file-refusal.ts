@@ -33,7 +33,7 @@ export function refusalBeforeUpload(file: Pick<File, 'name' | 'size'>): Problem 
   if (ending in EXPORT_AS) {
     return refusal(
       'unsupported-format',
-      `A ${ending.toUpperCase()} file cannot be engraved as it is.`,
+      `${/^[ae]/.test(ending) ? 'An' : 'A'} ${ending.toUpperCase()} file cannot be engraved as it is.`,
       'We take drawings as SVG and pictures as PNG, TIFF, JPEG, WebP, AVIF, GIF or BMP.',
       EXPORT_AS[ending],
     );
