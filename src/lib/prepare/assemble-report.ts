@@ -57,10 +57,16 @@ const NOT_KNOWN: RunFigures = {
   runOffMm: null,
 };
 
-/** Dose, time and run-off where recipe and machine are known; lines that are followed have no dose of an area. */
-function runFigures({ pass, frame }: MarkedPass, { recipe, machine, treatment }: Settings): RunFigures {
+/** Time of lines that are followed at one speed, s; moves from line to line are not counted. They have no dose of an area. */
+function followedFigures({ linework, settings }: PrepareWork): RunFigures {
+  if (!linework || !settings.recipe) return NOT_KNOWN;
+  return { ...NOT_KNOWN, scanSeconds: linework.report.lengthMm / settings.recipe.speedMmPerS };
+}
+
+/** Dose, time and run-off where recipe and machine are known. */
+function runFigures({ pass, frame }: MarkedPass, { recipe, machine }: Settings): RunFigures {
   const run = pass === 1 ? recipe : recipe?.perpendicular;
-  if (!run || !machine || treatment === 'linework') return NOT_KNOWN;
+  if (!run || !machine) return NOT_KNOWN;
   const { linePitchMm } = pitchesOf(frame);
   const power = opticalPower(machine, run.powerPercent);
   const { lines, lineMm } = linesOf(frame);
@@ -74,7 +80,8 @@ function runFigures({ pass, frame }: MarkedPass, { recipe, machine, treatment }:
   };
 }
 
-function passReport(marked: MarkedPass, settings: Settings): PassReport {
+function passReport(marked: MarkedPass, work: PrepareWork): PassReport {
+  const { settings, linework } = work;
   const { pass, frame, marks } = marked;
   const { lines, pixelsAlong } = linesOf(frame);
   const pitches = pitchesOf(frame);
@@ -89,7 +96,7 @@ function passReport(marked: MarkedPass, settings: Settings): PassReport {
     lines,
     pixelsAlong,
     scanFrame: angleDeg === 0 ? null : { angleDeg, originXMm: origin.xMm, originYMm: origin.yMm, outline },
-    ...runFigures(marked, settings),
+    ...(linework ? followedFigures(work) : runFigures(marked, settings)),
     meanBurn: meanBurn(marks),
   };
 }
@@ -109,7 +116,7 @@ function total(figures: readonly (number | null)[]): number | null {
  */
 export function assembleReport(work: PrepareWork, manifestSha256: string): Report {
   const { settings, preparationKey, linework } = work;
-  const passes = work.passes.map((marked) => passReport(marked, settings));
+  const passes = work.passes.map((marked) => passReport(marked, work));
   return {
     ...assembleCheckReport(work),
     settings,

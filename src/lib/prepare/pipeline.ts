@@ -10,6 +10,8 @@ import {
   packageStage,
   pictureStage,
   preflightStage,
+  soundWidthStage,
+  traceStage,
 } from './stages';
 import { stopwatch } from './stopwatch';
 import type { PipelineTools } from './tools';
@@ -18,13 +20,21 @@ import type { Checked, CheckSettings, CheckWork, Given, Prepared, PrepareWork, S
 
 export type { Checked, CheckSettings, Prepared } from './work';
 
-const CHECK: readonly Stage<CheckWork>[] = [ingestStage, measureStage, preflightStage, pictureStage];
+const CHECK: readonly Stage<CheckWork>[] = [
+  ingestStage,
+  measureStage,
+  preflightStage,
+  soundWidthStage,
+  pictureStage,
+];
 
 const PREPARE: readonly Stage<PrepareWork>[] = [
   ingestStage,
   measureStage,
   preflightStage,
+  soundWidthStage,
   markStage,
+  traceStage,
   packageStage,
   forecastStage,
 ];
@@ -54,7 +64,7 @@ const given = (bytes: Uint8Array, tools: PipelineTools): Given => ({
 
 /**
  * Looks at an artwork and says what will not engrave; writes no files.
- * Runs the stages ingest, measure, preflight and picture.
+ * Runs the stages from ingest to picture.
  * @param bytes what was sent; unchanged
  * @param settings size, spot, direction, blank and machine; unchanged
  * @param tools work that runs in processes of its own

@@ -4,11 +4,14 @@ import { passagePictures } from './forecast/passage-pictures';
 import { ingest } from './ingest/ingest';
 import { mark } from './mark';
 import { measure } from './measure/measure';
+import { smallestSoundWidth } from './measure/smallest-sound-width';
 import { PHOTOGRAPH_SHARE, suggestTreatment } from './measure/suggest-treatment';
+import { packageLinework } from './package/package-linework';
 import { packageRasters } from './package/package-rasters';
 import { placedSize } from './placed-size';
 import { perpendicularScan, scanFrame } from './resample/scan-frame';
 import { turnArtwork } from './resample/turn';
+import { trace } from './trace/trace';
 import type { CheckWork, PrepareWork, Stage } from './work';
 
 /** Reads what was sent and settles the size that it is placed at. */
@@ -36,7 +39,14 @@ export const preflightStage: Stage<CheckWork> = {
     const photograph = work.facts.tone.tonalShare >= PHOTOGRAPH_SHARE;
     const treatment = work.placed.treatment ?? work.suggestion.treatment;
     work.findings = judge(work.facts, { spot: work.placed.spot, treatment, photograph });
-    work.smallestSoundWidthMm = null;
+  },
+};
+
+/** The smallest width at which nothing would be too thin. */
+export const soundWidthStage: Stage<CheckWork> = {
+  name: 'sound-width',
+  async run(work) {
+    work.smallestSoundWidthMm = await smallestSoundWidth(work.artwork, work.placed, work.tools);
   },
 };
 
@@ -63,8 +73,10 @@ export const markStage: Stage<PrepareWork> = {
   timesItself: true,
   async run(work) {
     const { settings, artwork } = work;
-    const { widthMm, heightMm, scan, perpendicular, quarterTurns } = settings;
-    const scans = [scan, ...(perpendicular ? [perpendicularScan(scan.directionDeg, perpendicular)] : [])];
+    const { widthMm, heightMm, scan, perpendicular, quarterTurns, treatment } = settings;
+    // Lines that are followed are burned once; only areas are scanned a second time across.
+    const across = treatment === 'linework' ? null : perpendicular;
+    const scans = [scan, ...(across ? [perpendicularScan(scan.directionDeg, across)] : [])];
     const turned = turnArtwork(artwork, quarterTurns);
     work.passes = [];
     for (const [index, passScan] of scans.entries()) {
@@ -76,13 +88,22 @@ export const markStage: Stage<PrepareWork> = {
   },
 };
 
+/** Lines to be followed, where the treatment asks for them. */
+export const traceStage: Stage<PrepareWork> = {
+  name: 'trace',
+  async run(work) {
+    const { artwork, settings, tools } = work;
+    work.linework = settings.treatment === 'linework' ? await trace(artwork, settings, tools) : null;
+  },
+};
+
 /** The files that the operator runs. */
 export const packageStage: Stage<PrepareWork> = {
   name: 'package',
   async run(work) {
-    work.linework = null;
-    work.lineworkOptimised = false;
-    work.files = await packageRasters(work);
+    const lines = work.linework && (await packageLinework(work, work.linework));
+    work.lineworkOptimised = lines?.optimised ?? false;
+    work.files = lines?.files ?? (await packageRasters(work));
   },
 };
 

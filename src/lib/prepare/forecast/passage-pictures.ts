@@ -7,6 +7,7 @@ import type { Grey } from '../resample/upright';
 import { burnTable } from '../tone/burn-table';
 import type { PrepareWork } from '../work';
 import { colourPicture } from './colour-picture';
+import { followedShare } from './followed-share';
 import { burnedShare, markedShare, type PictureSize } from './marked-share';
 import { pictureSize } from './picture-size';
 import { luminancePicture, mixturePicture, sharePicture } from './shade-picture';
@@ -36,12 +37,14 @@ function toned(sized: Grey, table: Float32Array): Grey {
   return { ...sized, data: sized.data.map((sample) => table[sample] * FULL_LUMINANCE + 0.5) };
 }
 
-function shareOfPasses({ passes, settings }: PrepareWork, size: PictureSize): { asked: Grey; marked: Grey } {
-  const asked = passes.map(({ marks, frame }) => burnedShare(marks, frame, size));
-  const marked = passes.map(({ marks, frame }) =>
-    markedShare(marks, frame, settings.spot, settings.firing, size),
-  );
-  return { asked: asked[0], marked: overlaid(marked[0], marked[1]) };
+/** What is asked to burn, and what the spots will mark. */
+async function sharesOf(work: PrepareWork, size: PictureSize): Promise<{ asked: Grey; marked: Grey }> {
+  const { passes, settings, linework, tools } = work;
+  const { spot, firing, mirror } = settings;
+  const asked = burnedShare(passes[0].marks, passes[0].frame, size);
+  if (linework) return { asked, marked: mirrored(await followedShare(linework, spot, size, tools), mirror) };
+  const marked = passes.map(({ marks, frame }) => markedShare(marks, frame, spot, firing, size));
+  return { asked, marked: overlaid(marked[0], marked[1]) };
 }
 
 /**
@@ -60,7 +63,7 @@ export async function passagePictures(work: PrepareWork): Promise<Record<Passage
   const turned = turnArtwork(artwork, quarterTurns);
   const placed = await placedGrey(turned, size.columns, size.rows, tonal ? 'linear' : 'coverage', tools);
   const sized = mirrored(placed, mirror);
-  const { asked, marked } = shareOfPasses(work, size);
+  const { asked, marked } = await sharesOf(work, size);
   const { groundColour, markColour } = settings.stock ?? UNNAMED;
   const pictures = await Promise.all([
     colourPicture(bytes, artwork, quarterTurns, size.columns, size.rows, tools),
