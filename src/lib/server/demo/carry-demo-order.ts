@@ -27,7 +27,7 @@ export interface DemoShop {
   stocks: StockView[];
 }
 
-const LOOK_MS = 250;
+const LOOK_MS = 100;
 /** Edge of the blank around the artwork, mm. */
 const MARGIN_MM = 18;
 const DAY_MS = 86_400_000;

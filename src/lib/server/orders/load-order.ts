@@ -39,6 +39,8 @@ export interface LoadedOrder {
 export async function loadOrder(db: Db, row: OrderRow): Promise<LoadedOrder> {
   const design = designOf(row);
   const fields = fieldsOf(row);
+  // Before what the tasks write: a task that is read as done has its result in what is read after it.
+  const tasks = await tasksOfOrder(db, row.id);
   const customer = await personById(db, row.customer_id);
   if (!customer) throw new Error(`expected the customer of order ${row.id}, got none`);
   return {
@@ -53,7 +55,7 @@ export async function loadOrder(db: Db, row: OrderRow): Promise<LoadedOrder> {
     artworks: await artworksOfOrder(db, row.id),
     preparations: await preparationsOfOrder(db, row.id),
     files: await preparedFilesOfOrder(db, row.id),
-    tasks: await tasksOfOrder(db, row.id),
+    tasks,
     waivers: await waiversOfOrder(db, row.id),
     outcomes: await outcomesOfOrder(db, row.id),
     record: await recordOf(db, orderNumber(row.id)),

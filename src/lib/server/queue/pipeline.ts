@@ -5,7 +5,10 @@ import type { TaskContext } from './handler';
 
 export type ArtworkFormat = ArtworkFacts['format'];
 
-/** The pipeline as the server uses it: in a thread of its own, so that the site stays quick. */
+/**
+ * The pipeline as the server uses it: in a thread of its own, so that the site stays quick. Large bytes move to that thread
+ * and are gone for the caller.
+ */
 export interface Pipeline {
   /** Reads artwork to see whether it can be used at all. @throws ArtworkError */
   read(bytes: Uint8Array): Promise<{ format: ArtworkFormat }>;

@@ -27,8 +27,17 @@ function threads(): Piscina {
   return slot.umberlineThreads.pool;
 }
 
-async function inThread<T>(work: Work, options: { signal?: AbortSignal; transferList?: MessagePort[] }): Promise<T> {
-  const answer = (await threads().run(work, options)) as Answer<T>;
+/** Smaller bytes are copied to the thread; a copy of large ones would be in memory twice. */
+const MOVED_FROM_BYTES = 1024 * 1024;
+
+function moved({ buffer, byteLength }: Uint8Array): ArrayBuffer[] {
+  const whole = buffer instanceof ArrayBuffer && buffer.byteLength === byteLength;
+  return whole && byteLength >= MOVED_FROM_BYTES ? [buffer] : [];
+}
+
+async function inThread<T>(work: Work, { signal, port }: { signal?: AbortSignal; port?: MessagePort }): Promise<T> {
+  const transferList = [...(port ? [port] : []), ...moved(work.bytes)];
+  const answer = (await threads().run(work, { signal, transferList })) as Answer<T>;
   if (!answer.ok) throw new ArtworkError(answer.code, answer.message);
   return answer.value;
 }
@@ -42,7 +51,7 @@ async function withProgress<T>(kind: Long['kind'], context: TaskContext, workOf:
     context.progress(words, progress);
   });
   try {
-    return await inThread<T>(workOf(port2), { signal: context.signal, transferList: [port2] });
+    return await inThread<T>(workOf(port2), { signal: context.signal, port: port2 });
   } finally {
     port1.close();
   }
