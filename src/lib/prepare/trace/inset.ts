@@ -16,7 +16,9 @@ const ARC_TOLERANCE = 0.01;
 /** Shares of the line extent by which outlines are drawn in, where an area is too narrow for the one before. */
 const SHARES = [1, 0.75, 0.5, 0.25, 0.08];
 /** What a drawn-in outline leaves uncovered counts from this share of the spot's area; corners of 60° and wider leave less. */
-const LEFTOVER_SHARE = 0.25;
+const LEFTOVER_SHARE = { ellipse: 0.25, rectangle: 0.5 } as const;
+/** What is left along edges by the rounding of arcs is narrower than this share of the line extent. */
+const SLIVER_SHARE = 0.05;
 
 const scale = (region: Region, x: number, y: number): Region =>
   region.map((path) => path.map((p): Point => [p[0] * x, p[1] * y]));
@@ -45,7 +47,7 @@ export function dilate(region: Region, spot: Spot, share = 1): Region {
  */
 export function insetOutlines(region: Region, spot: Spot): Region {
   const fine = Math.min(spot.widthMm, spot.heightMm) / 2;
-  const least = LEFTOVER_SHARE * spotArea(spot);
+  const least = LEFTOVER_SHARE[spot.shape] * spotArea(spot);
   let outlines: Region = EMPTY;
   let rest = region;
   for (const share of SHARES) {
@@ -53,7 +55,8 @@ export function insetOutlines(region: Region, spot: Spot): Region {
     const eroded = erode(rest, spot, share);
     outlines = [...outlines, ...simplify(eroded, fine * ARC_TOLERANCE)];
     const left = eroded.length === 0 ? rest : subtract(rest, dilate(eroded, spot, share));
-    rest = left.filter((path) => Math.abs(signedArea(path)) >= least);
+    const whole = dilate(erode(left, spot, SLIVER_SHARE), spot, SLIVER_SHARE);
+    rest = whole.filter((path) => Math.abs(signedArea(path)) >= least);
   }
   return outlines;
 }
