@@ -1,4 +1,5 @@
 import type { Field } from '../../imaging/field';
+import type { CellMap } from './windows';
 
 /** Side of a block of the survey, px. */
 const SIDE_PX = 8;
@@ -23,22 +24,24 @@ export interface ToneSurvey {
   histogram: Uint32Array;
 }
 
-function kindOfBlock({ data, width, height }: Field, left: number, top: number): number {
+function kindOfBlock({ data, width, height }: Field, left: number, top: number): [kind: number, mean: number] {
   const right = Math.min(width, left + SIDE_PX);
   const bottom = Math.min(height, top + SIDE_PX);
-  let [low, high, middle] = [255, 0, 0];
+  let [low, high, middle, sum] = [255, 0, 0, 0];
   for (let y = top; y < bottom; y++) {
     for (let i = y * width + left; i < y * width + right; i++) {
       const v = data[i];
       if (v < low) low = v;
       if (v > high) high = v;
       if (v > BARE && v < FULL) middle++;
+      sum += v;
     }
   }
   const pixels = (right - left) * (bottom - top);
-  if (high <= BARE || low >= FULL) return PLAIN;
-  if (high - low <= 12) return TINT;
-  if (low < 40 && high > 215 && middle < 0.6 * pixels) return EDGE;
+  const mean = Math.round(sum / pixels);
+  if (high <= BARE || low >= FULL) return [PLAIN, mean];
+  if (high - low <= 12) return [TINT, mean];
+  if (low < 40 && high > 215 && middle < 0.6 * pixels) return [EDGE, mean];
   const near = Math.max(4, 0.12 * (high - low));
   let extremes = 0;
   for (let y = top; y < bottom; y++) {
@@ -46,7 +49,28 @@ function kindOfBlock({ data, width, height }: Field, left: number, top: number):
       if (data[i] <= low + near || data[i] >= high - near) extremes++;
     }
   }
-  return extremes >= 0.6 * pixels ? EDGE : TONAL;
+  return [extremes >= 0.6 * pixels ? EDGE : TONAL, mean];
+}
+
+/** Levels apart at which two flat blocks still are the same tint, and the share of all flat blocks that makes a tint. */
+const SAME_TINT = 1;
+const TINT_CROWD = 0.2;
+
+/** Flat blocks whose grey few others have are steps of a gradient: tonal. */
+function settleGradients(kinds: Uint8Array, means: Uint8Array): void {
+  const counts = new Uint32Array(256);
+  let flat = 0;
+  for (let n = 0; n < kinds.length; n++) {
+    if (kinds[n] !== TINT) continue;
+    counts[means[n]]++;
+    flat++;
+  }
+  for (let n = 0; n < kinds.length; n++) {
+    if (kinds[n] !== TINT) continue;
+    let crowd = 0;
+    for (let v = means[n] - SAME_TINT; v <= means[n] + SAME_TINT; v++) crowd += counts[v] ?? 0;
+    if (crowd < TINT_CROWD * flat) kinds[n] = TONAL;
+  }
 }
 
 /** Tonal where most of the 5 × 5 blocks around are: lone blocks are edges, and edges inside a photograph are part of it. */
@@ -80,11 +104,14 @@ export function surveyTones(field: Field): ToneSurvey {
   const columns = Math.ceil(field.width / SIDE_PX);
   const rows = Math.ceil(field.height / SIDE_PX);
   const kinds = new Uint8Array(columns * rows);
+  const means = new Uint8Array(columns * rows);
   for (let row = 0; row < rows; row++) {
     for (let column = 0; column < columns; column++) {
-      kinds[row * columns + column] = kindOfBlock(field, column * SIDE_PX, row * SIDE_PX);
+      const n = row * columns + column;
+      [kinds[n], means[n]] = kindOfBlock(field, column * SIDE_PX, row * SIDE_PX);
     }
   }
+  settleGradients(kinds, means);
   const tonal = settleTonal(kinds, columns, rows);
   const histogram = new Uint32Array(256);
   for (let i = 0; i < field.data.length; i++) histogram[field.data[i]]++;
@@ -94,6 +121,11 @@ export function surveyTones(field: Field): ToneSurvey {
     else if (kinds[n] === TINT) tints++;
   }
   return { columns, rows, tonal, tonalShare: tones / kinds.length, tintShare: tints / kinds.length, histogram };
+}
+
+/** The blocks that are not tonal, as a map of what there is to look at; null where nothing is tonal. */
+export function drawnCells({ columns, rows, tonal }: ToneSurvey): CellMap | null {
+  return tonal.includes(1) ? { columns, rows, marked: tonal.map((value) => 1 - value) } : null;
 }
 
 /** Whether a place, in fractions 0–1 of the artwork's width and height, lies in a tonal part. */
