@@ -8,10 +8,13 @@ export interface CoverTable {
   shares: Uint16Array;
 }
 
-/** Sample points of a pixel along X and along Y, at least: fewer would miss a round spot's area by more than a level. */
-const SAMPLES = 32;
+/** Sample points of a pixel along X and along Y, at least: with fewer a round spot's area is off by more than half a percent. */
+const SAMPLES = 128;
 
-/** For every sample of one part of a pixel, which of the nine pixels around reach it: bit 3·(column + 1) + row + 1. */
+/**
+ * How many samples of one part of a pixel are reached by exactly these of the nine pixels around: bit
+ * 3·(column + 1) + row + 1.
+ */
 function reachOfPart(
   fired: FiredSpot,
   pitchX: number,
@@ -19,24 +22,26 @@ function reachOfPart(
   parts: number,
   partX: number,
   partY: number,
-): Uint16Array {
-  const samples = Math.ceil(SAMPLES / parts);
-  const reach = new Uint16Array(samples * samples);
-  for (let i = 0; i < reach.length; i++) {
-    const x = ((partX + ((i % samples) + 0.5) / samples) / parts - 0.5) * pitchX;
-    const y = ((partY + (Math.floor(i / samples) + 0.5) / samples) / parts - 0.5) * pitchY;
+): { counts: Float64Array; samples: number } {
+  const side = Math.ceil(SAMPLES / parts);
+  const counts = new Float64Array(512);
+  for (let i = 0; i < side * side; i++) {
+    const x = ((partX + ((i % side) + 0.5) / side) / parts - 0.5) * pitchX;
+    const y = ((partY + (Math.floor(i / side) + 0.5) / side) / parts - 0.5) * pitchY;
+    let reached = 0;
     for (let column = -1; column <= 1; column++) {
       for (let row = -1; row <= 1; row++) {
-        if (fired(x - column * pitchX, y - row * pitchY)) reach[i] |= 1 << (3 * (column + 1) + row + 1);
+        if (fired(x - column * pitchX, y - row * pitchY)) reached |= 1 << (3 * (column + 1) + row + 1);
       }
     }
+    counts[reached]++;
   }
-  return reach;
+  return { counts, samples: side * side };
 }
 
 /**
  * The marked share of each part of a pixel for every way in which it and its eight neighbours may fire.
- * Each part is sampled on a grid of at least 32 points a pixel; a point counts once, however many spots reach it.
+ * Each part is sampled on a grid of at least 128 points a side of a pixel; a point counts once, however many spots reach it.
  * @param fired the area that one fired pixel marks, reaching no further than the next pixel
  * @param pitchXMm width of a pixel, mm
  * @param pitchYMm height of a pixel, mm
@@ -47,11 +52,19 @@ function reachOfPart(
 export function coverTable(fired: FiredSpot, pitchXMm: number, pitchYMm: number, parts: number): CoverTable {
   const shares = new Uint16Array(512 * parts * parts);
   for (let part = 0; part < parts * parts; part++) {
-    const reach = reachOfPart(fired, pitchXMm, pitchYMm, parts, part % parts, Math.floor(part / parts));
+    const { counts, samples } = reachOfPart(
+      fired,
+      pitchXMm,
+      pitchYMm,
+      parts,
+      part % parts,
+      Math.floor(part / parts),
+    );
     for (let pattern = 0; pattern < 512; pattern++) {
       let marked = 0;
-      for (const reached of reach) if ((reached & pattern) !== 0) marked++;
-      shares[pattern * parts * parts + part] = Math.round((65_535 * marked) / reach.length);
+      for (let reached = 1; reached < 512; reached++)
+        if ((reached & pattern) !== 0) marked += counts[reached];
+      shares[pattern * parts * parts + part] = Math.round((65_535 * marked) / samples);
     }
   }
   return { parts, shares };
