@@ -32,8 +32,24 @@ export const machine: MachineView = machineViewSchema.parse({
   firing: 'swept',
   scanning: 'two-way',
   spotPresets: [
-    { id: 2, name: '50 mm lens', widthMm: 0.07, heightMm: 0.11, shape: 'ellipse', measuredBy: 'burned-line', measuredAtDoseJPerMm2: 0.8 },
-    { id: 3, name: '100 mm lens', widthMm: 0.16, heightMm: 0.18, shape: 'ellipse', measuredBy: 'maker', measuredAtDoseJPerMm2: null },
+    {
+      id: 2,
+      name: '50 mm lens',
+      widthMm: 0.07,
+      heightMm: 0.11,
+      shape: 'ellipse',
+      measuredBy: 'burned-line',
+      measuredAtDoseJPerMm2: 0.8,
+    },
+    {
+      id: 3,
+      name: '100 mm lens',
+      widthMm: 0.16,
+      heightMm: 0.18,
+      shape: 'ellipse',
+      measuredBy: 'maker',
+      measuredAtDoseJPerMm2: null,
+    },
   ],
 });
 
@@ -47,7 +63,17 @@ export const diode: MachineView = machineViewSchema.parse({
   wattsAtFull: 10,
   speedUnit: 'mm/min',
   firing: 'pulsed',
-  spotPresets: [{ id: 5, name: 'As measured', widthMm: 0.09, heightMm: 0.14, shape: 'rectangle', measuredBy: 'burned-line', measuredAtDoseJPerMm2: null }],
+  spotPresets: [
+    {
+      id: 5,
+      name: 'As measured',
+      widthMm: 0.09,
+      heightMm: 0.14,
+      shape: 'rectangle',
+      measuredBy: 'burned-line',
+      measuredAtDoseJPerMm2: null,
+    },
+  ],
 });
 
 export const stock: StockView = stockViewSchema.parse({
@@ -82,7 +108,13 @@ export const design: Design = {
   recipe: { powerPercent: 42, speedMmPerS: 320, perpendicular: null, focusOffsetMm: 0 },
 };
 
-const place = (xMm: number, yMm: number, minMm: number | null, size = 0.4) => ({ xMm, yMm, widthMm: size, heightMm: size, minMm });
+const place = (xMm: number, yMm: number, minMm: number | null, size = 0.4) => ({
+  xMm,
+  yMm,
+  widthMm: size,
+  heightMm: size,
+  minMm,
+});
 
 export const findings: Finding[] = [
   {
@@ -94,7 +126,8 @@ export const findings: Finding[] = [
     minMm: 0.04,
     limitMm: 0.11,
     measured: null,
-    advice: 'Some strokes are thinner than the laser’s spot and will come out wider or broken. Make them at least 0.11 mm wide.',
+    advice:
+      'Some strokes are thinner than the laser’s spot and will come out wider or broken. Make them at least 0.11 mm wide.',
     waivable: true,
   },
   {
@@ -216,8 +249,22 @@ export const preparation: PreparationView = {
   task: done,
   design,
   report,
-  files: [{ name: file.name, role: 'raster', mediaType: 'image/png', bytes: file.bytes, sha256: sha, url: `/api/orders/U-1004/preparations/31/files/${file.name}` }],
-  pictures: Object.fromEntries(['sent', 'sized', 'toned', 'screened', 'burned'].map((name) => [name, `/api/orders/U-1004/preparations/31/pictures/${name}`])),
+  files: [
+    {
+      name: file.name,
+      role: 'raster',
+      mediaType: 'image/png',
+      bytes: file.bytes,
+      sha256: sha,
+      url: `/api/orders/U-1004/preparations/31/files/${file.name}`,
+    },
+  ],
+  pictures: Object.fromEntries(
+    ['sent', 'sized', 'toned', 'screened', 'burned'].map((name) => [
+      name,
+      `/api/orders/U-1004/preparations/31/pictures/${name}`,
+    ]),
+  ),
   timings: { ingest: 30, screen: 120 },
 };
 
@@ -234,7 +281,18 @@ export function orderView(changes: Partial<OrderView> = {}): OrderView {
       quantity: 3,
       dueOn: '2026-12-04',
       ...sizes,
-      blank: { outline: 'rectangle', widthMm: 120, heightMm: 80, thicknessMm: 4, stockId: 7, side: 'front', grainDeg: 0, source: 'shop', condition: '', spare: false },
+      blank: {
+        outline: 'rectangle',
+        widthMm: 120,
+        heightMm: 80,
+        thicknessMm: 4,
+        stockId: 7,
+        side: 'front',
+        grainDeg: 0,
+        source: 'shop',
+        condition: '',
+        spare: false,
+      },
       placement: { datum: 'centre', xMm: 0, yMm: 0, quarterTurns: 0, fixture: 'pin board, two pins left' },
       treatment: 'halftone',
       shadeLstar: 38,
@@ -246,22 +304,64 @@ export function orderView(changes: Partial<OrderView> = {}): OrderView {
     stock,
     rightsConfirmedAt: '2026-11-27T08:12:00.000Z',
     artworks: [
-      { version: 2, fileName: 'harbour-2.png', mediaType: 'image/png', bytes: 184_220, sha256: sha, uploadedAt: '2026-11-29T16:00:00.000Z', uploadedBy: 'Maren Holt', task: done, check: checkReport, pictureUrl: '/api/orders/U-1004/artwork/2/picture', originalUrl: '/api/orders/U-1004/artwork/2/original' },
+      {
+        version: 2,
+        fileName: 'harbour-2.png',
+        mediaType: 'image/png',
+        bytes: 184_220,
+        sha256: sha,
+        uploadedAt: '2026-11-29T16:00:00.000Z',
+        uploadedBy: 'Maren Holt',
+        task: done,
+        check: checkReport,
+        pictureUrl: '/api/orders/U-1004/artwork/2/picture',
+        originalUrl: '/api/orders/U-1004/artwork/2/original',
+      },
     ],
     design,
     preparations: [preparation],
     passed: null,
     approved: null,
-    waivers: [{ findingId: 'fill-in', artworkVersion: 2, reason: 'The gaps are decoration and may close.', by: 'Ines Okafor', at: '2026-11-30T10:00:00.000Z' }],
+    waivers: [
+      {
+        findingId: 'fill-in',
+        artworkVersion: 2,
+        reason: 'The gaps are decoration and may close.',
+        by: 'Ines Okafor',
+        at: '2026-11-30T10:00:00.000Z',
+      },
+    ],
     heldBecause: '',
     outcomes: [],
     history: [
-      { at: '2026-11-27T08:12:00.000Z', by: 'Maren Holt', event: 'submit', from: 'draft', to: 'submitted', words: '' },
-      { at: '2026-11-28T09:00:00.000Z', by: 'Ines Okafor', event: 'take', from: 'submitted', to: 'in-preparation', words: '' },
+      {
+        at: '2026-11-27T08:12:00.000Z',
+        by: 'Maren Holt',
+        event: 'submit',
+        from: 'draft',
+        to: 'submitted',
+        words: '',
+      },
+      {
+        at: '2026-11-28T09:00:00.000Z',
+        by: 'Ines Okafor',
+        event: 'take',
+        from: 'submitted',
+        to: 'in-preparation',
+        words: '',
+      },
     ],
     events: ['pass', 'prepare-again', 'new-artwork', 'hold', 'cancel'],
-    waitsFor: { pass: 'Blockers are open: hairlines. Mend the artwork or change the size, or waive with a reason.' },
-    cautions: [{ id: 'glued-board', title: 'Glued board', text: 'Plywood glues give off irritating smoke. Extraction on. Source: makers’ data sheets. Follow the machine’s manual and local codes.' }],
+    waitsFor: {
+      pass: 'Blockers are open: hairlines. Mend the artwork or change the size, or waive with a reason.',
+    },
+    cautions: [
+      {
+        id: 'glued-board',
+        title: 'Glued board',
+        text: 'Plywood glues give off irritating smoke. Extraction on. Source: makers’ data sheets. Follow the machine’s manual and local codes.',
+      },
+    ],
     ...changes,
   });
 }

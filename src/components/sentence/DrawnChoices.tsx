@@ -43,7 +43,7 @@ export function ScreenChoice({ design, onChange }: ChoiceProps) {
   return (
     <div className="flex flex-col gap-6">
       <RadioCards
-        label="Screen"
+        label="Our own"
         columns={2}
         value={design.screen === 'even-grain' ? design.screen : null}
         onChange={choose}

@@ -8,7 +8,7 @@ import { PlacementFigure } from '../PlacementFigure';
 import { dayWords, durationWords } from '../time-words';
 import { ROUTE_WORDS } from '../words';
 import { frameWords, lineworkLine, passLine } from './pass-lines';
-import { paperScale, scaleWords } from './paper-scale';
+import { paperScale, scaleWords, standsInColumn } from './paper-scale';
 import type { QrDrawing } from './qr-path';
 
 interface Props {
@@ -164,13 +164,15 @@ function Column({ children }: { children: ReactNode }) {
 export function TicketSheet(props: Props) {
   const { order, preparation, report, sentence, placementWords } = props;
   const { blank, placement, widthMm, heightMm } = order.fields;
+  const inColumn = standsInColumn(report.widthMm, report.heightMm);
   return (
     <article className="ticket" aria-label={`Job ticket ${order.number}`}>
       <Head {...props} />
       <p className="ticket-sentence">{sentence}</p>
-      <Plate {...props} />
+      {!inColumn && <Plate {...props} />}
       <div className="ticket-columns">
         <Column>
+          {inColumn && <Plate {...props} />}
           <Passes {...props} />
           <Times report={report} quantity={order.fields.quantity} />
           <Waivers {...props} />

@@ -13,3 +13,11 @@ export function paperScale(widthMm: number, heightMm: number): number {
 }
 
 export const scaleWords = (scale: number): string => (scale === 1 ? 'At true size' : `Drawn 1 : ${scale}`);
+
+/** Width of the sheet's broader column, mm. */
+const COLUMN_MM = 104;
+
+/** Whether the plate is narrow enough to stand in a column beside the placement, so that most tickets fill one page. */
+export function standsInColumn(widthMm: number, heightMm: number): boolean {
+  return widthMm / paperScale(widthMm, heightMm) <= COLUMN_MM;
+}

@@ -69,7 +69,7 @@ export function Viewer({
   const existing = pictures.map((p) => p.name);
   const kept = chosen?.filter((name) => existing.includes(name)) ?? [];
   const compared = kept.length > 0 ? kept : firstPair(pictures);
-  const shown = compared.flatMap((name) => pictures.find((p) => p.name === name) ?? []);
+  const shown = pictures.filter((p) => compared.includes(p.name));
   const ordered = inReadingOrder(findings).filter((f) => f.places.length > 0);
 
   // The prepared raster can be many megapixels: it is fetched only once someone looks that closely.
