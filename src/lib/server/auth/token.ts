@@ -1,7 +1,7 @@
 import { createHash, randomBytes } from 'node:crypto';
 import type { Transaction } from '../db';
 import { AppError } from '../errors';
-import { dropTokens, insertToken, spendToken, type TokenKind } from '../tables/tokens';
+import { dropExpiredTokens, dropTokens, insertToken, spendToken, type TokenKind } from '../tables/tokens';
 
 const HOUR_MS = 60 * 60 * 1000;
 const LIFE_MS: Record<TokenKind, number> = { confirm: 7 * 24 * HOUR_MS, invitation: 7 * 24 * HOUR_MS, reset: HOUR_MS };
@@ -13,6 +13,7 @@ const hashOf = (token: string): string => createHash('sha256').update(token).dig
 export async function makeToken(trx: Transaction, personId: number, kind: TokenKind): Promise<string> {
   const token = randomBytes(24).toString('base64url');
   const now = Date.now();
+  await dropExpiredTokens(trx, new Date(now).toISOString());
   await dropTokens(trx, personId, kind);
   await insertToken(trx, {
     hash: hashOf(token),
