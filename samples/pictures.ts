@@ -128,7 +128,7 @@ export const PICTURES: Readonly<Record<string, () => Promise<Buffer> | Buffer>> 
   'flat-light.webp': () => rgb(stillLife(900, 600, 120, 176)).webp({ quality: 90 }).toBuffer(),
   'colours.png': () => sizeless(rgb(colours)),
   'cmyk.jpg': () => rgb(stillLife(600, 400, 20, 235)).toColourspace('cmyk').jpeg({ quality: 90 }).toBuffer(),
-  'cmyk.tif': () => rgb(stamp(900, 900, BLACK, WHITE)).toColourspace('cmyk').tiff({ compression: 'lzw' }).withDensity(300).toBuffer(),
+  'cmyk.tif': () => rgb(stamp(900, 900, BLACK, WHITE)).toColourspace('cmyk').tiff({ compression: 'lzw' }).withDensity(600).toBuffer(),
   'sixteen-bit.png': sixteenBit,
   'turned.jpg': () => rgb(stillLife(600, 400, 0, 255)).withMetadata({ orientation: 6 }).jpeg({ quality: 88 }).toBuffer(),
   'animated.gif': animated,
