@@ -106,7 +106,12 @@ export function BlankPart({ stocks, unit, beside }: Props) {
 }
 
 function StockChoice({ stocks, own }: { stocks: readonly StockView[]; own: boolean }) {
-  const { control } = useFormContext<DraftForm>();
+  const { control, setValue } = useFormContext<DraftForm>();
+  const choose = (stockId: number | null) => {
+    const thicknessMm = stocks.find((stock) => stock.id === stockId)?.thicknessMm;
+    if (thicknessMm !== undefined) setValue('blank.thicknessMm', thicknessMm, { shouldDirty: true });
+    return stockId;
+  };
   const choices = stocks
     .filter((stock) => !stock.retired)
     .map((stock) => ({
@@ -130,7 +135,7 @@ function StockChoice({ stocks, own }: { stocks: readonly StockView[]; own: boole
           label="Made of"
           choices={[...choices, ...unsure]}
           value={field.value !== null ? String(field.value) : own ? UNIDENTIFIED : null}
-          onChange={(id) => field.onChange(id === UNIDENTIFIED ? null : Number(id))}
+          onChange={(id) => field.onChange(choose(id === UNIDENTIFIED ? null : Number(id)))}
           why="Plastics that give off chlorine, such as PVC or vinyl, are never engraved."
           placeholder="Choose a stock"
         />

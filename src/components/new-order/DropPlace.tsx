@@ -1,5 +1,6 @@
 import { FileTrigger } from 'react-aria-components/FileTrigger';
 import { Button } from '../Button';
+import { useHydrated } from '../use-hydrated';
 import { TAKEN } from './file-refusal';
 
 interface Props {
@@ -21,9 +22,10 @@ export function DropPlace({ onFile }: Props) {
 }
 
 export function FileButton({ words, onFile }: Props & { words: string }) {
+  const alive = useHydrated();
   return (
     <FileTrigger acceptedFileTypes={TAKEN.split(',')} onSelect={(files) => files?.[0] && onFile(files[0])}>
-      <Button>{words}</Button>
+      <Button isDisabled={!alive}>{words}</Button>
     </FileTrigger>
   );
 }

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { useFormContext, useWatch } from 'react-hook-form';
 import type { CheckReport } from '@/lib/prepare/report';
 import { Button } from '../Button';
@@ -24,6 +24,14 @@ export function SizePart({ check, unit, onUnit }: Props) {
     form.setValue('widthMm', size.widthMm, { shouldDirty: true });
     form.setValue('heightMm', size.heightMm, { shouldDirty: true, shouldTouch: true });
   };
+  // A side typed before the proportions were known: the other follows as soon as they are.
+  const { setValue } = form;
+  useEffect(() => {
+    if (!locked || aspect === null || (widthMm === null) === (heightMm === null)) return;
+    const size = widthMm !== null ? lockedSize('width', widthMm, aspect) : lockedSize('height', heightMm, aspect);
+    setValue('widthMm', size.widthMm, { shouldDirty: true });
+    setValue('heightMm', size.heightMm, { shouldDirty: true, shouldTouch: true });
+  }, [aspect, heightMm, locked, setValue, widthMm]);
   const change = (side: 'width' | 'height') => (value: number | null) => {
     if (locked && aspect !== null) return set(lockedSize(side, value, aspect));
     set(side === 'width' ? { widthMm: value, heightMm } : { widthMm, heightMm: value });
