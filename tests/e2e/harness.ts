@@ -1,8 +1,8 @@
 import { AxeBuilder } from '@axe-core/playwright';
-import { readFileSync } from 'node:fs';
+import { mkdirSync, readFileSync } from 'node:fs';
 import path from 'node:path';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
-import { expect } from 'vitest';
+import { expect, onTestFailed } from 'vitest';
 import { needsTool } from '../setup/reference-tool';
 import { serve } from '../setup/serve.mjs';
 
@@ -58,6 +58,12 @@ export async function openStage(): Promise<Stage> {
         if (!url.startsWith(server.base) && !/^(data|blob):/.test(url)) throw new Error(`a page asked for ${url}`);
       });
       const page = await context.newPage();
+      onTestFailed(async ({ task }) => {
+        const folder = path.join(root, 'screenshots');
+        mkdirSync(folder, { recursive: true });
+        const name = `${task.name}-${role ?? 'nobody'}`.replace(/[^A-Za-z0-9]+/g, '-').slice(0, 80);
+        await page.screenshot({ path: path.join(folder, `${name}.png`), fullPage: true });
+      });
       if (role) await signIn(page, role);
       return page;
     },
