@@ -68,7 +68,8 @@ export function Plate(props: Props) {
       aria-roledescription="picture viewer"
       aria-label={props.label}
       tabIndex={0}
-      className={`relative flex h-[min(62vh,560px)] min-h-[280px] w-full select-none gap-px bg-edge max-md:h-[min(56vh,420px)] ${panes.length > 1 ? 'max-md:flex-col' : ''} ${control.isFitted ? 'cursor-default touch-pan-y' : 'cursor-grab touch-none active:cursor-grabbing'}`}
+      className={`relative flex max-h-[min(62vh,560px)] min-h-[240px] w-full select-none gap-px bg-edge max-md:max-h-[56vh] ${panes.length > 1 ? 'max-md:flex-col' : ''} ${control.isFitted ? 'cursor-default touch-pan-y' : 'cursor-grab touch-none active:cursor-grabbing'}`}
+      style={{ aspectRatio: `${plate.widthMm} / ${plate.heightMm}` }}
       {...props.handlers}
     >
       {panes.map((layers, index) => (
