@@ -41,6 +41,8 @@ export async function serve(env = {}) {
   const childEnv = {
     ...process.env,
     NODE_ENV: 'development',
+    // The demo shop's own orders would stand in the queue before those of a test.
+    DEMO_ORDERS: 'no',
     SESSION_SECRET: `development-${randomBytes(32).toString('base64url')}`,
     ...env,
     PORT: String(port),

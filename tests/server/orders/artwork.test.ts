@@ -115,6 +115,16 @@ describe('an upload', () => {
     expect(await jsonOf<Problem>(await send(fileForm('picture')), 507)).toMatchObject({ title: 'The shop’s disk is nearly full.' });
   });
 
+  it('that meets a full disk half-way says so, and nothing stays', async () => {
+    useStorage({
+      ...memoryStorage(),
+      receive: async () => {
+        throw Object.assign(new Error('write'), { code: 'ENOSPC' });
+      },
+    });
+    expect(await jsonOf<Problem>(await send(fileForm('picture'.repeat(50_000))), 507)).toMatchObject({ code: 'no-room' });
+  });
+
   it('to a stranger’s order is not found, and is not read', async () => {
     for (const who of [shop.stranger, shop.unconfirmed]) {
       expect((await call(POST, { person: who, params: { number }, method: 'POST', raw: fileForm('x') })).status).toBe(404);

@@ -1,6 +1,7 @@
 import { ArtworkError } from '../../prepare/tools';
 import { AppError } from '../errors';
 import { log } from '../log';
+import { isDiskFull } from '../storage/disk-full';
 
 const SAFE_HEADERS = { 'cache-control': 'no-store', 'x-content-type-options': 'nosniff' };
 
@@ -13,6 +14,7 @@ function refusalFor(error: unknown): AppError {
   if (error instanceof ArtworkError) {
     return new AppError(error.code === 'too-large' ? 'artwork-too-large' : 'artwork-refused', { detail: error.message }, { cause: error });
   }
+  if (isDiskFull(error)) return new AppError('no-room', {}, { cause: error });
   log.error({ err: error }, 'an endpoint broke');
   return new AppError('broken', {}, { cause: error });
 }

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { ArtworkError } from '../../prepare/tools';
 import { AppError } from '../errors';
+import { isDiskFull } from '../storage/disk-full';
 import { StorageError } from '../storage/storage';
 
 /** The task took longer than it may. */
@@ -26,11 +27,6 @@ export interface Failure {
 export const LOST_WORDS =
   'The work broke off three times without an answer, as it does when the machine is switched off or runs out of memory. Start it again; if it breaks off again, try a smaller size or a wider line pitch.';
 
-const isFull = (error: unknown): boolean => {
-  const { code, cause } = (error ?? {}) as NodeJS.ErrnoException & { cause?: unknown };
-  return code === 'ENOSPC' || code === 'EDQUOT' || code === 'SQLITE_FULL' || (cause !== undefined && isFull(cause));
-};
-
 const minutes = (ms: number): string => (ms < 120_000 ? `${Math.max(1, Math.round(ms / 1000))} seconds` : `${Math.round(ms / 60_000)} minutes`);
 
 /** What a person is told of an error that ended an attempt. */
@@ -46,7 +42,7 @@ export function failureOf(error: unknown): Failure {
       again: false,
     };
   }
-  if (isFull(error)) {
+  if (isDiskFull(error)) {
     return { words: 'The disk is full, so the result could not be kept. Make room on the shop’s machine, then start it again.', again: true };
   }
   if (error instanceof StorageError) {

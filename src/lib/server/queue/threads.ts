@@ -59,10 +59,24 @@ async function withProgress<T>(kind: Long['kind'], context: TaskContext, workOf:
 
 const sha256 = (bytes: Uint8Array | string): string => createHash('sha256').update(bytes).digest('hex');
 
+/** Whoever uploads waits for this, so it ends in either case. */
+const READ_MS = 15_000;
+
+async function readInTime(bytes: Uint8Array): Promise<{ format: ArtworkFormat }> {
+  const signal = AbortSignal.timeout(READ_MS);
+  try {
+    return await inThread<{ format: ArtworkFormat }>({ kind: 'read', bytes }, { signal });
+  } catch (error) {
+    if (!signal.aborted) throw error;
+    const words = 'This file takes too long to read. Export it with fewer details or at a smaller size, and send that.';
+    throw new ArtworkError('too-slow', words, { cause: error });
+  }
+}
+
 /** The pipeline in a pool of threads; an aborted signal ends the thread that works for it. */
 export function pipelineInThreads(): Pipeline {
   return {
-    read: (bytes) => inThread<{ format: ArtworkFormat }>({ kind: 'read', bytes }, {}),
+    read: readInTime,
     check: (bytes, settings, context) => withProgress<Checked>('check', context, (port) => ({ kind: 'check', bytes, settings, port })),
     prepare: (bytes, request, context) => withProgress<Prepared>('prepare', context, (port) => ({ kind: 'prepare', bytes, ...request, port })),
     keyOf: async (artworkSha256, request) => preparationKey({ artworkSha256, ...request }, { sha256 }),

@@ -37,7 +37,15 @@ async function requireMachine(trx: Transaction, design: Design): Promise<Machine
 const checked = (design: Design | null): string =>
   JSON.stringify(design && [design.machineId, design.spotPresetId, design.scan, design.treatment, design.dividingLstar]);
 
-/** Keeps the designer's choices; a pass holds for what was prepared until it is prepared again. */
+const keys = (design: Design): (keyof Design)[] => Object.keys(design) as (keyof Design)[];
+
+/** Which choices differ, for the record. */
+const changedWords = (before: Design | null, after: Design): string =>
+  keys(after)
+    .filter((key) => !before || JSON.stringify(before[key]) !== JSON.stringify(after[key]))
+    .join(', ');
+
+/** Keeps the designer’s choices; a pass holds for what was prepared until it is prepared again. */
 export async function keepDesign(person: Person, number: string, version: number, design: Design): Promise<OrderView> {
   return withWrite(async (trx) => {
     const row = await findUnchangedOrder(trx, person, number, version);
@@ -53,7 +61,7 @@ export async function keepDesign(person: Person, number: string, version: number
       recipe_typed_by: retyped ? person.name : row.recipe_typed_by,
     };
     if (!(await changeOrder(trx, row, change))) throw new AppError('conflict');
-    await audit(trx, { by: person, event: 'design', subject: number, words: design.treatment });
+    await audit(trx, { by: person, event: 'design', subject: number, words: changedWords(before, design) });
     if (checked(before) !== checked(design)) await askForCheck(trx, row.id, 'settled');
     return viewAfter(trx, row.id, person);
   });
