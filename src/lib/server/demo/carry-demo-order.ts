@@ -63,6 +63,7 @@ async function open(shop: DemoShop, demo: DemoOrder): Promise<OrderView> {
   const walkIn = demo.customer === 'walk-in';
   const opener = walkIn ? shop.designer : shop.registered;
   const { number } = await openOrder(opener, { title: demo.title }, walkIn ? shop.walkIn.id : undefined);
+  // Samples are part of the project, not of what the shop stores.
   const bytes = await readFile(path.resolve('samples', demo.artwork));
   const incoming = await (await storage()).receive((async function* () {
     yield bytes;
