@@ -26,5 +26,7 @@ describe('dates', () => {
     ['2026-11-30', '1 day late'],
     ['2026-11-20', '11 days late'],
     [null, 'no date'],
-  ])('due %s on 1 December: %s', (due, words) => expect(dueWords(due, '2026-12-01T23:30:00.000Z')).toBe(words));
+  ])('due %s on 1 December: %s', (due, words) =>
+    expect(dueWords(due, '2026-12-01T23:30:00.000Z')).toBe(words),
+  );
 });

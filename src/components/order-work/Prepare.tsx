@@ -20,6 +20,8 @@ interface Props {
 
 const VOIDING = ['passed', 'proof-sent', 'approved', 'released'] as const;
 
+const isUnderWay = (task: TaskView | null): boolean => task?.state === 'waiting' || task?.state === 'running';
+
 function stageWords(task: TaskView): string {
   if (task.state === 'waiting') return 'Waiting for its turn';
   return `${task.stage || 'Preparing'}, ${Math.round(task.progress * 100)} %`;
@@ -28,8 +30,9 @@ function stageWords(task: TaskView): string {
 /** Starts a preparation, shows it on the rule, and says what to do where it failed. */
 export function Prepare({ order, latest, liveTask, isStale, isBusy, isDisabled, error, onPrepare }: Props) {
   const [asking, setAsking] = useState(false);
-  const task = liveTask ?? latest?.task ?? null;
-  const running = isBusy || task?.state === 'waiting' || task?.state === 'running';
+  // The stream may still tell of the preparation before this one, which is over.
+  const task = isUnderWay(liveTask) ? liveTask : (latest?.task ?? null);
+  const running = isBusy || isUnderWay(task);
   const voids = VOIDING.some((state) => state === order.state);
   const name = latest ? 'Prepare again' : 'Prepare';
   return (

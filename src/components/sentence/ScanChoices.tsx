@@ -47,10 +47,12 @@ export function PitchChoice({ design, context, onChange }: ChoiceProps) {
       </p>
       {Math.abs(scan.linePitchMm - asked) > 0.0005 && (
         <p className="text-15">
-          The spot is {sizeAcrossMm.toFixed(3)} mm across this direction.{' '}
-          <Button kind="text" onPress={() => setLine(asked)}>
-            Use {pitchWords(asked)}
-          </Button>
+          The spot is {sizeAcrossMm.toFixed(3)} mm across this direction.
+          <span className="-ml-2 block">
+            <Button kind="text" onPress={() => setLine(asked)}>
+              Use {pitchWords(asked)}
+            </Button>
+          </span>
         </p>
       )}
       <Checkbox

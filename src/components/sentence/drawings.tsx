@@ -89,7 +89,10 @@ export function LinesDrawing({ spot, directionDeg, linePitchMm, pxPerMm = 220, l
             width={width}
             height={across}
             fill="currentColor"
-            fillOpacity="0.3" stroke="currentColor" strokeOpacity="0.55" strokeWidth="0.75"
+            fillOpacity="0.3"
+            stroke="currentColor"
+            strokeOpacity="0.55"
+            strokeWidth="0.75"
           />
         );
       })}

@@ -21,16 +21,33 @@ function machinePairs(machine: MachineView): [string, string][] {
   const reach = runOff(machine.maxSpeedMmPerS, machine.accelerationMmPerS2);
   return [
     ['Bed', `${machine.bedWidthMm} × ${machine.bedHeightMm} mm`],
-    ['Speed', `at most ${machine.maxSpeedMmPerS} mm/s, shown in ${machine.speedUnit}; acceleration ${machine.accelerationMmPerS2.toLocaleString('en-GB')} mm/s², run-off ${reach.toFixed(1)} mm at full speed`],
-    ['Power', `${machine.wattsAtFull} W at 100 %, ${machine.powerLevels} levels, lases from ${machine.lasingThresholdPercent} %; ${machine.powerCurve.length > 1 ? `curve of ${machine.powerCurve.length} points measured` : 'no curve measured, so dose assumes linear power'}`],
+    [
+      'Speed',
+      `at most ${machine.maxSpeedMmPerS} mm/s, shown in ${machine.speedUnit}; acceleration ${machine.accelerationMmPerS2.toLocaleString('en-GB')} mm/s², run-off ${reach.toFixed(1)} mm at full speed`,
+    ],
+    [
+      'Power',
+      `${machine.wattsAtFull} W at 100 %, ${machine.powerLevels} levels, lases from ${machine.lasingThresholdPercent} %; ${machine.powerCurve.length > 1 ? `curve of ${machine.powerCurve.length} points measured` : 'no curve measured, so dose assumes linear power'}`,
+    ],
     ['Firing', `${machine.firing}, ${machine.scanning} scanning`],
   ];
 }
 
-function PresetEntry({ machine, preset, onChange }: { machine: MachineView; preset: Preset; onChange: () => void }) {
+function PresetEntry({
+  machine,
+  preset,
+  onChange,
+}: {
+  machine: MachineView;
+  preset: Preset;
+  onChange: () => void;
+}) {
   const queries = useQueryClient();
   const remove = useMutation({
-    mutationFn: () => call('DELETE /api/machines/:id/spot-presets/:presetId', { params: { id: machine.id, presetId: preset.id } }),
+    mutationFn: () =>
+      call('DELETE /api/machines/:id/spot-presets/:presetId', {
+        params: { id: machine.id, presetId: preset.id },
+      }),
     onSuccess: () => queries.invalidateQueries({ queryKey: ['machines'] }),
   });
   return (
@@ -38,7 +55,8 @@ function PresetEntry({ machine, preset, onChange }: { machine: MachineView; pres
       <div className="min-w-0">
         <p className="font-semibold">{preset.name}</p>
         <p className="text-15">
-          {spotWords(preset)}, {preset.shape === 'ellipse' ? 'ellipse' : 'rectangle'}. Lines touch at {pitchWords(sizeAcross(preset, 0))} apart at 0°, at {pitchWords(sizeAcross(preset, 90))} at 90°.
+          {spotWords(preset)}, {preset.shape === 'ellipse' ? 'ellipse' : 'rectangle'}. Lines touch at{' '}
+          {pitchWords(sizeAcross(preset, 0))} apart at 0°, at {pitchWords(sizeAcross(preset, 90))} at 90°.
         </p>
         <p className="text-13 text-quiet">
           Measured by: {MEASURED_WORDS[preset.measuredBy]}
@@ -63,7 +81,8 @@ function MachineEntry({ machine }: { machine: MachineView }) {
   const queries = useQueryClient();
   const [open, setOpen] = useState<'machine' | 'new-preset' | Preset | null>(null);
   const retire = useMutation({
-    mutationFn: () => call('PATCH /api/machines/:id', { params: { id: machine.id }, body: { retired: !machine.retired } }),
+    mutationFn: () =>
+      call('PATCH /api/machines/:id', { params: { id: machine.id }, body: { retired: !machine.retired } }),
     onSuccess: () => queries.invalidateQueries({ queryKey: ['machines'] }),
   });
   const close = () => setOpen(null);
@@ -84,7 +103,9 @@ function MachineEntry({ machine }: { machine: MachineView }) {
       </div>
       {retire.error && <ProblemNotice problem={problemOf(retire.error)} />}
       <h3>Spot presets</h3>
-      <p className="text-13 text-quiet">Each spot to one scale, then four of its lines at pitch ratio 1, at 0° and at 90°.</p>
+      <p className="text-13 text-quiet">
+        Each spot to one scale, then four of its lines at pitch ratio 1, at 0° and at 90°.
+      </p>
       <ul className="flex flex-col">
         {machine.spotPresets.map((preset) => (
           <PresetEntry key={preset.id} machine={machine} preset={preset} onChange={() => setOpen(preset)} />
@@ -95,14 +116,19 @@ function MachineEntry({ machine }: { machine: MachineView }) {
       </div>
       {open === 'machine' && <MachineForm machine={machine} onClose={close} />}
       {open === 'new-preset' && <PresetForm machine={machine} preset={null} onClose={close} />}
-      {open !== null && typeof open === 'object' && <PresetForm machine={machine} preset={open} onClose={close} />}
+      {open !== null && typeof open === 'object' && (
+        <PresetForm machine={machine} preset={open} onClose={close} />
+      )}
     </section>
   );
 }
 
 function List() {
   const [adding, setAdding] = useState(false);
-  const { data, error, isPending } = useQuery({ queryKey: ['machines'], queryFn: ({ signal }) => call('GET /api/machines', { signal }) });
+  const { data, error, isPending } = useQuery({
+    queryKey: ['machines'],
+    queryFn: ({ signal }) => call('GET /api/machines', { signal }),
+  });
   if (error) return <ProblemNotice problem={problemOf(error)} />;
   if (isPending) return <SkeletonTable columns={2} words="Fetching the machines" />;
   return (

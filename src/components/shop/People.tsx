@@ -16,13 +16,24 @@ import { TextField } from '../TextField';
 import { Pick, Words } from './controlled';
 import { FormDialog } from './FormDialog';
 
-const ROLE_WORDS: Record<Role, string> = { customer: 'Customer', designer: 'Designer', operator: 'Operator', admin: 'Admin' };
-const inviteSchema = z.object({ email: z.email('Enter a whole address, such as name@example.org.').max(254), role: roleSchema });
+const ROLE_WORDS: Record<Role, string> = {
+  customer: 'Customer',
+  designer: 'Designer',
+  operator: 'Operator',
+  admin: 'Admin',
+};
+const inviteSchema = z.object({
+  email: z.email('Enter a whole address, such as name@example.org.').max(254),
+  role: roleSchema,
+});
 type Invitation = z.infer<typeof inviteSchema>;
 const ROLE_CHOICES = roleSchema.options.map((id) => ({ id, name: ROLE_WORDS[id] }));
 
 function InviteForm({ onClose, onSent }: { onClose: () => void; onSent: (email: string) => void }) {
-  const form = useForm<Invitation>({ resolver: zodResolver(inviteSchema), defaultValues: { email: '', role: 'designer' } });
+  const form = useForm<Invitation>({
+    resolver: zodResolver(inviteSchema),
+    defaultValues: { email: '', role: 'designer' },
+  });
   const send = useMutation({
     mutationFn: (body: Invitation) => call('POST /api/people/invitations', { body }),
     onSuccess: (_, { email }) => {
@@ -31,9 +42,21 @@ function InviteForm({ onClose, onSent }: { onClose: () => void; onSent: (email: 
     },
   });
   return (
-    <FormDialog title="Invite staff" confirm="Send invitation" isBusy={send.isPending} error={send.error} onSubmit={() => void form.handleSubmit((body) => send.mutate(body))()} onClose={onClose}>
+    <FormDialog
+      title="Invite staff"
+      confirm="Send invitation"
+      isBusy={send.isPending}
+      error={send.error}
+      onSubmit={() => void form.handleSubmit((body) => send.mutate(body))()}
+      onClose={onClose}
+    >
       <Words control={form.control} name="email" type="email" label="E-mail address" />
-      <Pick control={form.control} name="role" label="Role" choices={ROLE_CHOICES.filter(({ id }) => id !== 'customer')} />
+      <Pick
+        control={form.control}
+        name="role"
+        label="Role"
+        choices={ROLE_CHOICES.filter(({ id }) => id !== 'customer')}
+      />
     </FormDialog>
   );
 }
@@ -41,7 +64,8 @@ function InviteForm({ onClose, onSent }: { onClose: () => void; onSent: (email: 
 function PersonEntry({ person, isSelf }: { person: PersonView; isSelf: boolean }) {
   const queries = useQueryClient();
   const change = useMutation({
-    mutationFn: (body: { role?: Role; disabled?: boolean }) => call('PATCH /api/people/:id', { params: { id: person.id }, body }),
+    mutationFn: (body: { role?: Role; disabled?: boolean }) =>
+      call('PATCH /api/people/:id', { params: { id: person.id }, body }),
     onSuccess: () => queries.invalidateQueries({ queryKey: ['people'] }),
   });
   return (
@@ -58,8 +82,19 @@ function PersonEntry({ person, isSelf }: { person: PersonView; isSelf: boolean }
         </p>
         {change.error && <ProblemNotice problem={problemOf(change.error)} />}
       </div>
-      <Select label={`Role of ${person.name}`} hideLabel value={person.role} onChange={(id) => change.mutate({ role: roleSchema.parse(id) })} choices={ROLE_CHOICES} isDisabled={change.isPending} />
-      <Button kind={person.disabled ? 'outlined' : 'text'} isDisabled={change.isPending} onPress={() => change.mutate({ disabled: !person.disabled })}>
+      <Select
+        label={`Role of ${person.name}`}
+        hideLabel
+        value={person.role}
+        onChange={(id) => change.mutate({ role: roleSchema.parse(id) })}
+        choices={ROLE_CHOICES}
+        isDisabled={change.isPending}
+      />
+      <Button
+        kind={person.disabled ? 'outlined' : 'text'}
+        isDisabled={change.isPending}
+        onPress={() => change.mutate({ disabled: !person.disabled })}
+      >
         {person.disabled ? 'Enable again' : 'Disable'}
         <span className="hidden-words"> {person.name}</span>
       </Button>
@@ -86,9 +121,24 @@ function List({ selfId }: { selfId: number }) {
         </Button>
         {sent && <p role="status">An invitation is on its way to {sent}.</p>}
       </div>
-      <form role="search" className="grid items-end gap-4 md:grid-cols-[minmax(0,1fr)_180px]" onSubmit={(event) => event.preventDefault()}>
-        <TextField label="Search" type="search" value={q} onChange={(words) => setQ(words.slice(0, 100))} placeholder="Name or address" />
-        <Select label="Role" value={role} onChange={(id) => setRole(roleSchema.options.find((known) => known === id) ?? 'any')} choices={[{ id: 'any', name: 'Any role' }, ...ROLE_CHOICES]} />
+      <form
+        role="search"
+        className="grid items-end gap-4 md:grid-cols-[minmax(0,1fr)_180px]"
+        onSubmit={(event) => event.preventDefault()}
+      >
+        <TextField
+          label="Search"
+          type="search"
+          value={q}
+          onChange={(words) => setQ(words.slice(0, 100))}
+          placeholder="Name or address"
+        />
+        <Select
+          label="Role"
+          value={role}
+          onChange={(id) => setRole(roleSchema.options.find((known) => known === id) ?? 'any')}
+          choices={[{ id: 'any', name: 'Any role' }, ...ROLE_CHOICES]}
+        />
       </form>
       {error && <ProblemNotice problem={problemOf(error)} />}
       {isPending && !error && <SkeletonTable columns={3} words="Fetching people" />}

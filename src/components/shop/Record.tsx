@@ -28,14 +28,27 @@ function Entries() {
   return (
     <div className="flex flex-col gap-6">
       <form role="search" className="max-w-form" onSubmit={(event) => event.preventDefault()}>
-        <TextField label="Search" type="search" value={asked.q} onChange={(q) => setAsked({ q: q.slice(0, 100), page: 1 })} placeholder="Order, name or event" />
+        <TextField
+          label="Search"
+          type="search"
+          value={asked.q}
+          onChange={(q) => setAsked({ q: q.slice(0, 100), page: 1 })}
+          placeholder="Order, name or event"
+        />
       </form>
       {error && <ProblemNotice problem={problemOf(error)} />}
       {isPending && !error && <SkeletonTable columns={4} words="Fetching the record" />}
-      {data?.total === 0 && <EmptyState words={asked.q ? 'Nothing in the record fits this search.' : 'Nothing is recorded yet.'} />}
+      {data?.total === 0 && (
+        <EmptyState
+          words={asked.q ? 'Nothing in the record fits this search.' : 'Nothing is recorded yet.'}
+        />
+      )}
       <ol className="flex flex-col">
         {data?.entries.map((entry) => (
-          <li key={entry.id} className="grid gap-x-6 border-b border-hair py-2.5 text-15 md:grid-cols-[13em_12em_minmax(0,1fr)]">
+          <li
+            key={entry.id}
+            className="grid gap-x-6 border-b border-hair py-2.5 text-15 md:grid-cols-[13em_12em_minmax(0,1fr)]"
+          >
             <span className="figure text-quiet">{momentWords(entry.at)}</span>
             <span className="break-words font-semibold">{entry.by}</span>
             <span className="min-w-0 break-words">
@@ -50,7 +63,14 @@ function Entries() {
           </li>
         ))}
       </ol>
-      {data && data.total > 0 && <Pages page={data.page} perPage={data.perPage} total={data.total} onPage={(page) => setAsked({ ...asked, page })} />}
+      {data && data.total > 0 && (
+        <Pages
+          page={data.page}
+          perPage={data.perPage}
+          total={data.total}
+          onPage={(page) => setAsked({ ...asked, page })}
+        />
+      )}
     </div>
   );
 }

@@ -26,16 +26,34 @@ export function SpotLines({ preset, pxPerMm = 160 }: Props) {
       className="max-w-full text-ink"
     >
       <g transform={`translate(${w / 2 + 1} ${height / 2})`} fill="currentColor">
-        {preset.shape === 'ellipse' ? <ellipse rx={w / 2} ry={h / 2} /> : <rect x={-w / 2} y={-h / 2} width={w} height={h} />}
+        {preset.shape === 'ellipse' ? (
+          <ellipse rx={w / 2} ry={h / 2} />
+        ) : (
+          <rect x={-w / 2} y={-h / 2} width={w} height={h} />
+        )}
       </g>
       <g transform={`translate(${left} 2)`} fill="currentColor">
         {[0, 1, 2, 3].map((i) => (
-          <rect key={i} y={i * extents.flat} width={WIDTH} height={extents.flat - 1} rx={preset.shape === 'ellipse' ? extents.flat / 2 : 0} opacity="0.75" />
+          <rect
+            key={i}
+            y={i * extents.flat}
+            width={WIDTH}
+            height={extents.flat - 1}
+            rx={preset.shape === 'ellipse' ? extents.flat / 2 : 0}
+            opacity="0.75"
+          />
         ))}
       </g>
       <g transform={`translate(${left + WIDTH + 24} 2)`} fill="currentColor">
         {[0, 1, 2, 3].map((i) => (
-          <rect key={i} x={i * extents.upright} width={extents.upright - 1} height={height - 4} rx={preset.shape === 'ellipse' ? extents.upright / 2 : 0} opacity="0.75" />
+          <rect
+            key={i}
+            x={i * extents.upright}
+            width={extents.upright - 1}
+            height={height - 4}
+            rx={preset.shape === 'ellipse' ? extents.upright / 2 : 0}
+            opacity="0.75"
+          />
         ))}
       </g>
     </svg>

@@ -30,7 +30,8 @@ function Colours({ stock }: { stock: StockView }) {
 function StockEntry({ stock, onChange }: { stock: StockView; onChange: () => void }) {
   const queries = useQueryClient();
   const retire = useMutation({
-    mutationFn: () => call('PATCH /api/stocks/:id', { params: { id: stock.id }, body: { retired: !stock.retired } }),
+    mutationFn: () =>
+      call('PATCH /api/stocks/:id', { params: { id: stock.id }, body: { retired: !stock.retired } }),
     onSuccess: () => queries.invalidateQueries({ queryKey: ['stocks'] }),
   });
   const cautions = stock.cautions.map((id) => cautionOf(id, true).title.toLowerCase());
@@ -66,7 +67,10 @@ function StockEntry({ stock, onChange }: { stock: StockView; onChange: () => voi
 
 function List() {
   const [open, setOpen] = useState<'new' | StockView | null>(null);
-  const { data, error, isPending } = useQuery({ queryKey: ['stocks'], queryFn: ({ signal }) => call('GET /api/stocks', { signal }) });
+  const { data, error, isPending } = useQuery({
+    queryKey: ['stocks'],
+    queryFn: ({ signal }) => call('GET /api/stocks', { signal }),
+  });
   if (error) return <ProblemNotice problem={problemOf(error)} />;
   if (isPending) return <SkeletonTable columns={2} words="Fetching the stocks" />;
   return (
@@ -74,7 +78,9 @@ function List() {
       <div>
         <Button onPress={() => setOpen('new')}>Add a stock</Button>
       </div>
-      {data.stocks.length === 0 && <EmptyState words="No stock yet. Add what the shop keeps on its shelves." />}
+      {data.stocks.length === 0 && (
+        <EmptyState words="No stock yet. Add what the shop keeps on its shelves." />
+      )}
       {data.stocks.map((stock) => (
         <StockEntry key={stock.id} stock={stock} onChange={() => setOpen(stock)} />
       ))}

@@ -14,7 +14,12 @@ import { TextField } from '../TextField';
 import { orderKey } from '../use-order';
 import { OutcomeWords } from './Outcomes';
 
-const OWN = { state: 'running,finished,handed-over,released', sort: 'updated', order: 'down', perPage: 10 } as const;
+const OWN = {
+  state: 'running,finished,handed-over,released',
+  sort: 'updated',
+  order: 'down',
+  perPage: 10,
+} as const;
 
 /** Orders with what came out of them. The list gives the orders; each is asked for what was recorded. */
 function useRecorded(rows: readonly OrderRow[]) {
@@ -48,7 +53,11 @@ function Entry({ row, order }: ReturnType<typeof useRecorded>[number]) {
             <OutcomeWords outcome={outcome} />
           </li>
         ))}
-        {order && order.outcomes.length === 0 && <li className="text-quiet">{row.state === 'running' ? 'Running. Nothing recorded yet.' : 'Nothing recorded.'}</li>}
+        {order && order.outcomes.length === 0 && (
+          <li className="text-quiet">
+            {row.state === 'running' ? 'Running. Nothing recorded yet.' : 'Nothing recorded.'}
+          </li>
+        )}
       </ul>
     </li>
   );
@@ -61,11 +70,19 @@ function Ledger({ initialSearch }: { initialSearch: string }) {
     queryFn: ({ signal }) => call('GET /api/orders', { query, signal }),
     placeholderData: (former) => former,
   });
-  const entries = useRecorded(data?.rows ?? []).filter(({ row, order }) => row.state !== 'released' || (order?.outcomes.length ?? 0) > 0);
+  const entries = useRecorded(data?.rows ?? []).filter(
+    ({ row, order }) => row.state !== 'released' || (order?.outcomes.length ?? 0) > 0,
+  );
   return (
     <div className="flex flex-col gap-6">
       <form role="search" className="max-w-form" onSubmit={(event) => event.preventDefault()}>
-        <TextField label="Search" type="search" value={query.q} onChange={(q) => change({ q: q.slice(0, 100) }, 'replace')} placeholder="Number, title or name" />
+        <TextField
+          label="Search"
+          type="search"
+          value={query.q}
+          onChange={(q) => change({ q: q.slice(0, 100) }, 'replace')}
+          placeholder="Number, title or name"
+        />
       </form>
       {error && (
         <ProblemNotice problem={problemOf(error)}>
@@ -73,13 +90,24 @@ function Ledger({ initialSearch }: { initialSearch: string }) {
         </ProblemNotice>
       )}
       {isPending && !error && <SkeletonTable columns={3} words="Fetching the outcomes" />}
-      {data && entries.length === 0 && <EmptyState words={query.q ? 'No outcome fits this search.' : 'Nothing has come off a machine yet.'} />}
+      {data && entries.length === 0 && (
+        <EmptyState
+          words={query.q ? 'No outcome fits this search.' : 'Nothing has come off a machine yet.'}
+        />
+      )}
       <ul>
         {entries.map((entry) => (
           <Entry key={entry.row.number} {...entry} />
         ))}
       </ul>
-      {data && data.total > data.perPage && <Pages page={data.page} perPage={data.perPage} total={data.total} onPage={(page) => change({ page })} />}
+      {data && data.total > data.perPage && (
+        <Pages
+          page={data.page}
+          perPage={data.perPage}
+          total={data.total}
+          onPage={(page) => change({ page })}
+        />
+      )}
     </div>
   );
 }

@@ -7,7 +7,7 @@ import { CautionList } from '../CautionList';
 import { PlacementFigure } from '../PlacementFigure';
 import { dayWords, durationWords } from '../time-words';
 import { ROUTE_WORDS } from '../words';
-import { frameWords, lineworkLine, passLine } from './pass-lines';
+import { fileWords, frameWords, lineworkLine, passLine } from './pass-lines';
 import { paperScale, scaleWords, standsInColumn } from './paper-scale';
 import type { QrDrawing } from './qr-path';
 
@@ -87,9 +87,14 @@ function Plate({ preparation, report }: Pick<Props, 'preparation' | 'report'>) {
 function Passes({ report, speedUnit }: Pick<Props, 'report' | 'speedUnit'>) {
   const linework = lineworkLine(report, speedUnit);
   const fileOf = (pass: number) =>
-    report.files
-      .filter((f) => f.pass === pass && f.role === (linework ? 'linework' : 'raster'))
-      .map((f) => f.name);
+    fileWords(
+      report.files
+        .filter((f) => f.pass === pass && f.role === (linework ? 'linework' : 'raster'))
+        .map((f) => f.name),
+    );
+  report.files
+    .filter((f) => f.pass === pass && f.role === (linework ? 'linework' : 'raster'))
+    .map((f) => f.name);
   return (
     <section>
       <h2>Passes</h2>
@@ -100,11 +105,11 @@ function Passes({ report, speedUnit }: Pick<Props, 'report' | 'speedUnit'>) {
             <li key={pass.pass}>
               {passLine(pass, report, speedUnit)}.
               {frameWords(pass) && <span className="block">{frameWords(pass)}</span>}
-              <span className="block break-all">{fileOf(pass.pass).join(' or ')}</span>
+              <span className="block break-all">{fileOf(pass.pass)}</span>
             </li>
           ))}
       </ol>
-      {linework && <p className="break-all">{fileOf(1).join(' or ')}</p>}
+      {linework && <p className="break-all">{fileOf(1)}</p>}
       <p className="ticket-box">
         {linework
           ? 'Run the paths at their own size; do not rescale.'

@@ -47,3 +47,17 @@ export function lineworkLine(report: Report, speedUnit: 'mm/s' | 'mm/min'): stri
       : []),
   ].join('; ');
 }
+
+/** The same file in several formats as one name: "U-1004-pass1-0.110mm-0deg-1a2b3c4d, as .png, .tiff or .bmp". */
+export function fileWords(names: readonly string[]): string {
+  const stems = [...new Set(names.map((name) => name.replace(/\.[^.]+$/, '')))];
+  return stems
+    .map((stem) => {
+      const endings = names
+        .filter((name) => name.startsWith(`${stem}.`))
+        .map((name) => name.slice(stem.length));
+      const last = endings.pop();
+      return `${stem}, as ${endings.length > 0 ? `${endings.join(', ')} or ` : ''}${last}`;
+    })
+    .join('; ');
+}

@@ -18,11 +18,21 @@ export function DayRule({ day }: { day: MachineDay }) {
   const starts = timed.map((_, i) => timed.slice(0, i).reduce((sum, t) => sum + t.seconds, 0));
   return (
     <div className="rule overflow-hidden">
-      <svg height="46" role="img" aria-label={`${durationWords(day.seconds)} of scanning in ${day.rows.length} orders`}>
+      <svg
+        height="46"
+        role="img"
+        aria-label={`${durationWords(day.seconds)} of scanning in ${day.rows.length} orders`}
+      >
         {Array.from({ length: Math.round(extent / step) + 1 }, (_, i) => (
           <g key={i}>
             <line x1={percent(i * step)} x2={percent(i * step)} y1="22" y2="14" stroke="var(--ink)" />
-            <text x={percent(i * step)} y="10" fontSize="12" fill="currentColor" textAnchor={i === 0 ? 'start' : i * step === extent ? 'end' : 'middle'}>
+            <text
+              x={percent(i * step)}
+              y="10"
+              fontSize="12"
+              fill="currentColor"
+              textAnchor={i === 0 ? 'start' : i * step === extent ? 'end' : 'middle'}
+            >
               {i === 0 ? 'now' : durationWords(i * step)}
             </text>
           </g>
@@ -30,7 +40,15 @@ export function DayRule({ day }: { day: MachineDay }) {
         <line x1="0" x2="100%" y1="22" y2="22" stroke="var(--ink)" />
         {timed.map(({ row, seconds }, i) => (
           <g key={row.number}>
-            <rect x={percent(starts[i])} y="22" width={percent(seconds)} height="6" fill={row.state === 'running' ? 'var(--ink)' : 'none'} stroke="var(--ink)" strokeWidth="1" />
+            <rect
+              x={percent(starts[i])}
+              y="22"
+              width={percent(seconds)}
+              height="6"
+              fill={row.state === 'running' ? 'var(--ink)' : 'none'}
+              stroke="var(--ink)"
+              strokeWidth="1"
+            />
             {seconds / extent > 0.09 && (
               <text x={percent(starts[i])} dx="3" y="42" fontSize="12" fill="currentColor">
                 {row.number}

@@ -29,13 +29,20 @@ function MachinePart({ day, today }: { day: MachineDay; today: string }) {
           const seconds = orderSeconds(row);
           return (
             <li key={row.number} className="border-b border-hair">
-              <a href={`/tickets/${row.number}`} className="grid min-h-target grid-cols-[60px_minmax(0,1fr)_auto] items-center gap-4 py-3 text-15">
+              <a
+                href={`/tickets/${row.number}`}
+                className="grid min-h-target grid-cols-[60px_minmax(0,1fr)_auto] items-center gap-4 py-3 text-15"
+              >
                 <Thumbnail row={row} />
                 <span className="min-w-0">
-                  <span className="link figure font-semibold">{row.number}</span> <span className="break-words">{row.title || 'Without a title'}</span>
+                  <span className="link figure font-semibold">{row.number}</span>{' '}
+                  <span className="break-words">{row.title || 'Without a title'}</span>
                   <span className="block text-13 text-quiet">
-                    {row.state === 'running' && <span className="font-semibold text-ink">{STATE_WORDS.running}. </span>}
-                    {row.quantity.toLocaleString('en-GB')} {row.quantity === 1 ? 'piece' : 'pieces'}, {row.stockName || 'stock not named'}
+                    {row.state === 'running' && (
+                      <span className="font-semibold text-ink">{STATE_WORDS.running}. </span>
+                    )}
+                    {row.quantity.toLocaleString('en-GB')} {row.quantity === 1 ? 'piece' : 'pieces'},{' '}
+                    {row.stockName || 'stock not named'}
                     {seconds !== null && `, ${durationWords(seconds)}`}
                   </span>
                 </span>
@@ -66,13 +73,18 @@ function Plan({ today }: { today: string }) {
   }
   if (isPending) return <SkeletonTable columns={3} words="Fetching the tickets" />;
   const days = dayPlan(data.rows);
-  if (days.length === 0) return <EmptyState words="Nothing to run. A ticket appears here once a designer has released it." />;
+  if (days.length === 0)
+    return <EmptyState words="Nothing to run. A ticket appears here once a designer has released it." />;
   return (
     <div className="flex flex-col gap-16">
       {days.map((day) => (
         <MachinePart key={day.machineName} day={day} today={today} />
       ))}
-      {data.total > data.rows.length && <p className="text-quiet">The {data.rows.length} most urgent of {data.total.toLocaleString('en-GB')}.</p>}
+      {data.total > data.rows.length && (
+        <p className="text-quiet">
+          The {data.rows.length} most urgent of {data.total.toLocaleString('en-GB')}.
+        </p>
+      )}
     </div>
   );
 }

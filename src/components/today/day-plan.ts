@@ -12,11 +12,14 @@ export interface MachineDay {
 const NO_DATE = '9999-12-31';
 
 /** Scanning time of an order with all its pieces, s; null where it is not known. */
-export const orderSeconds = (row: OrderRow): number | null => (row.scanSeconds === null ? null : row.scanSeconds * row.quantity);
+export const orderSeconds = (row: OrderRow): number | null =>
+  row.scanSeconds === null ? null : row.scanSeconds * row.quantity;
 
 function byUrgency(a: OrderRow, b: OrderRow): number {
   const running = Number(b.state === 'running') - Number(a.state === 'running');
-  return running || (a.dueOn ?? NO_DATE).localeCompare(b.dueOn ?? NO_DATE) || a.number.localeCompare(b.number);
+  return (
+    running || (a.dueOn ?? NO_DATE).localeCompare(b.dueOn ?? NO_DATE) || a.number.localeCompare(b.number)
+  );
 }
 
 /** Released and running orders by machine: what runs comes first, then by due date; machines by their earliest order. */

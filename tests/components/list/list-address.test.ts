@@ -1,15 +1,31 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { changedList, readListAddress, sortedBy, writeListAddress, type ListQuery } from '../../../src/components/list/list-address';
+import {
+  changedList,
+  readListAddress,
+  sortedBy,
+  writeListAddress,
+  type ListQuery,
+} from '../../../src/components/list/list-address';
 
 const OWN = { state: 'submitted,in-preparation' } as const;
 
 describe('readListAddress', () => {
   it('shows the list’s own view where the address says nothing', () => {
-    expect(readListAddress('', OWN)).toEqual({ q: '', state: OWN.state, machineId: undefined, sort: 'due', order: 'up', page: 1, perPage: 25 });
+    expect(readListAddress('', OWN)).toEqual({
+      q: '',
+      state: OWN.state,
+      machineId: undefined,
+      sort: 'due',
+      order: 'up',
+      page: 1,
+      perPage: 25,
+    });
   });
   it('takes what the address says', () => {
-    expect(readListAddress('?q=harbour&state=&machineId=2&sort=customer&order=down&page=3', OWN)).toMatchObject({
+    expect(
+      readListAddress('?q=harbour&state=&machineId=2&sort=customer&order=down&page=3', OWN),
+    ).toMatchObject({
       q: 'harbour',
       state: '',
       machineId: 2,
@@ -44,7 +60,11 @@ describe('writeListAddress', () => {
       page: fc.integer({ min: 1, max: 500 }),
       perPage: fc.integer({ min: 1, max: 100 }),
     });
-    fc.assert(fc.property(query, (asked) => expect(readListAddress(writeListAddress(asked, OWN), OWN)).toEqual(asked)));
+    fc.assert(
+      fc.property(query, (asked) =>
+        expect(readListAddress(writeListAddress(asked, OWN), OWN)).toEqual(asked),
+      ),
+    );
   });
 });
 

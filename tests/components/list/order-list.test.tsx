@@ -15,7 +15,10 @@ function answer(rows: unknown[], total: number) {
   vi.stubGlobal('fetch', (input: string) => {
     const url = new URL(input, 'http://localhost');
     if (url.pathname === '/api/orders') asked.push(url);
-    const body = url.pathname === '/api/machines' ? { machines: [machine] } : { rows, total, page: Number(url.searchParams.get('page') ?? 1), perPage: 25 };
+    const body =
+      url.pathname === '/api/machines'
+        ? { machines: [machine] }
+        : { rows, total, page: Number(url.searchParams.get('page') ?? 1), perPage: 25 };
     return Promise.resolve(new Response(JSON.stringify(body), { status: 200 }));
   });
 }
@@ -23,7 +26,15 @@ function answer(rows: unknown[], total: number) {
 function open(search = '') {
   window.history.replaceState(null, '', `/queue${search}`);
   return render(
-    <OrderList initialSearch={search} today="2026-12-01" own={OWN} filters={FILTERS} columns={['number', 'title', 'customer', 'due']} hrefBase="/queue" empty="No order waits." />,
+    <OrderList
+      initialSearch={search}
+      today="2026-12-01"
+      own={OWN}
+      filters={FILTERS}
+      columns={['number', 'title', 'customer', 'due']}
+      hrefBase="/queue"
+      empty="No order waits."
+    />,
   );
 }
 
@@ -45,7 +56,9 @@ describe('OrderList', () => {
     fireEvent.click(screen.getByRole('button', { name: 'Customer' }));
     await waitFor(() => expect(window.location.search).toBe('?q=harbour&sort=customer'));
     await waitFor(() => expect(asked.at(-1)?.searchParams.get('sort')).toBe('customer'));
-    expect(screen.getByRole('columnheader', { name: 'Customer' }).getAttribute('aria-sort')).toBe('ascending');
+    expect(screen.getByRole('columnheader', { name: 'Customer' }).getAttribute('aria-sort')).toBe(
+      'ascending',
+    );
   });
   it('goes back with the browser', async () => {
     answer([orderRow()], 60);

@@ -7,7 +7,12 @@ import { design } from '../order-fixtures';
 const two: Design = {
   ...design,
   perpendicular: { linePitchMm: 0.07, alongPitchMm: 0.09 },
-  recipe: { powerPercent: 30, speedMmPerS: 400, perpendicular: { powerPercent: 25, speedMmPerS: 450 }, focusOffsetMm: 1.5 },
+  recipe: {
+    powerPercent: 30,
+    speedMmPerS: 400,
+    perpendicular: { powerPercent: 25, speedMmPerS: 450 },
+    focusOffsetMm: 1.5,
+  },
 };
 
 describe('figures', () => {
@@ -15,7 +20,8 @@ describe('figures', () => {
     expect(designOf(figuresSchema.parse(figuresOf(choices)), choices)).toEqual(choices);
   });
   it('name the field that is missing or out of range', () => {
-    const faults = (part: object) => figuresSchema.safeParse({ ...figuresOf(two), ...part }).error?.issues.map((i) => i.path[0]);
+    const faults = (part: object) =>
+      figuresSchema.safeParse({ ...figuresOf(two), ...part }).error?.issues.map((i) => i.path[0]);
     expect(faults({ linePitchMm: 0.001 })).toEqual(['linePitchMm']);
     expect(faults({ blackPoint: 0.9, whitePoint: 0.5 })).toEqual(['blackPoint']);
     expect(faults({ speedMmPerS: null })).toEqual(['speedMmPerS']);

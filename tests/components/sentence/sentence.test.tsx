@@ -16,20 +16,33 @@ function Page({ start = design, isDisabled = false }: { start?: Design; isDisabl
     kept.push(next);
     setNow(next);
   };
-  return <Sentence design={now} before={design} context={choiceContext(now, machines, orderView())} onChange={change} isDisabled={isDisabled} />;
+  return (
+    <Sentence
+      design={now}
+      before={design}
+      context={choiceContext(now, machines, orderView())}
+      onChange={change}
+      isDisabled={isDisabled}
+    />
+  );
 }
 
 beforeEach(() => {
   kept = [];
   vi.stubGlobal('CSS', { escape: (text: string) => text });
-  vi.stubGlobal('matchMedia', () => ({ matches: false, addEventListener: () => undefined, removeEventListener: () => undefined }));
+  vi.stubGlobal('matchMedia', () => ({
+    matches: false,
+    addEventListener: () => undefined,
+    removeEventListener: () => undefined,
+  }));
 });
 afterEach(() => {
   cleanup();
   vi.unstubAllGlobals();
 });
 
-const sentence = () => screen.getByRole('region', { name: 'Instruction' }).querySelector('p')?.textContent ?? '';
+const sentence = () =>
+  screen.getByRole('region', { name: 'Instruction' }).querySelector('p')?.textContent ?? '';
 
 describe('Sentence', () => {
   it('reads as one sentence in which every choice is a button', () => {

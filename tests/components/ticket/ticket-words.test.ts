@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { frameWords, lineworkLine, passLine } from '../../../src/components/ticket/pass-lines';
+import { fileWords, frameWords, lineworkLine, passLine } from '../../../src/components/ticket/pass-lines';
 import { paperScale, scaleWords, standsInColumn } from '../../../src/components/ticket/paper-scale';
 import { qrDrawing } from '../../../src/components/ticket/qr-path';
 import { report } from '../order-fixtures';
@@ -14,7 +14,11 @@ describe('paperScale', () => {
   ])('%i × %i mm is drawn 1 : %i', (width, height, scale) => expect(paperScale(width, height)).toBe(scale));
   it('says so in words', () => {
     expect([scaleWords(1), scaleWords(3)]).toEqual(['At true size', 'Drawn 1 : 3']);
-    expect([standsInColumn(90, 60), standsInColumn(150, 60), standsInColumn(190, 60)]).toEqual([true, false, true]);
+    expect([standsInColumn(90, 60), standsInColumn(150, 60), standsInColumn(190, 60)]).toEqual([
+      true,
+      false,
+      true,
+    ]);
   });
 });
 
@@ -26,14 +30,19 @@ describe('passLine', () => {
   });
   it('leaves out what is not known', () => {
     const bare = { ...report.passes[0], doseJPerMm2: null, scanSeconds: null, runOffMm: null };
-    expect(passLine(bare, { ...report, settings: { ...report.settings, recipe: null } }, 'mm/s')).toBe('545 lines at 0°, 0.110 mm apart');
+    expect(passLine(bare, { ...report, settings: { ...report.settings, recipe: null } }, 'mm/s')).toBe(
+      '545 lines at 0°, 0.110 mm apart',
+    );
   });
 });
 
 describe('frameWords', () => {
   it('says where a turned file lies, and nothing of an upright one', () => {
     expect(frameWords(report.passes[0])).toBeNull();
-    const turned = { ...report.passes[0], scanFrame: { angleDeg: 30, originXMm: 22.5, originYMm: -12.99, outline: [] } };
+    const turned = {
+      ...report.passes[0],
+      scanFrame: { angleDeg: 30, originXMm: 22.5, originYMm: -12.99, outline: [] },
+    };
     expect(frameWords(turned)).toBe(
       'The file lies turned by 30°, clockwise positive. Its top left corner is 22.50 mm right and −12.99 mm down from the artwork’s top left corner.',
     );
@@ -43,10 +52,19 @@ describe('frameWords', () => {
 describe('lineworkLine', () => {
   it('is there for linework alone', () => {
     expect(lineworkLine(report, 'mm/s')).toBeNull();
-    const trace = { method: 'followed' as const, nodes: 40, paths: 12, islandsDropped: 0, meanBoundaryMm: null, hausdorffMm: null, lengthMm: 812.4, optimised: true };
-    expect(lineworkLine({ ...report, trace, settings: { ...report.settings, treatment: 'linework' } }, 'mm/s')).toBe(
-      'Follow 12 paths, 812 mm in all; power 42 %, speed 320 mm/s; in focus',
-    );
+    const trace = {
+      method: 'followed' as const,
+      nodes: 40,
+      paths: 12,
+      islandsDropped: 0,
+      meanBoundaryMm: null,
+      hausdorffMm: null,
+      lengthMm: 812.4,
+      optimised: true,
+    };
+    expect(
+      lineworkLine({ ...report, trace, settings: { ...report.settings, treatment: 'linework' } }, 'mm/s'),
+    ).toBe('Follow 12 paths, 812 mm in all; power 42 %, speed 320 mm/s; in focus');
   });
 });
 
@@ -57,5 +75,15 @@ describe('qrDrawing', () => {
     expect(path).toContain('M4 4h1v1h-1z');
     expect(path).toContain(`M${size - 5} 4h`);
     expect(path).not.toMatch(/M[0-3] /);
+  });
+});
+
+describe('fileWords', () => {
+  it('names the same file in several formats once', () => {
+    expect(fileWords(['a-0.110mm.png', 'a-0.110mm.tiff', 'a-0.110mm.bmp'])).toBe(
+      'a-0.110mm, as .png, .tiff or .bmp',
+    );
+    expect(fileWords(['a.svg'])).toBe('a, as .svg');
+    expect(fileWords([])).toBe('');
   });
 });

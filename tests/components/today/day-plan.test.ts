@@ -4,10 +4,38 @@ import { orderRow } from '../order-fixtures';
 
 describe('dayPlan', () => {
   const rows = [
-    orderRow({ number: 'U-1001', machineName: 'Wren', dueOn: '2026-12-09', state: 'released', scanSeconds: 100, quantity: 2 }),
-    orderRow({ number: 'U-1002', machineName: 'Heron', dueOn: '2026-12-03', state: 'released', scanSeconds: 60, quantity: 1 }),
-    orderRow({ number: 'U-1003', machineName: 'Heron', dueOn: null, state: 'released', scanSeconds: null, quantity: 4 }),
-    orderRow({ number: 'U-1004', machineName: 'Heron', dueOn: '2026-12-20', state: 'running', scanSeconds: 40, quantity: 1 }),
+    orderRow({
+      number: 'U-1001',
+      machineName: 'Wren',
+      dueOn: '2026-12-09',
+      state: 'released',
+      scanSeconds: 100,
+      quantity: 2,
+    }),
+    orderRow({
+      number: 'U-1002',
+      machineName: 'Heron',
+      dueOn: '2026-12-03',
+      state: 'released',
+      scanSeconds: 60,
+      quantity: 1,
+    }),
+    orderRow({
+      number: 'U-1003',
+      machineName: 'Heron',
+      dueOn: null,
+      state: 'released',
+      scanSeconds: null,
+      quantity: 4,
+    }),
+    orderRow({
+      number: 'U-1004',
+      machineName: 'Heron',
+      dueOn: '2026-12-20',
+      state: 'running',
+      scanSeconds: 40,
+      quantity: 1,
+    }),
   ];
   it('puts what runs first, then by due date, those without one last', () => {
     const [heron, wren] = dayPlan(rows);

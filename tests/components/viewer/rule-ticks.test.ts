@@ -16,7 +16,14 @@ describe('stepFor', () => {
 
 describe('plainNumber', () => {
   it('groups thousands and drops empty decimals', () => {
-    expect([0, 0.5, 12, 1200, 1234567, 0.30000000000000004].map(plainNumber)).toEqual(['0', '0.5', '12', '1,200', '1,234,567', '0.3']);
+    expect([0, 0.5, 12, 1200, 1234567, 0.30000000000000004].map(plainNumber)).toEqual([
+      '0',
+      '0.5',
+      '12',
+      '1,200',
+      '1,234,567',
+      '0.3',
+    ]);
   });
 });
 

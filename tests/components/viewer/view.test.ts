@@ -58,7 +58,10 @@ describe('zoomAt', () => {
 
 describe('pan and keepInFrame', () => {
   it('moves the artwork with the hand', () => {
-    expect(pan({ centreXMm: 60, centreYMm: 40, pxPerMm: 10 }, 50, -20)).toMatchObject({ centreXMm: 55, centreYMm: 42 });
+    expect(pan({ centreXMm: 60, centreYMm: 40, pxPerMm: 10 }, 50, -20)).toMatchObject({
+      centreXMm: 55,
+      centreYMm: 42,
+    });
   });
   it('centres what is smaller than the frame and leaves no gap beside what is larger', () => {
     const small = keepInFrame({ centreXMm: 3, centreYMm: 70, pxPerMm: 2 }, plate, frame);
@@ -79,13 +82,21 @@ describe('wholePixelZoom', () => {
 describe('showPlace', () => {
   const limits = zoomLimits(plate, frame, 0.1);
   it('brings the place to the centre and closer', () => {
-    const view = showPlace(fitView(plate, frame), frame, { xMm: 10, yMm: 20, widthMm: 0.05, heightMm: 0.05 }, limits, 0.1);
+    const view = showPlace(
+      fitView(plate, frame),
+      frame,
+      { xMm: 10, yMm: 20, widthMm: 0.05, heightMm: 0.05 },
+      limits,
+      0.1,
+    );
     expect(view).toMatchObject({ centreXMm: 10, centreYMm: 20 });
     expect(view.pxPerMm).toBe(90);
   });
   it('does not go further away', () => {
     const near = { centreXMm: 1, centreYMm: 1, pxPerMm: 500 };
-    expect(showPlace(near, frame, { xMm: 60, yMm: 40, widthMm: 100, heightMm: 60 }, limits, 0.1).pxPerMm).toBe(500);
+    expect(
+      showPlace(near, frame, { xMm: 60, yMm: 40, widthMm: 100, heightMm: 60 }, limits, 0.1).pxPerMm,
+    ).toBe(500);
   });
 });
 

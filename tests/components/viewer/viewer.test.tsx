@@ -6,7 +6,11 @@ import { Viewer } from '../../../src/components/viewer/Viewer';
 import { findings, preparation } from '../order-fixtures';
 
 beforeEach(() => {
-  vi.stubGlobal('matchMedia', () => ({ matches: false, addEventListener: () => undefined, removeEventListener: () => undefined }));
+  vi.stubGlobal('matchMedia', () => ({
+    matches: false,
+    addEventListener: () => undefined,
+    removeEventListener: () => undefined,
+  }));
   vi.stubGlobal(
     'ResizeObserver',
     class {
@@ -25,10 +29,20 @@ afterEach(() => {
 });
 
 const open = () =>
-  render(<Viewer pictures={picturesOf(preparation, null)} widthMm={90} heightMm={60} pitchMm={0.11} findings={findings} resultKey="a" />);
+  render(
+    <Viewer
+      pictures={picturesOf(preparation, null)}
+      widthMm={90}
+      heightMm={60}
+      pitchMm={0.11}
+      findings={findings}
+      resultKey="a"
+    />,
+  );
 const plate = () => screen.getByRole('application');
 const ruleText = () => document.querySelector('.rule')?.textContent ?? '';
-const pressed = () => screen.getAllByRole('button', { pressed: true }).map((b) => b.getAttribute('aria-label') ?? '');
+const pressed = () =>
+  screen.getAllByRole('button', { pressed: true }).map((b) => b.getAttribute('aria-label') ?? '');
 
 describe('Viewer', () => {
   it('compares what was sent with the last picture, and any two that are chosen', () => {
@@ -71,7 +85,8 @@ describe('Viewer', () => {
 
   it('goes through the findings with f and lights note and place together', () => {
     open();
-    const lit = () => [...document.querySelectorAll('.note[data-lit="true"]')].map((n) => n.textContent ?? '');
+    const lit = () =>
+      [...document.querySelectorAll('.note[data-lit="true"]')].map((n) => n.textContent ?? '');
     fireEvent.keyDown(plate(), { key: 'f' });
     expect(lit()).toHaveLength(1);
     expect(lit()[0]).toContain('Hairlines');
