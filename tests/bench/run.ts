@@ -11,7 +11,7 @@ export const BEGIN = '<!-- bench: written by npm run bench -- --write -->';
 export const END = '<!-- end of bench -->';
 const ROUNDS = 5;
 const TO_FILE = ['ingest', 'resample', 'tone', 'screen', 'package'];
-const PREFLIGHT = ['measure', 'preflight'];
+const PREFLIGHT = ['measure', 'preflight', 'sound-width'];
 const BITMAP_NAMES = Object.keys(BITMAPS) as BitmapName[];
 
 interface Run {
