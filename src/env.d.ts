@@ -26,5 +26,7 @@ declare namespace App {
       role: 'customer' | 'designer' | 'operator' | 'admin';
       confirmed: boolean;
     } | null;
+    /** the session that the request's cookie names, or null */
+    sessionId: string | null;
   }
 }

@@ -11,6 +11,7 @@ export const onRequest = defineMiddleware(async (context, next) => {
   const hasCookie = context.request.headers.get('cookie')?.includes('authjs.session-token');
   const session = hasCookie ? await getSession(context.request) : null;
   context.locals.user = session?.opened ? await findSessionPerson(session.opened) : null;
+  context.locals.sessionId = session?.opened?.sessionId ?? null;
   const response = await next();
   setSecurityHeaders(response.headers, {
     signedIn: context.locals.user !== null,

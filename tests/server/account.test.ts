@@ -6,6 +6,8 @@ import { forgetAttempts } from '@/lib/server/limits';
 import type { Person } from '@/lib/server/person';
 import { personByEmail, type PersonRow } from '@/lib/server/tables/people';
 import { recordOf } from '@/lib/server/tables/record';
+import { findSessionPerson } from '@/lib/server/usecases/find-session-person';
+import { signIn } from '@/lib/server/usecases/sign-in';
 import { GET as readAccount, PATCH as changeAccount } from '@/pages/api/account';
 import { POST as confirm } from '@/pages/api/account/confirm';
 import { POST as confirmation } from '@/pages/api/account/confirmation';
@@ -148,7 +150,7 @@ describe('a forgotten password', () => {
 
   it('is set anew once, within an hour, confirms the address and ends every session', async () => {
     const person = await addPerson('customer', { confirmed: false });
-    await database()('sessions').insert({ id: 's-of-reset', person_id: person.id, created_at: '2026-01-01T00:00:00Z', expires_at: '2099-01-01T00:00:00Z' });
+    await database()('sessions').insert({ id: 's-of-reset', person_id: person.id, token_version: 1, created_at: '2026-01-01T00:00:00Z', expires_at: '2099-01-01T00:00:00Z' });
     await call(forgotten, { body: { email: person.email } });
     const token = await mailedToken(person.email);
     expect((await later(HOUR_MS + 1000, () => call(reset, { body: { token, password: 'a-new-password' } }))).status).toBe(422);
@@ -194,15 +196,18 @@ describe('the own account', () => {
     expect((await recordOf(database(), `person ${person.id}`)).map(({ words }) => words)).toEqual(['Mira is now Mira Oster']);
   });
 
-  it('changes its password only with the present one, and ends every session', async () => {
+  it('changes its password only with the present one, and ends every session but this one', async () => {
     const person = await addPerson('customer', { password: 'rye-and-ember' });
-    const change = (body: object) => call(changeAccount, { method: 'PATCH', body, person });
+    const [here, elsewhere] = [await signIn(person.email, 'rye-and-ember', '192.0.2.1'), await signIn(person.email, 'rye-and-ember', '192.0.2.9')];
+    if (!here || !elsewhere) throw new Error('expected two sessions');
+    const change = (body: object) => call(changeAccount, { method: 'PATCH', body, person, sessionId: here.sessionId });
     for (const currentPassword of [undefined, '', 'wrong-password']) {
       expect(await jsonOf(await change({ currentPassword, newPassword: 'a-new-password' }), 422)).toMatchObject({ code: 'wrong-password' });
     }
     expect((await change({ currentPassword: 'rye-and-ember', newPassword: 'a-new-password' })).status).toBe(200);
     const after = await row(person.email);
     expect(after.token_version).toBe(2);
+    expect([await findSessionPerson(here), await findSessionPerson(elsewhere)]).toEqual([person, null]);
     expect(await passwords.passwordMatches('a-new-password', after.password_hash ?? '')).toBe(true);
   });
 

@@ -12,6 +12,7 @@ export interface CallOptions {
   raw?: BodyInit;
   headers?: Record<string, string>;
   person?: Person | null;
+  sessionId?: string;
   address?: string;
 }
 
@@ -24,7 +25,7 @@ export async function call(route: APIRoute, options: CallOptions = {}): Promise<
   markSocketAddress(headers, options.address ?? '192.0.2.1');
   const body = options.raw ?? (options.body === undefined ? undefined : JSON.stringify(options.body));
   const request = new Request(url, { method, headers, body, ...(body instanceof ReadableStream ? { duplex: 'half' } : {}) });
-  const context = { request, url, params: options.params ?? {}, locals: { user: options.person ?? null } };
+  const context = { request, url, params: options.params ?? {}, locals: { user: options.person ?? null, sessionId: options.sessionId ?? null } };
   return route(context as unknown as APIContext);
 }
 

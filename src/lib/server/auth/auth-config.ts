@@ -43,8 +43,8 @@ async function authorize(given: Partial<Record<string, unknown>>, request: Reque
 }
 
 /**
- * How people sign in: address and password. The cookie carries only who, which session and which token version; everything
- * else is read from the database at every request.
+ * How people sign in: address and password. The cookie carries only who and which session; everything else, the token
+ * version too, is read from the database at every request.
  */
 export function authConfig(secret: string): FullAuthConfig {
   return {

@@ -21,6 +21,8 @@ export interface Call<K extends RouteKey> {
   url: URL;
   /** address that the request came from */
   address: string;
+  /** session that it belongs to, or null */
+  sessionId: string | null;
 }
 
 /** Throws unless the person may call a route of this access at all. */
@@ -69,7 +71,7 @@ export function endpoint<K extends RouteKey>(key: K, handle: (call: Call<K>) => 
       const query = route.query && parseGiven(route.query, Object.fromEntries(url.searchParams));
       const body = await readBody(route, request);
       await limit(route, person, body, address);
-      const call = { person, params, body, query, request, url, address } as Call<K>;
+      const call = { person, params, body, query, request, url, address, sessionId: locals.sessionId ?? null } as Call<K>;
       const answer: unknown = await handle(call);
       if (answer instanceof Response) return answer;
       return json(route.response ? route.response.parse(answer) : answer);

@@ -4,7 +4,7 @@ import { database, withWrite } from '../db';
 import { AppError } from '../errors';
 import type { Person } from '../person';
 import { personById, renamePerson, setPassword } from '../tables/people';
-import { deleteSessionsOf } from '../tables/sessions';
+import { keepOnlySession } from '../tables/sessions';
 
 export interface AccountChange {
   name?: string;
@@ -18,8 +18,8 @@ async function requirePassword(by: Person, password: string | undefined): Promis
   if (!right) throw new AppError('wrong-password', { fields: { currentPassword: 'This is not the present password.' } });
 }
 
-/** Changes the own name or password; a new password needs the present one and ends every session, this one too. */
-export async function changeAccount(by: Person, change: AccountChange): Promise<void> {
+/** Changes the own name or password; a new password needs the present one and ends every session but the one at hand. */
+export async function changeAccount(by: Person, change: AccountChange, sessionId: string | null): Promise<void> {
   if (change.newPassword !== undefined) await requirePassword(by, change.currentPassword);
   const passwordHash = change.newPassword === undefined ? null : await hashPassword(change.newPassword);
   await withWrite(async (trx) => {
@@ -30,7 +30,7 @@ export async function changeAccount(by: Person, change: AccountChange): Promise<
     }
     if (passwordHash !== null) {
       await setPassword(trx, by.id, passwordHash);
-      await deleteSessionsOf(trx, by.id);
+      await keepOnlySession(trx, by.id, sessionId ?? '');
       await audit(trx, { by, event: 'change-password', subject });
     }
   });

@@ -8,9 +8,9 @@ import { deleteExpiredSessions, insertSession } from '../tables/sessions';
 /** A session ends by itself after this, whatever the cookie says. */
 export const SESSION_SECONDS = 7 * 24 * 3600;
 
+/** What a cookie says: who, and which session. */
 export interface Opened {
   personId: number;
-  tokenVersion: number;
   sessionId: string;
 }
 
@@ -32,12 +32,13 @@ async function openSession(person: PersonRow, newHash: string | null): Promise<O
     await insertSession(trx, {
       id: sessionId,
       person_id: person.id,
+      token_version: person.token_version,
       created_at: new Date(now).toISOString(),
       expires_at: new Date(now + SESSION_SECONDS * 1000).toISOString(),
     });
     if (newHash && person.password_hash) await rehashPassword(trx, person.id, person.password_hash, newHash);
   });
-  return { personId: person.id, tokenVersion: person.token_version, sessionId };
+  return { personId: person.id, sessionId };
 }
 
 /**

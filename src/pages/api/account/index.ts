@@ -5,7 +5,7 @@ import { changeAccount } from '../../../lib/server/usecases/change-account';
 
 export const GET = endpoint('GET /api/account', async ({ person }) => ({ person: person && (await findPerson(person.id)) }));
 
-export const PATCH = endpoint('PATCH /api/account', async ({ person, body }) => {
-  await changeAccount(person, body);
+export const PATCH = endpoint('PATCH /api/account', async ({ person, body, sessionId }) => {
+  await changeAccount(person, body, sessionId);
   return DONE;
 });
