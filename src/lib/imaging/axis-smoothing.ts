@@ -2,7 +2,7 @@ import type { AxisPoints } from './medial-axis';
 
 /** What the neighbours along a middle line say of each of its points. */
 export interface SmoothedAxis {
-  /** mean width over the neighbours, px */
+  /** width by the straight line through the widths of the neighbours, px */
   width: Float32Array;
   /** direction in which the line runs, radians, −π/2 to π/2, y downwards */
   along: Float32Array;
@@ -53,7 +53,7 @@ const BESIDE_PX = 1.5;
 const BESIDE_SHARE = 0.35;
 
 /**
- * Direction, mean width, taper and length of line for every point of a middle line, from its neighbours within a reach.
+ * Direction, smoothed width, taper and length of line for every point of a middle line, from its neighbours within a reach.
  * Direction: the main axis of the neighbours' places; taper: the straight line through their widths.
  * @param points unchanged
  * @param grid `axisGrid` of them; unchanged
@@ -79,8 +79,9 @@ export function smoothAxis(points: AxisPoints, grid: Int32Array, columns: number
     const along = directionOf(sums, points.across[n]);
     const [c, s] = [Math.cos(along), Math.sin(along)];
     out.along[n] = along;
-    out.width[n] = sums.w / sums.n;
-    out.slope[n] = slopeOf(sums, c, s);
+    const slope = slopeOf(sums, c, s);
+    out.width[n] = Math.max(0, (sums.w - slope * (sums.x * c + sums.y * s)) / sums.n);
+    out.slope[n] = Math.abs(slope);
     const steep = Math.abs(s) > Math.abs(c);
     const doubles = steep ? countDoubles(grid, points, n, 1) : countDoubles(grid, points, n, columns);
     out.length[n] = 1 / (doubles * Math.max(Math.abs(c), Math.abs(s)));
@@ -126,7 +127,7 @@ function slopeOf(sums: Sums, c: number, s: number): number {
   const spread = (sums.xx * c * c + 2 * sums.xy * c * s + sums.yy * s * s) / n - t * t;
   if (spread < 0.5) return 0;
   const covariance = (sums.xw * c + sums.yw * s) / n - t * (sums.w / n);
-  return Math.abs(covariance / spread);
+  return covariance / spread;
 }
 
 /** How many points of a line lie side by side at one place of its length, itself included. */

@@ -2,8 +2,8 @@ import { closedLoops } from '../../imaging/closed-loops';
 import { contourOf } from '../../imaging/contour';
 import { cappedDistance } from '../../imaging/distance';
 import { divide, type Field } from '../../imaging/field';
+import { fineLines } from '../../imaging/fine-lines';
 import { medialAxis } from '../../imaging/medial-axis';
-import { faintRidges } from './faint-ridges';
 import { extentAlong, type LineExtents } from './line-extents';
 
 /** Widths under this many line extents are looked at closely. */
@@ -19,15 +19,19 @@ const COARSE_ERROR_PX = 0.4;
  * @param level that parts burned from unburned, 0–255
  * @param extents at the coarse scale; unchanged
  * @param mark receives x and y in px of the field
+ * @param faintest as `fineLines`
  */
 export function suspectPlaces(
   field: Field,
   level: number,
   extents: LineExtents,
   mark: (x: number, y: number) => void,
+  faintest: number,
 ): void {
-  faintRidges(field, level, 1).forEach(({ x, y }) => mark(x, y));
-  faintRidges(field, level, 0).forEach(({ x, y }) => mark(x, y));
+  for (const side of [0, 1] as const) {
+    const fine = fineLines(field, side, faintest);
+    for (let n = 0; n < fine.count; n++) mark(fine.x[n], fine.y[n]);
+  }
   const division = divide(field, level);
   if (!division.edgeBlocks.includes(1)) return;
   const contour = contourOf(field, division, level);

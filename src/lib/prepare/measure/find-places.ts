@@ -1,7 +1,7 @@
 import type { Spot } from '../../machines/spot';
 import { suspectPlaces } from './coarse-pass';
 import type { CoverageSource } from './coverage-source';
-import { inspectWindow, marginPx, type FoundPlace, type Inspection, type SideFindings } from './inspect-window';
+import { inspectWindow, marginPx, nothing, type FoundPlace, type Inspection, type SideFindings } from './inspect-window';
 import { lineExtents } from './line-extents';
 import { mergeSeams } from './merge-seams';
 import { emptyCells, markCells, partsToInspect, WINDOW_PX, type CellMap } from './windows';
@@ -11,6 +11,8 @@ const CLOSE_PX = 6;
 const LARGEST_CLOSE_PX = 22;
 /** Scale of the coarse pass: pixels to the smallest line extent. */
 const COARSE_PX = 2.2;
+/** Lowest peak, 0–255, of a line without an outline: in a drawing one of 0.08 px; in pixels more, for they hold noise. */
+const FAINTEST = { drawn: 20, pixels: 72 } as const;
 /** Up to this many pixels the whole picture is looked at closely at once. */
 const WHOLE_PX = 6_000_000;
 /** Side of a cell of the coarse map, in pixels of the coarse picture. */
@@ -26,6 +28,8 @@ export interface SearchFrame {
   level: number;
   /** whether a place, in fractions 0–1 of width and height, is left out */
   leaveOut(fx: number, fy: number): boolean;
+  /** cells of the artwork that hold anything to look at; null: all of it */
+  drawn: CellMap | null;
 }
 
 export interface FoundPlaces extends Inspection {
@@ -36,17 +40,20 @@ export interface FoundPlaces extends Inspection {
 }
 
 /** Scale at which an artwork is measured: six pixels to a line extent, or what its own pixels resolve. */
-export function closeScale(source: CoverageSource, frame: Omit<SearchFrame, 'leaveOut' | 'level'>): number {
+export function closeScale(source: CoverageSource, frame: Pick<SearchFrame, 'widthMm' | 'heightMm' | 'spot'>): number {
   const { widthMm, heightMm } = frame.spot;
-  const wanted = Math.min(CLOSE_PX / Math.min(widthMm, heightMm), LARGEST_CLOSE_PX / Math.hypot(widthMm, heightMm) * 1.0);
+  const largest = lineExtents(frame.spot, 1).largestPx;
+  const wanted = Math.min(CLOSE_PX / Math.min(widthMm, heightMm), LARGEST_CLOSE_PX / largest);
   if (!source.nativePx) return wanted;
-  const native = Math.max(source.nativePx.width / frame.widthMm, source.nativePx.height / frame.heightMm);
+  const native = nativeScale(source.nativePx, frame);
   return native < 1.5 * wanted ? native : wanted;
 }
 
-const nothing = (): SideFindings => ({ thin: [], small: [], tips: [], unresolved: [] });
+/** Pixels per mm of the artwork's own, by the finer of its sides. */
+const nativeScale = (native: { width: number; height: number }, frame: Pick<SearchFrame, 'widthMm' | 'heightMm'>): number =>
+  Math.max(native.width / frame.widthMm, native.height / frame.heightMm);
 
-function addShifted(to: SideFindings, from: SideFindings, dx: number, dy: number, keep: (place: FoundPlace) => boolean): void {
+function addShifted(to: SideFindings, from: SideFindings, dx: number, dy: number): void {
   for (const key of ['thin', 'small', 'tips', 'unresolved'] as const) {
     for (const place of from[key]) {
       place.left += dx;
@@ -54,7 +61,7 @@ function addShifted(to: SideFindings, from: SideFindings, dx: number, dy: number
       place.top += dy;
       place.bottom += dy;
       place.ends = place.ends.map((v, n) => v + (n % 2 === 0 ? dx : dy));
-      if (keep(place)) to[key].push(place);
+      to[key].push(place);
     }
   }
 }
@@ -68,17 +75,18 @@ function addShifted(to: SideFindings, from: SideFindings, dx: number, dy: number
  * @throws what the source throws
  */
 export async function findPlaces(source: CoverageSource, frame: SearchFrame): Promise<FoundPlaces> {
-  const pxPerMm = closeScale(source, frame);
+  const scale = closeScale(source, frame);
   const native = source.nativePx;
-  const own = native !== null && pxPerMm === Math.max(native.width / frame.widthMm, native.height / frame.heightMm);
-  const artWidthPx = own ? native.width : Math.max(1, Math.round(frame.widthMm * pxPerMm));
-  const artHeightPx = own ? native.height : Math.max(1, Math.round(frame.heightMm * pxPerMm));
+  const own = native !== null && scale === nativeScale(native, frame);
+  const artWidthPx = own ? native.width : Math.max(1, Math.round(frame.widthMm * scale));
+  const artHeightPx = own ? native.height : Math.max(1, Math.round(frame.heightMm * scale));
+  const pxPerMm = Math.sqrt((artWidthPx * artHeightPx) / (frame.widthMm * frame.heightMm));
   const extents = lineExtents(frame.spot, pxPerMm);
   const margin = marginPx(extents);
-  const found: FoundPlaces = { ink: nothing(), gaps: nothing(), pxPerMm, artWidthPx, artHeightPx };
-  const cells = artWidthPx * artHeightPx > WHOLE_PX ? await coarseMap(source, frame, pxPerMm) : null;
-  const keep = (place: FoundPlace): boolean =>
-    !frame.leaveOut((place.left + place.right) / 2 / artWidthPx, (place.top + place.bottom) / 2 / artHeightPx);
+  const faintest = native ? FAINTEST.pixels : FAINTEST.drawn;
+  const found: FoundPlaces = { ink: nothing(), gaps: nothing(), burnedPx: 0, pxPerMm, artWidthPx, artHeightPx };
+  const large = artWidthPx * artHeightPx > WHOLE_PX;
+  const cells = (large ? await coarseMap(source, frame, pxPerMm, faintest) : null) ?? frame.drawn;
   for (const part of partsToInspect(artWidthPx, artHeightPx, cells)) {
     const left = part.left - margin;
     const top = part.top - margin;
@@ -86,9 +94,11 @@ export async function findPlaces(source: CoverageSource, frame: SearchFrame): Pr
     const height = part.bottom - part.top + 2 * margin;
     const data = await source.read({ artWidthPx, artHeightPx, left, top, width, height });
     const inside = { left: margin, top: margin, right: width - margin, bottom: height - margin };
-    const inspection = inspectWindow({ width, height, data }, frame.level, extents, inside);
-    addShifted(found.ink, inspection.ink, left, top, keep);
-    addShifted(found.gaps, inspection.gaps, left, top, keep);
+    const leaveOut = (x: number, y: number): boolean => frame.leaveOut((x + left) / artWidthPx, (y + top) / artHeightPx);
+    const inspection = inspectWindow({ width, height, data }, frame.level, extents, { own: inside, leaveOut, faintest });
+    addShifted(found.ink, inspection.ink, left, top);
+    addShifted(found.gaps, inspection.gaps, left, top);
+    found.burnedPx += inspection.burnedPx;
   }
   for (const side of [found.ink, found.gaps]) {
     side.thin = mergeSeams(side.thin);
@@ -97,7 +107,12 @@ export async function findPlaces(source: CoverageSource, frame: SearchFrame): Pr
   return found;
 }
 
-async function coarseMap(source: CoverageSource, frame: SearchFrame, closePxPerMm: number): Promise<CellMap | null> {
+async function coarseMap(
+  source: CoverageSource,
+  frame: SearchFrame,
+  closePxPerMm: number,
+  faintest: number,
+): Promise<CellMap | null> {
   const wanted = COARSE_PX / Math.min(frame.spot.widthMm, frame.spot.heightMm);
   if (wanted > 0.6 * closePxPerMm) return null;
   const artWidthPx = Math.max(1, Math.round(frame.widthMm * wanted));
@@ -111,11 +126,12 @@ async function coarseMap(source: CoverageSource, frame: SearchFrame, closePxPerM
     const width = Math.min(WINDOW_PX, part.right - part.left) + 2 * margin;
     const height = Math.min(WINDOW_PX, part.bottom - part.top) + 2 * margin;
     const data = await source.read({ artWidthPx, artHeightPx, left, top, width, height });
-    suspectPlaces({ width, height, data }, frame.level, extents, (x, y) => {
+    const mark = (x: number, y: number): void => {
       const [ax, ay] = [x + left, y + top];
       if (ax < 0 || ay < 0 || ax >= artWidthPx || ay >= artHeightPx) return;
       if (!frame.leaveOut(ax / artWidthPx, ay / artHeightPx)) markCells(cells, artWidthPx, artHeightPx, ax, ay, 3);
-    });
+    };
+    suspectPlaces({ width, height, data }, frame.level, extents, mark, faintest);
   }
   return cells;
 }

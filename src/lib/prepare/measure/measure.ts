@@ -13,7 +13,7 @@ import type { MeasureSettings } from './measure-settings';
 import { placementFacts, turned } from './placement';
 import { rasterCoverage } from './raster-coverage';
 import { toneFacts } from './tone-facts';
-import { isTonalAt, surveyTones } from './tone-survey';
+import { drawnCells, isTonalAt, surveyTones } from './tone-survey';
 import { vectorCoverage } from './vector-coverage';
 
 /** Pixels of the reduced picture that tones are read from. */
@@ -118,6 +118,7 @@ export async function measure(
     spot,
     level,
     leaveOut: (fx: number, fy: number): boolean => isTonalAt(survey, fx, fy),
+    drawn: drawnCells(survey),
   };
   const found = await findPlaces(source, frame);
   const raster = artwork.kind === 'raster';

@@ -49,4 +49,6 @@ function joinInto(whole: FoundPlace, place: FoundPlace): void {
   whole.bottom = Math.max(whole.bottom, place.bottom);
   if (place.smallestPx < whole.smallestPx) [whole.smallestPx, whole.limitPx] = [place.smallestPx, place.limitPx];
   whole.worstRatio = Math.min(whole.worstRatio, place.worstRatio);
+  whole.fading &&= place.fading;
+  whole.soundScale = Math.max(whole.soundScale, place.soundScale);
 }

@@ -9,6 +9,10 @@ const GENTLE_TAPER = 1 / 3;
 /** Length, in line extents, that a steeper taper must stay thin for. */
 const TAPER_EXTENTS = 3;
 
+/** A stretch that ends thinner than so many pixels, and is so many times wider half-way, tapers to nothing. */
+const FADED_PX = 2.5;
+const FADING_SHARE = 1.8;
+
 /** A stretch of middle line along which a stroke or a gap is too thin. */
 export interface ThinRun {
   /** members by their index into the points */
@@ -19,10 +23,15 @@ export interface ThinRun {
   /** lowest width ÷ line extent */
   worstRatio: number;
   lengthPx: number;
+  meanPx: number;
   /** whether it is a stroke, and not the tip of a corner */
   counts: boolean;
   /** width gained for each unit of length, over the whole stretch */
   taper: number;
+  /** how many times larger it must be drawn until it no longer counts; 1 where it does not */
+  soundScale: number;
+  /** whether it tapers away to nothing, so that it stays thin for as many extents at any scale */
+  fading: boolean;
 }
 
 export interface ThinRuns {
@@ -89,25 +98,95 @@ function joinNeighbours(points: AxisPoints, thin: Uint8Array, grid: Int32Array, 
   return [...groups.values()];
 }
 
+/** Sums over a stretch, taken member by member. */
+class Stretch {
+  length = 0;
+  gentle = 0;
+  width = 0;
+  slope = 0;
+  limit = 0;
+  private narrowest = Infinity;
+  private widest = 0;
+
+  add(step: number, width: number, slope: number, limit: number): void {
+    this.length += step;
+    this.width += step * width;
+    this.slope += step * slope;
+    this.limit += step * limit;
+    if (slope > GENTLE_TAPER) return;
+    this.gentle += step;
+    this.narrowest = Math.min(this.narrowest, width);
+    this.widest = Math.max(this.widest, width);
+  }
+
+  get taper(): number {
+    return this.slope / this.length;
+  }
+
+  get meanPx(): number {
+    return this.width / this.length;
+  }
+
+  /** Whether it is a stroke once everything is drawn `scale` times as large. */
+  counts(scale: number, smallest: number, share: number): boolean {
+    const { length, gentle, taper, meanPx } = this;
+    const limit = this.limit / length;
+    // The middle line of a stroke ends half its width before the stroke does; that of a tip ends where pixels fail.
+    const reached = taper > GENTLE_TAPER ? length + smallest / taper : length + meanPx;
+    const even = this.widest - this.narrowest <= GENTLE_TAPER * gentle;
+    const plain = even && scale * (gentle + Math.min(meanPx, gentle)) >= limit;
+    return plain || scale * reached >= TAPER_EXTENTS * share * limit;
+  }
+}
+
 function describe(members: number[], smoothed: SmoothedAxis, extents: LineExtents, share: number): ThinRun {
-  let [length, gentle, widthSum, slopeSum, limitSum] = [0, 0, 0, 0, 0];
-  let [worst, smallest, limit] = [Infinity, Infinity, 0];
+  const whole = new Stretch();
+  const ratio = new Map<number, number>();
+  let [smallest, limit] = [Infinity, 0];
   for (const n of members) {
     const own = extentAlong(extents, smoothed.along[n]);
-    const step = smoothed.length[n];
-    length += step;
-    widthSum += step * smoothed.width[n];
-    slopeSum += step * smoothed.slope[n];
-    limitSum += step * own;
-    if (smoothed.slope[n] <= GENTLE_TAPER) gentle += step;
-    worst = Math.min(worst, smoothed.width[n] / own);
-    if (smoothed.width[n] < smallest) [smallest, limit] = [smoothed.width[n], own];
+    const width = smoothed.width[n];
+    whole.add(smoothed.length[n], width, smoothed.slope[n], own);
+    ratio.set(n, width / own);
+    if (width < smallest) [smallest, limit] = [width, own];
   }
-  const taper = slopeSum / length;
-  const [meanWidth, meanLimit] = [widthSum / length, limitSum / length];
-  // The middle line of a stroke ends half its width before the stroke does; that of a tip ends where pixels fail.
-  const reached = taper > GENTLE_TAPER ? length + smallest / taper : length + meanWidth;
-  const plain = taper <= GENTLE_TAPER && gentle + Math.min(meanWidth, gentle) >= meanLimit;
-  const counts = plain || reached >= TAPER_EXTENTS * share * meanLimit;
-  return { members, smallestPx: smallest, limitPx: limit, worstRatio: worst, lengthPx: length, counts, taper };
+  const byRatio = [...members].sort((a, b) => (ratio.get(a) ?? 0) - (ratio.get(b) ?? 0));
+  const counts = whole.counts(1, smallest, share);
+  const soundScale = counts ? scaleToSound(byRatio, ratio, smoothed, extents, smallest, share) : 1;
+  const { length, taper, meanPx } = whole;
+  const worstRatio = ratio.get(byRatio[0]) ?? Infinity;
+  const middle = ratio.get(byRatio[byRatio.length >> 1]) ?? 0;
+  const fading = smallest < FADED_PX && middle > FADING_SHARE * worstRatio && soundScale * worstRatio > 0.8 * share;
+  return {
+    members,
+    smallestPx: smallest,
+    limitPx: limit,
+    worstRatio,
+    lengthPx: length,
+    meanPx,
+    counts,
+    taper,
+    soundScale,
+    fading,
+  };
+}
+
+/** How many times larger a stretch must be drawn until what stays thin of it no longer counts. */
+function scaleToSound(
+  byRatio: readonly number[],
+  ratio: ReadonlyMap<number, number>,
+  smoothed: SmoothedAxis,
+  extents: LineExtents,
+  smallest: number,
+  share: number,
+): number {
+  const thin = new Stretch();
+  let scale = 1;
+  for (const n of byRatio) {
+    thin.add(smoothed.length[n], smoothed.width[n], smoothed.slope[n], extentAlong(extents, smoothed.along[n]));
+    // At this scale everything up to this member is just thin.
+    const at = share / (ratio.get(n) ?? share);
+    if (thin.counts(at, smallest, share)) scale = Math.max(scale, at);
+  }
+  return scale;
 }
