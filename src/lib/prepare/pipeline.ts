@@ -1,6 +1,7 @@
 import { sizeAcross } from '../machines/spot';
 import { assembleCheckReport, assembleReport } from './assemble-report';
 import { canonicalJson, MANIFEST_VERSION, type Manifest, type PrepareRequest } from './manifest';
+import { passFrames } from './resample/pass-frames';
 import type { Settings } from './settings';
 import {
   forecastStage,
@@ -137,6 +138,7 @@ export async function prepareArtwork(
   onStage: OnStage = () => undefined,
 ): Promise<Prepared> {
   const { settings } = preparation;
+  const frames = passFrames(settings);
   const request = requestOf({ ...preparation, artworkSha256: tools.sha256(bytes) });
   const key = tools.sha256(canonicalJson(request));
   const { directionDeg, linePitchMm } = settings.scan;
@@ -145,6 +147,7 @@ export async function prepareArtwork(
     asked,
     settings,
     preparationKey: key,
+    frames,
   });
   await runAll(PREPARE, work, onStage);
   const manifest: Manifest = { ...request, files: work.files.map(({ entry }) => entry) };

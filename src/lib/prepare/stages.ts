@@ -9,7 +9,6 @@ import { PHOTOGRAPH_SHARE, suggestTreatment } from './measure/suggest-treatment'
 import { packageLinework } from './package/package-linework';
 import { packageRasters } from './package/package-rasters';
 import { placedSize } from './placed-size';
-import { perpendicularScan, scanFrame } from './resample/scan-frame';
 import { turnArtwork } from './resample/turn';
 import { trace } from './trace/trace';
 import type { CheckWork, PrepareWork, Stage } from './work';
@@ -72,16 +71,11 @@ export const markStage: Stage<PrepareWork> = {
   name: 'mark',
   timesItself: true,
   async run(work) {
-    const { settings, artwork } = work;
-    const { widthMm, heightMm, scan, perpendicular, quarterTurns, treatment } = settings;
-    // Lines that are followed are burned once; only areas are scanned a second time across.
-    const across = treatment === 'linework' ? null : perpendicular;
-    const scans = [scan, ...(across ? [perpendicularScan(scan.directionDeg, across)] : [])];
-    const turned = turnArtwork(artwork, quarterTurns);
+    const { settings, artwork, frames } = work;
+    const turned = turnArtwork(artwork, settings.quarterTurns);
     work.passes = [];
-    for (const [index, passScan] of scans.entries()) {
-      const frame = scanFrame(widthMm, heightMm, passScan);
-      const onProgress = (share: number): void => work.onProgress((index + share) / scans.length);
+    for (const [index, frame] of frames.entries()) {
+      const onProgress = (share: number): void => work.onProgress((index + share) / frames.length);
       const marks = await mark(turned, frame, settings, { ...work, onProgress });
       work.passes.push({ pass: index === 0 ? 1 : 2, frame, marks });
     }

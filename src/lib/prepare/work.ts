@@ -100,6 +100,8 @@ export interface CheckWork extends Given {
 export interface PrepareWork extends CheckWork {
   readonly settings: Settings;
   readonly preparationKey: string;
+  /** pixels of every pass */
+  readonly frames: readonly ScanFrame[];
   /** mark */
   passes: MarkedPass[];
   /** trace: for linework, else null */

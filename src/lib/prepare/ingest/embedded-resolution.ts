@@ -1,4 +1,4 @@
-import { ppiToPitch } from '../../units';
+import { MM_PER_INCH, ppiToPitch } from '../../units';
 import type { ReadableType } from './file-type';
 import { tiffResolution, type Resolution } from './tiff-directory';
 
@@ -71,13 +71,13 @@ function statedResolution(
   return tiffResolution(text(exif, 0, 6) === EXIF_HEAD ? exif.subarray(6) : exif);
 }
 
-/** Values that programs write when nobody chose a size: 1, 72 and 96 to the inch. */
-const PLACEHOLDER_PPI = [1, 72, 96];
+/** Values that programs write when nobody chose a size: 1, 72 and 96 to the inch, and 1 to the millimetre. */
+const PLACEHOLDER_PPI = [1, 72, 96, MM_PER_INCH];
 
 /**
  * The resolution that a picture's file states, where somebody chose it.
- * Reads PNG pHYs, JFIF and EXIF, TIFF tags and BMP's header; 1, 72 and 96 to the inch are what programs write when nobody
- * chose a size, and count as none.
+ * Reads PNG pHYs, JFIF and EXIF, TIFF tags and BMP's header; the values that programs write when nobody chose a size
+ * count as none.
  * @param type what the bytes are
  * @param bytes the whole file; unchanged
  * @param exif EXIF block of the kinds that keep it in a container (WebP, AVIF), or undefined
@@ -91,7 +91,7 @@ export function embeddedResolution(
 ): Resolution | null {
   const stated = statedResolution(type, bytes, exif);
   if (!stated || !(stated.xPxPerMm > 0) || !(stated.yPxPerMm > 0)) return null;
-  const ppi = stated.xPxPerMm * ppiToPitch(1);
+  const ppi = stated.xPxPerMm * MM_PER_INCH;
   const placeholder = PLACEHOLDER_PPI.some((value) => Math.abs(ppi - value) < 0.05);
   return placeholder && stated.xPxPerMm === stated.yPxPerMm ? null : stated;
 }

@@ -1,10 +1,18 @@
 import type { LightnessRaster } from '../../imaging/raster';
 import type { Artwork, VectorArtwork } from '../artwork';
 import { renderVector } from '../svg/render-vector';
-import { ArtworkError, type PipelineTools } from '../tools';
+import type { PipelineTools } from '../tools';
 import type { ScanFrame } from './scan-frame';
 import { skewReader } from './skew';
-import { resampleWhole, uprightReader, type Grey, type Light, type RowReader } from './upright';
+import {
+  asCodes,
+  makeLinear,
+  resampleWhole,
+  uprightReader,
+  type Grey,
+  type Light,
+  type RowReader,
+} from './upright';
 
 export interface ResampleSettings {
   widthMm: number;
@@ -16,22 +24,11 @@ export interface ResampleSettings {
   outside: number;
 }
 
-/** Most pixels that one pass may have. */
-export const MAX_PASS_PX = 250_000_000;
 const BAND_PX = 262_144;
 const RENDER_PX = 8_000_000;
 const MAX_SKEW_SOURCE_PX = 50_000_000;
 // A turned frame reads between pixels; a source a little finer than the pitch keeps that from blurring.
 const SKEW_FINENESS = 1.5;
-
-function assertPassFits({ columns, rows }: ScanFrame): void {
-  if (columns * rows <= MAX_PASS_PX) return;
-  throw new ArtworkError(
-    'too-large',
-    `At this pitch the file would have ${columns} × ${rows} pixels; we prepare up to ${MAX_PASS_PX / 1e6} million. ` +
-      'Choose a wider pitch or a smaller size.',
-  );
-}
 
 const greyOf = (artwork: Extract<Artwork, { kind: 'raster' }>): Grey => ({
   width: artwork.widthPx,
@@ -73,13 +70,16 @@ async function turnedReader(
   const columns = Math.max(1, Math.round(widthMm * perMm));
   const rows = Math.max(1, Math.round(heightMm * perMm));
   const grey = await placedGrey(artwork, columns, rows, settings.light, tools);
+  const coverage = settings.light === 'coverage';
   // A mirrored artwork scanned at an angle is the artwork scanned at the opposite angle, each row reversed afterwards.
-  return skewReader(
-    { grey, widthMm, heightMm },
-    frame,
-    settings.mirror ? -frame.angleDeg : frame.angleDeg,
-    settings.outside,
-  );
+  const angleDeg = settings.mirror ? -frame.angleDeg : frame.angleDeg;
+  const source = { grey: coverage ? asCodes(grey) : grey, widthMm, heightMm };
+  const read = skewReader(source, frame, angleDeg, settings.outside);
+  return (count) => {
+    const band = read(count);
+    if (coverage) makeLinear(band);
+    return band;
+  };
 }
 
 /** Gives the rows of a drawing, rendering them in parts so that memory does not grow with the area. */
@@ -113,7 +113,7 @@ function drawingReader(artwork: VectorArtwork, frame: ScanFrame, tools: Pipeline
  * @param settings placement, light and what lies outside
  * @param tools used for drawings alone
  * @returns bands that together are frame.rows high; a band's data may be filled again once the next is asked for
- * @throws ArtworkError `too-large` above MAX_PASS_PX, and what rendering a drawing throws
+ * @throws ArtworkError what rendering a drawing throws
  * @example a picture of 2400 × 1600 px on 300 × 200 mm at 0.06 mm gives bands of 5000 columns, 3333 rows in all
  */
 export async function* resample(
@@ -122,7 +122,6 @@ export async function* resample(
   settings: ResampleSettings,
   tools: PipelineTools,
 ): AsyncGenerator<LightnessRaster> {
-  assertPassFits(frame);
   const { columns, rows, pitchXMm, pitchYMm } = frame;
   const read =
     frame.angleDeg !== 0

@@ -90,9 +90,17 @@ function codeTable(): Float32Array {
 }
 
 /** Code values 0–65535 brought back to linear luminance, in place. */
-function makeLinear(samples: Uint16Array): void {
+export function makeLinear(samples: Uint16Array): void {
   const linear = linearValues();
   for (let i = 0; i < samples.length; i++) samples[i] = linear[samples[i]] * FULL_LUMINANCE + 0.5;
+}
+
+/** A picture's linear luminance as code values 0–65535. */
+export function asCodes({ width, height, data }: Grey): Grey {
+  const codes = codeTable();
+  const samples = new Uint16Array(data.length);
+  for (let i = 0; i < samples.length; i++) samples[i] = codes[data[i]] + 0.5;
+  return { width, height, data: samples };
 }
 
 /**
