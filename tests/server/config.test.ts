@@ -56,6 +56,7 @@ describe('readConfig', () => {
     ['a generated secret', { SESSION_SECRET: `development-${'y'.repeat(43)}` }, 'not the generated one'],
     ['a short secret', { SESSION_SECRET: 'x'.repeat(31) }, '32 or more characters'],
     ['no secret', { SESSION_SECRET: undefined }, 'SESSION_SECRET'],
+    ['cheap passwords', { PASSWORD_COST: '14' }, 'PASSWORD_COST'],
     ['no mail server', { SMTP_URL: undefined }, 'SMTP_URL'],
     ['no sender', { MAIL_FROM: undefined }, 'MAIL_FROM'],
   ])('refuses production with %s', (_, change, words) => {

@@ -8,6 +8,8 @@ import { afterAll } from 'vitest';
 export const dataDir = mkdtempSync(path.join(tmpdir(), 'umberline-data-'));
 process.env.DATA_DIR = dataDir;
 delete process.env.DATABASE_FILE;
+// What a password costs is tested by itself; elsewhere it would only make people wait.
+process.env.PASSWORD_COST = '8';
 
 const { openDatabase, closeDatabase } = await import('@/lib/server/db');
 const { config } = await import('@/lib/server/config');

@@ -1,4 +1,5 @@
 import { randomBytes, scrypt, timingSafeEqual, type ScryptOptions } from 'node:crypto';
+import { config } from '../config';
 
 /** Cost of scrypt (RFC 7914): N = 2^ln. */
 interface Cost {
@@ -6,8 +7,8 @@ interface Cost {
   r: number;
   p: number;
 }
-/** 32 MiB and about a quarter of a second a password. */
-export const COST: Cost = { ln: 15, r: 8, p: 3 };
+/** Unless set higher, 32 MiB and about a quarter of a second a password. */
+const presentCost = (): Cost => ({ ln: config().passwordCost, r: 8, p: 3 });
 const HASH_BYTES = 32;
 const SALT_BYTES = 16;
 
@@ -20,7 +21,7 @@ function derive(password: string, salt: Buffer, { ln, r, p }: Cost, bytes: numbe
 }
 
 /** A salted hash with its cost, such as `scrypt$15$8$3$salt$hash`, so that the cost can be raised later. */
-export async function hashPassword(password: string, cost: Cost = COST): Promise<string> {
+export async function hashPassword(password: string, cost: Cost = presentCost()): Promise<string> {
   const salt = randomBytes(SALT_BYTES);
   const key = await derive(password, salt, cost, HASH_BYTES);
   return ['scrypt', cost.ln, cost.r, cost.p, salt.toString('base64url'), key.toString('base64url')].join('$');
@@ -43,7 +44,8 @@ export async function passwordMatches(password: string, stored: string): Promise
 /** Whether a stored hash was made at another cost than today's. */
 export function needsNewHash(stored: string): boolean {
   const { cost } = parse(stored);
-  return cost.ln !== COST.ln || cost.r !== COST.r || cost.p !== COST.p;
+  const present = presentCost();
+  return cost.ln !== present.ln || cost.r !== present.r || cost.p !== present.p;
 }
 
 let dummy: Promise<string> | undefined;
