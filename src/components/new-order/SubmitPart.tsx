@@ -7,6 +7,7 @@ import { Button } from '../Button';
 import { CautionList } from '../CautionList';
 import { Checkbox } from '../Checkbox';
 import { ConfirmAddress } from '../ConfirmAddress';
+import { newestArtwork } from '../newest-artwork';
 import { ProblemNotice } from '../Notice';
 import { missingWords, type DraftForm } from './draft-form';
 import { Part } from './Part';
@@ -60,7 +61,7 @@ export function SubmitPart({ draft, unconfirmedEmail }: Props) {
       {unconfirmedEmail ? (
         <ConfirmAddress email={unconfirmedEmail} />
       ) : (
-        waits && <p className="text-15 text-warning">{waits}</p>
+        waits && !submit.isPending && <p className="text-15 text-warning">{waits}</p>
       )}
       {submit.isError && <ProblemNotice problem={problemOf(submit.error)} />}
       {draft.problem && draft.keeping === 'not-kept' && <ProblemNotice problem={draft.problem} />}
@@ -69,7 +70,7 @@ export function SubmitPart({ draft, unconfirmedEmail }: Props) {
           Submit order
         </Button>
         <p role="status" className="text-13 text-quiet">
-          {keptWords(draft)}
+          {submit.isPending ? 'Looking at the artwork at this size, then the order goes off' : keptWords(draft)}
         </p>
       </div>
     </Part>
@@ -82,8 +83,23 @@ function keptWords({ order, keeping }: Draft): string {
   return order ? `Draft ${order.number} is kept. You can leave and come back.` : '';
 }
 
+const CHECK_AGAIN_MS = 400;
+const PATIENCE_MS = 120_000;
+
+/** The order once nothing is being looked at any more: a change of size just before submitting starts a check. */
+async function whenChecked(number: string): Promise<OrderView> {
+  const until = performance.now() + PATIENCE_MS;
+  for (;;) {
+    const { order } = await call('GET /api/orders/:number', { params: { number } });
+    const state = newestArtwork(order.artworks)?.task.state;
+    if ((state !== 'waiting' && state !== 'running') || performance.now() > until) return order;
+    await new Promise((resolve) => setTimeout(resolve, CHECK_AGAIN_MS));
+  }
+}
+
 async function submitOrder(draft: Draft): Promise<OrderView> {
-  const { number, version } = await draft.keep();
+  const kept = await draft.keep();
+  const { number, version } = await whenChecked(kept.number);
   const answer = await call('POST /api/orders/:number/events', {
     params: { number },
     body: { event: 'submit', version, rightsConfirmed: true },
