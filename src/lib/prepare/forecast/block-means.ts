@@ -19,10 +19,14 @@ export function blockMeans(width: number, height: number, block: number): { sink
   const sums = new Float64Array(columns);
   let row = 0;
   const sink: RowSink = (shares) => {
+    row++;
+    if (block === 1) {
+      means.data.set(shares, (row - 1) * columns);
+      return;
+    }
     for (let x = 0, i = 0; i < columns; i++) {
       for (const end = Math.min(width, x + block); x < end; x++) sums[i] += shares[x];
     }
-    row++;
     if (row % block !== 0 && row !== height) return;
     const rows = row % block || block;
     const start = (Math.ceil(row / block) - 1) * columns;

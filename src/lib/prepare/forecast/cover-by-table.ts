@@ -6,18 +6,33 @@ export type RowSink = (shares: Uint16Array) => void;
 
 const FULL_MARK = 511;
 
-/** Patterns of one row: for each pixel which of the nine pixels around it fire. */
-function patternsOf(mask: MaskRaster, row: number, into: Uint16Array): void {
-  const { width, height, data } = mask;
-  const own = row * width;
-  const above = row > 0 ? own - width : -1;
-  const below = row + 1 < height ? own + width : -1;
-  const columnAt = (x: number): number =>
-    (above >= 0 ? data[above + x] : 0) | (data[own + x] << 1) | (below >= 0 ? data[below + x] << 2 : 0);
-  let pattern = columnAt(0) << 6;
-  for (let x = 0; x < width; x++) {
-    pattern = (pattern >> 3) | (x + 1 < width ? columnAt(x + 1) << 6 : 0);
+/** Patterns of one row: for each pixel which of the nine pixels around fire; `empty` stands for rows beyond the mask. */
+function patternsOf(
+  { width, height, data }: MaskRaster,
+  row: number,
+  empty: Uint8Array,
+  into: Uint16Array,
+): void {
+  const own = data.subarray(row * width, (row + 1) * width);
+  const above = row > 0 ? data.subarray((row - 1) * width, row * width) : empty;
+  const below = row + 1 < height ? data.subarray((row + 1) * width, (row + 2) * width) : empty;
+  let pattern = (above[0] | (own[0] << 1) | (below[0] << 2)) << 6;
+  for (let x = 0, next = 1; next < width; x++, next++) {
+    pattern = (pattern >> 3) | ((above[next] | (own[next] << 1) | (below[next] << 2)) << 6);
     into[x] = pattern;
+  }
+  into[width - 1] = pattern >> 3;
+}
+
+/** Shares of one row of parts of each pixel, looked up by pattern. */
+function lookUp(patterns: Uint16Array, { parts, shares }: CoverTable, part: number, line: Uint16Array): void {
+  if (parts === 1) {
+    for (let x = 0; x < patterns.length; x++) line[x] = shares[patterns[x]];
+    return;
+  }
+  for (let x = 0, to = 0; x < patterns.length; x++) {
+    const from = (patterns[x] * parts + part) * parts;
+    for (let i = 0; i < parts; i++) line[to++] = shares[from + i];
   }
 }
 
@@ -27,16 +42,14 @@ function patternsOf(mask: MaskRaster, row: number, into: Uint16Array): void {
  * @param table shares by pattern; unchanged
  * @param sink takes height × parts rows of width × parts shares; the array is filled again afterwards
  */
-export function coverByTable(mask: MaskRaster, { parts, shares }: CoverTable, sink: RowSink): void {
+export function coverByTable(mask: MaskRaster, table: CoverTable, sink: RowSink): void {
   const patterns = new Uint16Array(mask.width);
-  const line = new Uint16Array(mask.width * parts);
+  const empty = new Uint8Array(mask.width);
+  const line = new Uint16Array(mask.width * table.parts);
   for (let row = 0; row < mask.height; row++) {
-    patternsOf(mask, row, patterns);
-    for (let part = 0; part < parts; part++) {
-      for (let x = 0, to = 0; x < patterns.length; x++) {
-        const from = (patterns[x] * parts + part) * parts;
-        for (let i = 0; i < parts; i++) line[to++] = shares[from + i];
-      }
+    patternsOf(mask, row, empty, patterns);
+    for (let part = 0; part < table.parts; part++) {
+      lookUp(patterns, table, part, line);
       sink(line);
     }
   }

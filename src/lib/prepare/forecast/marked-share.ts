@@ -99,13 +99,13 @@ export function markedShare(
 
 /** Rows of dots or levels as shares, each pixel repeated `parts` times along X and Y so that it stays a square. */
 function repeatPixels({ kind, width, data }: MarkRaster, parts: number, sink: RowSink): void {
+  const shares = Uint16Array.from({ length: 256 }, (_, sample) =>
+    kind === 'mask' ? Math.min(1, sample) * 65_535 : (255 - sample) * 257,
+  );
   const line = new Uint16Array(width * parts);
   for (let start = 0; start < data.length; start += width) {
-    for (let x = 0, to = 0; x < width; x++) {
-      const sample = data[start + x];
-      const share = kind === 'mask' ? sample * 65_535 : (255 - sample) * 257;
-      for (let i = 0; i < parts; i++) line[to++] = share;
-    }
+    if (parts === 1) for (let x = 0; x < width; x++) line[x] = shares[data[start + x]];
+    else for (let x = 0; x < width; x++) line.fill(shares[data[start + x]], x * parts, (x + 1) * parts);
     for (let i = 0; i < parts; i++) sink(line);
   }
 }

@@ -17,9 +17,6 @@ export type Light = 'linear' | 'coverage';
 /** Gives the rows of the resampled picture in turn; the array is filled again by the next call. */
 export type RowReader = (count: number) => Uint16Array;
 
-const clampSample = (value: number): number =>
-  value <= 0 ? 0 : value >= FULL_LUMINANCE ? FULL_LUMINANCE : value + 0.5;
-
 /** One row of a picture in the light that is averaged; `values` says what a sample counts. */
 function lightRow({ width, data }: Grey, row: number, values: Float32Array | null, into: Float32Array): void {
   const start = row * width;
