@@ -4,7 +4,7 @@ import { database, withWrite } from '../db';
 import { log } from '../log';
 import type { Person } from '../person';
 import { allMachines } from '../tables/machines';
-import { countOrders } from '../tables/orders';
+import { orderTitles } from '../tables/orders';
 import { peopleInRole, personById, type PersonRow } from '../tables/people';
 import { recordOf } from '../tables/record';
 import { allStocks } from '../tables/stocks';
@@ -35,18 +35,23 @@ async function demoShop(): Promise<DemoShop | null> {
   };
 }
 
-/** Whether this is a demo shop that nobody has ordered anything from yet. */
-async function isEmptyDemoShop(): Promise<boolean> {
-  if (!config().demoOrders || (await countOrders(database())) > 0) return false;
-  return (await recordOf(database(), 'shop')).some(({ event }) => event === 'open-demo-shop');
+/** Whether this is a demo shop that has not been filled to the end yet. */
+async function isUnfilledDemoShop(): Promise<boolean> {
+  if (!config().demoOrders) return false;
+  const events = (await recordOf(database(), 'shop')).map(({ event }) => event);
+  return events.includes('open-demo-shop') && !events.includes('fill-demo-shop');
 }
 
-/** Fills an empty demo shop with orders in every state; one that does not come out is written down and left behind. */
+/**
+ * Fills the demo shop with orders in every state. Stopped half-way, the next start goes on with those that are missing; one
+ * that does not come out is written down and left behind.
+ */
 export async function openDemoShop(): Promise<void> {
-  if (!(await isEmptyDemoShop())) return;
+  if (!(await isUnfilledDemoShop())) return;
   const shop = await demoShop();
   if (!shop) return;
-  for (const demo of DEMO_ORDERS) {
+  const known = await orderTitles(database());
+  for (const demo of DEMO_ORDERS.filter(({ title }) => !known.includes(title))) {
     try {
       await carryDemoOrder(shop, demo);
     } catch (error) {

@@ -121,7 +121,6 @@ export async function orderVersion(db: Db, id: number): Promise<number | null> {
   return row?.version ?? null;
 }
 
-export async function countOrders(db: Db): Promise<number> {
-  const rows = await db('orders').count<{ count: number }[]>({ count: '*' });
-  return rows[0].count;
+export async function orderTitles(db: Db): Promise<string[]> {
+  return db('orders').pluck('title');
 }
