@@ -30,8 +30,12 @@ class Sums {
   w = 0;
   xw = 0;
   yw = 0;
+  narrowest = Infinity;
+  widest = 0;
 
   clear(): void {
+    this.narrowest = Infinity;
+    this.widest = 0;
     this.n = this.x = this.y = this.xx = this.xy = this.yy = this.w = this.xw = this.yw = 0;
   }
 
@@ -45,6 +49,8 @@ class Sums {
     this.w += width;
     this.xw += dx * width;
     this.yw += dy * width;
+    if (width < this.narrowest) this.narrowest = width;
+    if (width > this.widest) this.widest = width;
   }
 }
 
@@ -80,7 +86,8 @@ export function smoothAxis(points: AxisPoints, grid: Int32Array, columns: number
     const [c, s] = [Math.cos(along), Math.sin(along)];
     out.along[n] = along;
     const slope = slopeOf(sums, c, s);
-    out.width[n] = Math.max(0, (sums.w - slope * (sums.x * c + sums.y * s)) / sums.n);
+    const fitted = (sums.w - slope * (sums.x * c + sums.y * s)) / sums.n;
+    out.width[n] = Math.min(sums.widest, Math.max(sums.narrowest, fitted));
     out.slope[n] = Math.abs(slope);
     const steep = Math.abs(s) > Math.abs(c);
     const doubles = steep ? countDoubles(grid, points, n, 1) : countDoubles(grid, points, n, columns);

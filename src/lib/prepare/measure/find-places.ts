@@ -33,6 +33,8 @@ export interface SearchFrame {
 }
 
 export interface FoundPlaces extends Inspection {
+  /** whether all of the artwork was looked at closely, and not only what the coarse pass marked */
+  whole: boolean;
   /** scale that was measured at */
   pxPerMm: number;
   artWidthPx: number;
@@ -84,9 +86,10 @@ export async function findPlaces(source: CoverageSource, frame: SearchFrame): Pr
   const extents = lineExtents(frame.spot, pxPerMm);
   const margin = marginPx(extents);
   const faintest = native ? FAINTEST.pixels : FAINTEST.drawn;
-  const found: FoundPlaces = { ink: nothing(), gaps: nothing(), burnedPx: 0, pxPerMm, artWidthPx, artHeightPx };
+  const found: FoundPlaces = { ink: nothing(), gaps: nothing(), burnedPx: 0, whole: true, pxPerMm, artWidthPx, artHeightPx };
   const large = artWidthPx * artHeightPx > WHOLE_PX;
   const cells = (large ? await coarseMap(source, frame, pxPerMm, faintest) : null) ?? frame.drawn;
+  found.whole = cells === null;
   for (const part of partsToInspect(artWidthPx, artHeightPx, cells)) {
     const left = part.left - margin;
     const top = part.top - margin;

@@ -11,8 +11,8 @@ import { drawnCells, isTonalAt, surveyTones } from './tone-survey';
 const FIRST_EXTENTS = 6;
 /** Widths under this many pixels tell only roughly how much larger the artwork must be. */
 const ROUGH_PX = 2.5;
-const ROUGH_GROWTH = 2;
-const MOST_GROWTH = 6;
+const ROUGH_GROWTH = 6;
+const MOST_GROWTH = 30;
 /** Share of the burned area that may lie in islands smaller than the spot before the picture counts as not yet resolved. */
 const DUST_SHARE = 0.02;
 /** Share of the burned area that must be seen as burned: thinner strokes than a pixel are not. */
@@ -46,7 +46,7 @@ function verdictOf(found: FoundPlaces, vector: boolean, burnedShare: number): Ve
   }
   return {
     sound: thin.length === 0,
-    resolved: smallPx2 <= DUST_SHARE * burnedPx && found.burnedPx >= SEEN_SHARE * burnedPx,
+    resolved: smallPx2 <= DUST_SHARE * burnedPx && (!found.whole || found.burnedPx >= SEEN_SHARE * burnedPx),
     fading: thin.length > 0 && thin.every(({ fading }) => fading),
     growth: Math.min(MOST_GROWTH, Math.max(1.01, growth)),
   };

@@ -1,6 +1,4 @@
-import type { Spot } from '../../machines/spot';
 import type { Facts } from '../../preflight/facts';
-import type { Limits } from '../../preflight/limits';
 import type { Treatment } from '../settings';
 
 export interface Suggestion {
@@ -41,22 +39,4 @@ export function suggestTreatment(tone: Facts['tone'], vector: boolean): Suggesti
     return { treatment: 'linework', reason: 'It is drawn in fine lines: following them keeps them sharp.' };
   }
   return { treatment: 'solid', reason: 'It has two levels and filled shapes: they are burned solid.' };
-}
-
-/**
- * What `judge` holds the facts against.
- * @param facts what was measured; unchanged
- * @param settings spot, and treatment or null: the suggested one stands in; unchanged
- * @param vector whether the artwork is a drawing
- */
-export function limitsFor(
-  facts: Facts,
-  settings: { spot: Spot; treatment: Treatment | null },
-  vector: boolean,
-): Limits {
-  return {
-    spot: settings.spot,
-    treatment: settings.treatment ?? suggestTreatment(facts.tone, vector).treatment,
-    photograph: facts.tone.tonalShare >= PHOTOGRAPH_SHARE,
-  };
 }

@@ -12,6 +12,8 @@ const TAPER_EXTENTS = 3;
 /** A stretch that ends thinner than so many pixels, and is so many times wider half-way, tapers to nothing. */
 const FADED_PX = 2.5;
 const FADING_SHARE = 1.8;
+/** Strokes taper less than this by what cannot be measured better. */
+const EVEN_TAPER = 0.03;
 
 /** A stretch of middle line along which a stroke or a gap is too thin. */
 export interface ThinRun {
@@ -105,6 +107,7 @@ class Stretch {
   width = 0;
   slope = 0;
   limit = 0;
+  tapering = 0;
   private narrowest = Infinity;
   private widest = 0;
 
@@ -113,6 +116,7 @@ class Stretch {
     this.width += step * width;
     this.slope += step * slope;
     this.limit += step * limit;
+    if (slope > EVEN_TAPER) this.tapering += step;
     if (slope > GENTLE_TAPER) return;
     this.gentle += step;
     this.narrowest = Math.min(this.narrowest, width);
@@ -156,7 +160,8 @@ function describe(members: number[], smoothed: SmoothedAxis, extents: LineExtent
   const { length, taper, meanPx } = whole;
   const worstRatio = ratio.get(byRatio[0]) ?? Infinity;
   const middle = ratio.get(byRatio[byRatio.length >> 1]) ?? 0;
-  const fading = smallest < FADED_PX && middle > FADING_SHARE * worstRatio && soundScale * worstRatio > 0.8 * share;
+  const fades = smallest < FADED_PX && middle > FADING_SHARE * worstRatio && whole.tapering > 0.8 * length;
+  const fading = fades && soundScale * worstRatio > 0.8 * share;
   return {
     members,
     smallestPx: smallest,
