@@ -1,26 +1,10 @@
 import { apply, flatten, polyline, type Curve, type Point } from './curve';
 import type { Drawing, Painting } from './drawing';
-import {
-  boundsOf,
-  cutLine,
-  EMPTY,
-  intersect,
-  offsetByDisc,
-  penArea,
-  regionOf,
-  subtract,
-  unite,
-  type Region,
-} from './region';
-
-type Bounds = readonly [left: number, top: number, right: number, bottom: number];
+import { GrowingArea, meet, within, type Bounds } from './parts';
+import { boundsOf, cutLine, EMPTY, intersect, offsetByDisc, penArea, regionOf, type Region } from './region';
 
 /** Beyond so many comparisons of paintings with each other, hidden lines are no longer looked for. */
 const MAX_COMPARISONS = 20_000_000;
-
-const meet = (a: Bounds, b: Bounds): boolean => a[0] < b[2] && b[0] < a[2] && a[1] < b[3] && b[1] < a[3];
-const within = (a: Bounds, b: Bounds): boolean =>
-  a[0] >= b[0] && a[1] >= b[1] && a[2] <= b[2] && a[3] <= b[3];
 
 /** A painting with its area worked out when it is first asked for. */
 class Layer {
@@ -81,32 +65,21 @@ class Layer {
   }
 }
 
-/** Ink areas of a drawing whose paints are all known: what is filled dark, less what is painted light over it. */
-function inkAreas(layers: readonly Layer[]): Region {
-  let region: Region = EMPTY;
-  let batch: Region[] = [];
-  let effect: 'ink' | 'light' = 'ink';
-  const inked: Bounds[] = [];
-  const settle = (): void => {
-    if (batch.length === 0) return;
-    const area = batch.length === 1 ? batch[0] : regionOf(batch.flat(), 'nonzero');
-    region = effect === 'ink' ? unite(region, area) : subtract(region, area);
-    batch = [];
-  };
+/**
+ * Ink areas of a drawing whose paints are all known: what is filled dark, less what is painted light over it. Null where
+ * the paintings lie over each other so often that a render is the quicker way.
+ */
+function inkAreas(layers: readonly Layer[]): Region | null {
+  const ink = new GrowingArea();
   for (const layer of layers) {
-    const { painting } = layer;
-    const isLine = painting.kind === 'stroke' && painting.effect === 'ink';
-    if (isLine || painting.effect === 'unknown') continue;
+    const { kind, effect, underOwnStroke } = layer.painting;
+    if (effect === 'unknown' || (kind === 'stroke' && effect === 'ink')) continue;
     // A dark area with a dark line of its own round it is that line; what lies under it does not show.
-    const next = painting.effect === 'ink' && !painting.underOwnStroke ? 'ink' : 'light';
-    if (next === 'light' && !inked.some((bounds) => meet(bounds, layer.bounds))) continue;
-    if (next !== effect) settle();
-    effect = next;
-    batch.push(layer.area);
-    if (next === 'ink') inked.push(layer.bounds);
+    if (effect === 'ink' && !underOwnStroke) ink.add(layer.area);
+    else if (ink.touches(layer.bounds)) ink.cut(layer.area);
+    if (ink.isTooMuch) return null;
   }
-  settle();
-  return region;
+  return ink.region;
 }
 
 function samePoints(a: readonly Point[], b: readonly Point[]): boolean {
@@ -196,5 +169,6 @@ export function follow(drawing: Drawing, toleranceMm: number): Followed {
     painting.effect === 'ink' &&
     (!needsRender || followed.has(painting.element));
   const lines = strokeLines(layers, isFollowed, page, toleranceMm);
-  return { lines, areas: needsRender ? null : intersect(inkAreas(layers), page) };
+  const areas = needsRender ? null : inkAreas(layers);
+  return { lines, areas: areas && intersect(areas, page) };
 }

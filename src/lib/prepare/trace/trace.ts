@@ -15,7 +15,7 @@ import { traceMask, type TracedMask } from './trace-mask';
 type Tools = Pick<PipelineTools, 'renderSvg' | 'traceGrey'>;
 
 /** Chords stay this share of the spot's smaller side from the curves that they stand for. */
-const CHORD_SHARE = 1 / 100;
+const CHORD_SHARE = 1 / 50;
 
 interface Found {
   method: 'followed' | 'traced';
@@ -54,7 +54,7 @@ const nodesOf = ({ pieces, closed }: Curve): number => pieces.length + (closed ?
  * @param tools `renderSvg` and `traceGrey` are used
  * @returns lines in mm; none for an artwork without ink
  * @throws ArtworkError when it takes too long or holds nothing that can be followed
- * Accuracy: filled outlines within a hundredth of the spot; traced ones as the report says.
+ * Accuracy: filled outlines within a fiftieth of the spot; traced ones as the report says.
  */
 export async function trace(artwork: Artwork, settings: TraceSettings, tools: Tools): Promise<Linework> {
   const { widthMm, heightMm, spot } = settings;
