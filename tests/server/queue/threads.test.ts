@@ -39,6 +39,7 @@ describe('the pipeline in threads', () => {
     expect(report).toMatchObject({ widthMm: 30, artwork: { format: 'svg' } });
     expect([...picture.slice(1, 4)]).toEqual([0x50, 0x4e, 0x47]);
     expect(told.map(([stage]) => stage)).toContain('Measuring');
+    for (const [stage] of told) expect(stage, 'a stage in words').toMatch(/^[A-Z]/);
     const progresses = told.map(([, progress]) => progress);
     expect(progresses).toEqual([...progresses].sort((a, b) => a - b));
   });
@@ -46,7 +47,9 @@ describe('the pipeline in threads', () => {
   it('prepares under the key that was known before, with the same bytes each time', async () => {
     const request = { settings: settings(), artworkVersion: 1 };
     const bytes = sample('stamp.png');
-    const first = await pipeline.prepare(bytes, request, quiet());
+    const told: string[] = [];
+    const first = await pipeline.prepare(bytes, request, { ...quiet(), progress: (stage) => void told.push(stage) });
+    for (const stage of told) expect(stage, 'a stage in words').toMatch(/^[A-Z]/);
     const second = await pipeline.prepare(bytes, request, quiet());
     expect(first.key).toBe(await pipeline.keyOf(first.manifest.artworkSha256, request));
     expect(second.manifestSha256).toBe(first.manifestSha256);

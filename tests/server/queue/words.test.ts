@@ -38,7 +38,7 @@ describe('a full disk', () => {
 
 describe('progress', () => {
   it.each(['check', 'prepare'] as const)('of a %s runs from 0 to 1 through its stages without a step back', (work) => {
-    const stages = work === 'check' ? ['ingest', 'measure', 'preflight', 'picture'] : ['ingest', 'measure', 'preflight', 'mark', 'package', 'forecast'];
+    const stages = work === 'check' ? ['ingest', 'measure', 'preflight', 'sound-width', 'picture'] : ['ingest', 'measure', 'preflight', 'sound-width', 'mark', 'trace', 'package', 'forecast'];
     const seen = stages.flatMap((stage) => [0, 0.5, 1].map((share) => workProgress(work, stage, share)));
     const shares = seen.map(({ progress }) => progress);
     expect(shares).toEqual([...shares].sort((a, b) => a - b));

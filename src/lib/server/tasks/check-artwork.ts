@@ -29,7 +29,7 @@ async function settingsOf(db: Db, artwork: ArtworkRow): Promise<CheckSettings> {
 export const checkArtworkTask = taskHandler({
   name: 'check-artwork',
   payload,
-  timeLimitMs: 2 * 60_000,
+  timeLimitMs: 4 * 60_000,
   async run({ artworkId }, context) {
     const artwork = await artworkById(database(), artworkId);
     if (!artwork) throw new Error(`expected artwork ${artworkId}, got none`);
