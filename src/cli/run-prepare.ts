@@ -2,7 +2,9 @@ import path from 'node:path';
 import { ingest } from '../lib/prepare/ingest/ingest';
 import { canonicalJson } from '../lib/prepare/manifest';
 import { prepareArtwork, type Prepared } from '../lib/prepare/pipeline';
-import type { PipelineTools } from '../lib/prepare/tools';
+import { passFrames } from '../lib/prepare/resample/pass-frames';
+import type { Settings } from '../lib/prepare/settings';
+import { ArtworkError, type PipelineTools } from '../lib/prepare/tools';
 import type { TypedCommand } from './arguments';
 import { readAsked, sizeFor } from './asked';
 import { checkText } from './check-text';
@@ -19,6 +21,16 @@ async function readOut(text: string | undefined): Promise<string> {
   if (!text) throw new UsageError('--out is needed: the folder that the files are written into.');
   if (await isTakenByFile(text)) throw new UsageError(`--out takes a folder, and ${text} is a file.`);
   return text;
+}
+
+/** Refuses passes that would not fit before any work: the artwork is sound, the pitch is not. */
+function requireFittingPitch(settings: Settings): void {
+  try {
+    passFrames(settings);
+  } catch (error) {
+    if (error instanceof ArtworkError) throw new UsageError(`--pitch-mm does not fit. ${error.message}`, { cause: error });
+    throw error;
+  }
 }
 
 /** The manifest stands last: where it is, all the other files are. */
@@ -47,6 +59,7 @@ export async function runPrepare(typed: TypedCommand, tools: PipelineTools, arou
     throw new UsageError('--width-mm is needed, from 1 to 3000 mm: this artwork states no size of its own.');
   }
   const settings = settingsOf(asked, choices, sizeFor(artwork, asked), typed.switches.has('mirror'));
+  requireFittingPitch(settings);
   const prepared = await prepareArtwork(bytes, { settings, artworkVersion: 1 }, tools);
   const files = filesOf(prepared, typed.switches.has('pictures'));
   await writeFolder(out, files);

@@ -24,9 +24,14 @@ async function drawn(name: string, width: number, height: number, inside: string
   return { name, width, height, grey: new Uint8Array(grey) };
 }
 
-/** A leaf-like outline with one hole, three thousand pixels wide: few paths, each of them very long. */
+/** A leaf-like outline with one hole, as large as the photograph is prepared: few paths, each of them very long. */
 const smoothShape = (): Promise<Bitmap> =>
-  drawn('large smooth shape', 3000, 3000, `<path fill-rule="evenodd" d="M200 1600C300 500 1300 100 2750 250C2900 1700 2400 2800 1300 2750C700 2700 250 2300 200 1600ZM1000 1500C1100 1000 1700 900 2000 1200S1900 2000 1500 2050S950 1800 1000 1500Z"/>`);
+  drawn(
+    'large smooth shape',
+    5000,
+    3333,
+    '<path fill-rule="evenodd" d="M300 1800C500 600 2200 100 4650 250C4900 1900 4000 3150 2200 3080C1200 3020 400 2600 300 1800ZM1700 1700C1900 1050 2900 950 3350 1300S3200 2250 2500 2300S1600 2050 1700 1700Z"/>',
+  );
 
 const WORDS = 'Umber is a brown earth that was ground for painters and is still the shade of a careful burn.';
 const LINES = 44;

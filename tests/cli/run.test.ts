@@ -122,6 +122,7 @@ describe('refusals', () => {
     ['a width out of range', ['check', sample('stamp.png'), ...SPOT, '--width-mm', '5000'], '--width-mm takes a number from 1 to 3000 mm'],
     ['a screen that comes later', ['prepare', sample('stamp.png'), ...SPOT, '--treatment', 'halftone', '--screen', 'spot-aware', '--out', 'x'], 'comes later'],
     ['no size anywhere', ['prepare', sample('still-life.png'), ...SPOT, '--treatment', 'halftone', '--out', 'never-made'], '--width-mm is needed, from 1 to 3000 mm'],
+    ['a pitch that would not fit', ['prepare', sample('stamp.png'), ...SPOT, '--width-mm', '3000', '--pitch-mm', '0.01', '--treatment', 'solid', '--out', 'never-made'], '--pitch-mm does not fit'],
     ['a file in the place of the folder', ['prepare', sample('stamp.png'), ...SPOT, '--treatment', 'solid', '--out', sample('stamp.png')], '--out takes a folder'],
   ])('%s: status 2, and the message names option and range', async (_name, argv, words) => {
     const { status, stdout, stderr } = await runLine(...argv);
