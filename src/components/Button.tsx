@@ -7,5 +7,5 @@ interface Props extends Omit<ButtonProps, 'className' | 'style'> {
 }
 
 export function Button({ kind = 'outlined', wide = false, ...props }: Props) {
-  return <AriaButton {...props} data-kind={kind} className={`button${wide ? ' w-full' : ''}`} />;
+  return <AriaButton {...props} data-kind={kind} className={wide ? 'button w-full' : 'button'} />;
 }

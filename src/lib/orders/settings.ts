@@ -1,7 +1,7 @@
 import type { Machine } from '../machines/machine';
 import { sizeAcross, type Spot } from '../machines/spot';
 import type { CheckSettings } from '../prepare/pipeline';
-import { machineRunSchema, scanFor, settingsSchema, stockToneSchema, type MachineRun, type Settings, type StockTone, type Treatment } from '../prepare/settings';
+import { DEFAULT_SCREEN, machineRunSchema, scanFor, settingsSchema, stockToneSchema, type MachineRun, type Settings, type StockTone, type Treatment } from '../prepare/settings';
 import type { Stock } from '../stock/stock';
 import { placeOnBlank, type Blank, type OrderFields } from './order';
 import type { Design } from './views';
@@ -95,7 +95,10 @@ export function checkSettingsFor(
   };
 }
 
-/** The choices that a designer starts from: pitch ratio 1 at 0°, one pass, the customer's treatment or the suggested one. */
+/**
+ * The choices that a designer starts from: pitch ratio 1 at 0°, one pass, tones scaled into what the stock can show, the
+ * customer's treatment or the suggested one.
+ */
 export function firstDesign(
   ids: { machineId: number; spotPresetId: number },
   spot: Spot,
@@ -104,10 +107,10 @@ export function firstDesign(
   return {
     ...ids,
     treatment,
-    screen: 'even-grain',
+    screen: DEFAULT_SCREEN,
     scan: scanFor(spot, 0),
     perpendicular: null,
-    tone: { mode: 'absolute', blackPoint: 0, whitePoint: 1, gamma: 1 },
+    tone: { mode: 'scaled', blackPoint: 0, whitePoint: 1, gamma: 1 },
     dividingLstar: FIRST_DIVIDING_LSTAR,
     corners: 'kept',
     mirror: false,

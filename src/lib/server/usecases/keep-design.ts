@@ -39,10 +39,25 @@ const checked = (design: Design | null): string =>
 
 const keys = (design: Design): (keyof Design)[] => Object.keys(design) as (keyof Design)[];
 
+const CHOICE_WORDS: Record<keyof Design, string> = {
+  machineId: 'machine',
+  spotPresetId: 'spot',
+  treatment: 'treatment',
+  screen: 'screen',
+  scan: 'line pitch and direction',
+  perpendicular: 'passes',
+  tone: 'tone',
+  dividingLstar: 'dividing level',
+  corners: 'corners',
+  mirror: 'mirror',
+  recipe: 'power, speed and focus',
+};
+
 /** Which choices differ, for the record. */
 const changedWords = (before: Design | null, after: Design): string =>
   keys(after)
     .filter((key) => !before || JSON.stringify(before[key]) !== JSON.stringify(after[key]))
+    .map((key) => CHOICE_WORDS[key])
     .join(', ');
 
 /** Keeps the designer’s choices; a pass holds for what was prepared until it is prepared again. */
