@@ -19,7 +19,7 @@ export function MarginNotes({
   lit,
   onLit,
   action,
-  clear = 'Nothing to note. The laser can hold this drawing.',
+  clear = 'Nothing to note. The laser can hold it.',
 }: Props) {
   if (findings.length === 0) return <p className="text-15 text-quiet">{clear}</p>;
   return (

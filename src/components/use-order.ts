@@ -5,6 +5,14 @@ import { call } from './api';
 
 export const orderKey = (number: string) => ['order', number] as const;
 
+const POLL_MS = 5_000;
+
+function isWorkedOn({ artworks, preparations }: OrderView): boolean {
+  return [...artworks, ...preparations].some(
+    ({ task }) => task.state === 'waiting' || task.state === 'running',
+  );
+}
+
 /** One order, from the server's first answer on; an empty number asks for none. */
 export function useOrder(number: string, initial?: OrderView) {
   return useQuery({
@@ -14,6 +22,8 @@ export function useOrder(number: string, initial?: OrderView) {
     initialData: initial,
     enabled: number !== '',
     staleTime: 0,
+    // Should an event be missed, a task under way is still seen to end.
+    refetchInterval: ({ state }) => (state.data && isWorkedOn(state.data) ? POLL_MS : false),
     refetchOnMount: initial === undefined,
   });
 }

@@ -32,7 +32,7 @@ export function useProgress(number: string | null): ProgressTask[] {
       const news = JSON.parse(event.data) as ProgressEvent;
       setTasks(news.tasks);
       const now = `${news.version}/${news.tasks.map((task) => `${task.kind}${task.subject}${task.state}`).join()}`;
-      if (now !== seen && seen !== '') refetch();
+      if (now !== seen) refetch();
       seen = now;
     };
     source.onmessage = take;

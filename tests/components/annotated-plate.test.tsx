@@ -68,6 +68,6 @@ describe('AnnotatedPlate', () => {
 
   test('where nothing was found, it says so', () => {
     shown([]);
-    expect(screen.getByText('Nothing to note. The laser can hold this drawing.')).toBeTruthy();
+    expect(screen.getByText('Nothing to note. The laser can hold it.')).toBeTruthy();
   });
 });

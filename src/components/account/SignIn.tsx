@@ -18,6 +18,18 @@ const TOO_MANY = {
   action: 'Wait a few minutes and try again.',
 };
 
+const BROKEN = {
+  code: 'sign-in-broke',
+  title: 'Signing in did not work just now.',
+  detail: 'Something broke on our side; your password was not looked at.',
+  action: 'Try again in a minute.',
+};
+
+function refusalOf(search: URLSearchParams): Refusal {
+  if (search.get('error') !== 'CredentialsSignin') return new Refusal(500, BROKEN);
+  return search.get('code') === 'too-many' ? new Refusal(429, TOO_MANY) : new Refusal(401, WRONG);
+}
+
 /** Signs in and goes where the person was heading. */
 export default function SignIn({ next }: { next: string }) {
   return (
@@ -36,7 +48,7 @@ export default function SignIn({ next }: { next: string }) {
           } as Parameters<typeof signIn>[1]);
           if (!answer) return;
           const { url } = (await answer.json()) as { url: string };
-          throw new Refusal(401, url.includes('code=too-many') ? TOO_MANY : WRONG);
+          throw refusalOf(new URL(url, window.location.href).searchParams);
         }}
       />
     </Island>

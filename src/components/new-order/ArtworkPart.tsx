@@ -8,7 +8,7 @@ import { ProgressRule } from '../ProgressRule';
 import { newestArtwork, pictureOf } from '../newest-artwork';
 import { DropPlace, FileButton } from './DropPlace';
 import { SoundWidth } from './SoundWidth';
-import { taskWords } from './task-words';
+import { isWorking, taskWords } from './task-words';
 import type { UploadState } from './use-upload';
 
 interface Props {
@@ -86,7 +86,7 @@ function CheckedArtwork({
   onUseWidth,
 }: CheckedProps) {
   const { check } = artwork;
-  const task = artwork.task.state === 'failed' ? artwork.task : (liveTask ?? artwork.task);
+  const task = liveTask && isWorking(liveTask) ? liveTask : artwork.task;
   const again = useMutation({
     mutationFn: () =>
       call('POST /api/orders/:number/artwork/:artworkVersion/check', {
@@ -95,7 +95,7 @@ function CheckedArtwork({
       }),
     onSuccess: ({ order }) => take(order),
   });
-  const working = task.state === 'waiting' || task.state === 'running';
+  const working = isWorking(task);
   const status = (
     <>
       {working && (

@@ -28,7 +28,8 @@ export function SizePart({ check, unit, onUnit }: Props) {
   const { setValue } = form;
   useEffect(() => {
     if (!locked || aspect === null || (widthMm === null) === (heightMm === null)) return;
-    const size = widthMm !== null ? lockedSize('width', widthMm, aspect) : lockedSize('height', heightMm, aspect);
+    const size =
+      widthMm !== null ? lockedSize('width', widthMm, aspect) : lockedSize('height', heightMm, aspect);
     setValue('widthMm', size.widthMm, { shouldDirty: true });
     setValue('heightMm', size.heightMm, { shouldDirty: true, shouldTouch: true });
   }, [aspect, heightMm, locked, setValue, widthMm]);

@@ -70,7 +70,9 @@ export function SubmitPart({ draft, unconfirmedEmail }: Props) {
           Submit order
         </Button>
         <p role="status" className="text-13 text-quiet">
-          {submit.isPending ? 'Looking at the artwork at this size, then the order goes off' : keptWords(draft)}
+          {submit.isPending
+            ? 'Looking at the artwork at this size, then the order goes off'
+            : keptWords(draft)}
         </p>
       </div>
     </Part>

@@ -66,7 +66,7 @@ export function TermsPart() {
           name="dueOn"
           render={({ field }) => (
             <TextField
-              label="Needed by, if it matters"
+              label="Needed by"
               type="date"
               value={field.value}
               onChange={field.onChange}

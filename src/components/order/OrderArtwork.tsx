@@ -1,6 +1,6 @@
 import type { OrderView, ProgressEvent } from '@/lib/orders/views';
 import { AnnotatedPlate } from '../AnnotatedPlate';
-import { taskWords } from '../new-order/task-words';
+import { isWorking, taskWords } from '../new-order/task-words';
 import { newestArtwork, pictureOf } from '../newest-artwork';
 import { Notice } from '../Notice';
 import { ProgressRule } from '../ProgressRule';
@@ -14,8 +14,9 @@ interface Props {
 export function OrderArtwork({ order, tasks }: Props) {
   const artwork = newestArtwork(order.artworks);
   if (!artwork) return <p className="text-quiet">No artwork yet.</p>;
-  const live = tasks.find(({ kind }) => kind === 'check') ?? artwork.task;
-  const working = artwork.task.state === 'waiting' || artwork.task.state === 'running';
+  const news = tasks.find((task) => task.kind === 'check' && isWorking(task));
+  const live = news ?? artwork.task;
+  const working = isWorking(live);
   const status = (
     <>
       <p className="min-w-0 break-words text-15">

@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { Button } from '../Button';
 import { Dialog } from '../Dialog';
 import { Slider } from '../Slider';
+import { useNarrow } from '../use-narrow';
 import { CARD_HEIGHT_MM, CARD_WIDTH_MM, CLAIMED_PX_PER_MM, keepScale, keptScale } from './screen-scale';
 
 interface Props {
@@ -25,6 +26,7 @@ export function TrueSize({ src, widthMm, heightMm }: Props) {
         title={scale === null ? 'How big is your screen?' : 'True size'}
         isOpen={isOpen}
         onClose={() => setOpen(false)}
+        wide={scale !== null}
       >
         {scale === null ? (
           <CardMeasure
@@ -62,25 +64,28 @@ export function TrueSize({ src, widthMm, heightMm }: Props) {
 /** A drawing of a bank card that is made as wide as a real one: what a screen's pixels measure. */
 export function CardMeasure({ onDone }: { onDone: (pxPerMm: number) => void }) {
   const [pxPerMm, setPxPerMm] = useState(CLAIMED_PX_PER_MM);
+  // A card lying does not fit on a phone; upright it does.
+  const upright = useNarrow();
+  const [widthMm, heightMm] = upright ? [CARD_HEIGHT_MM, CARD_WIDTH_MM] : [CARD_WIDTH_MM, CARD_HEIGHT_MM];
   return (
     <>
       <p className="text-15">
-        Hold a bank card against the screen, and slide until the drawing is as wide as the card. It is asked
-        only once.
+        Hold a bank card {upright ? 'upright ' : ''}against the screen, and slide until the drawing is as wide
+        as the card. It is asked only once.
       </p>
       <div className="overflow-hidden">
         <div
           className="rounded border border-ink"
-          style={{ width: CARD_WIDTH_MM * pxPerMm, height: CARD_HEIGHT_MM * pxPerMm }}
+          style={{ width: widthMm * pxPerMm, height: Math.min(heightMm * pxPerMm, 220) }}
           aria-hidden="true"
         />
       </div>
       <Slider
         label="Width of the drawing"
-        value={Math.round(CARD_WIDTH_MM * pxPerMm)}
-        onChange={(px) => setPxPerMm(px / CARD_WIDTH_MM)}
-        min={180}
-        max={900}
+        value={Math.round(widthMm * pxPerMm)}
+        onChange={(px) => setPxPerMm(px / widthMm)}
+        min={Math.round(widthMm * 2)}
+        max={Math.round(widthMm * (upright ? 5.5 : 9))}
         step={1}
         unit="px"
         decimals={0}
