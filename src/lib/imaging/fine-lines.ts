@@ -78,9 +78,13 @@ function weigh(data: Uint8Array, i: number, width: number, x: number, y: number,
   const along = Math.atan2(2 * xy, xx - yy) / 2;
   // At the end of a line half the window is empty, and what is left tells no width.
   if (Math.abs(mx * Math.cos(along) + my * Math.sin(along)) > END_PX * m) return false;
-  const side = 2 * REACH_PX + 1;
-  const length = side / Math.max(Math.abs(Math.cos(along)), Math.abs(Math.sin(along)));
-  out.push(x + 0.5, y + 0.5, m / 255 / length, along > 0 ? along - Math.PI / 2 : along + Math.PI / 2);
+  // The straight cut through the pixel holds the whole line; aslant it is longer than the line is wide.
+  const flat = Math.abs(Math.cos(along)) >= Math.abs(Math.sin(along));
+  const step = flat ? width : 1;
+  let cut = 0;
+  for (let k = -REACH_PX; k <= REACH_PX; k++) cut += data[i + k * step] ^ flip;
+  const share = Math.max(Math.abs(Math.cos(along)), Math.abs(Math.sin(along)));
+  out.push(x + 0.5, y + 0.5, (cut / 255) * share, along > 0 ? along - Math.PI / 2 : along + Math.PI / 2);
   return true;
 }
 
