@@ -10,6 +10,8 @@ import { magickSeconds, pillowSeconds, potraceSeconds, vipsSeconds } from './out
 export const BEGIN = '<!-- bench: written by npm run bench -- --write -->';
 export const END = '<!-- end of bench -->';
 const ROUNDS = 5;
+/** Stages that take less are not worth a row, s. */
+const SHOWN_S = 0.005;
 const TO_FILE = ['ingest', 'resample', 'tone', 'screen', 'package'];
 const PREFLIGHT = ['measure', 'preflight', 'sound-width'];
 const BITMAP_NAMES = Object.keys(BITMAPS) as BitmapName[];
@@ -53,7 +55,7 @@ function halftoneRows(jpeg: string, folder: string): string[] {
   const peak = Math.round(median(runs.map((run) => run.peakMb)));
   const stage = (name: string): string => seconds(median(runs.map((run) => sumOf(run, [name]))));
   const withPreflight = median(runs.map((run) => sumOf(run, [...TO_FILE, ...PREFLIGHT])));
-  const all = Object.keys(runs[0].timings);
+  const all = Object.keys(runs[0].timings).filter((name) => median(runs.map((run) => sumOf(run, [name]))) >= SHOWN_S);
   return [
     ...all.map((name) => row(`Umberline, ${name} alone`, stage(name), '', '')),
     row('Umberline, halftone to file', seconds(outside.ours), times(outside.ours, outside.pillow), 'at most 1.5 ×'),
