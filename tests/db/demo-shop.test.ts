@@ -13,11 +13,17 @@ import { allStocks } from '@/lib/server/tables/stocks';
 import { washSchema } from '@/lib/stock/wash';
 import { stockSchema } from '@/lib/stock/stock';
 
-const people = JSON.parse(readFileSync('db/seeds/demo-people.json', 'utf8')) as { role: string; email: string; password: string }[];
+const people = JSON.parse(readFileSync('db/seeds/demo-people.json', 'utf8')) as {
+  role: string;
+  email: string;
+  password: string;
+}[];
 
 function lstarOfHex(colour: string): number {
   const [red, green, blue] = linearOfHex(colour);
-  return lstarOfLuminance(red * LUMINANCE_WEIGHTS.red + green * LUMINANCE_WEIGHTS.green + blue * LUMINANCE_WEIGHTS.blue);
+  return lstarOfLuminance(
+    red * LUMINANCE_WEIGHTS.red + green * LUMINANCE_WEIGHTS.green + blue * LUMINANCE_WEIGHTS.blue,
+  );
 }
 
 afterEach(() => vi.unstubAllEnvs());
@@ -57,13 +63,17 @@ describe('the demo shop', () => {
       expect(machine.spotPresets.length).toBeGreaterThan(0);
       for (const preset of machine.spotPresets) spotPresetSchema.parse(preset);
     }
-    expect(new Set(machines.flatMap((machine) => machine.spotPresets.map(({ shape }) => shape)))).toEqual(new Set(['rectangle', 'ellipse']));
+    expect(new Set(machines.flatMap((machine) => machine.spotPresets.map(({ shape }) => shape)))).toEqual(
+      new Set(['rectangle', 'ellipse']),
+    );
   });
 
   it('has stocks whose colours have the lightness that is written beside them', async () => {
     const stocks = await allStocks(database());
     expect(stocks.map(({ direction }) => direction)).toContain('lightens');
-    expect(stocks.filter(({ forbidden }) => forbidden).map(({ cautions }) => cautions)).toEqual([['chlorinated']]);
+    expect(stocks.filter(({ forbidden }) => forbidden).map(({ cautions }) => cautions)).toEqual([
+      ['chlorinated'],
+    ]);
     for (const stock of stocks) {
       stockSchema.parse(stock);
       expect(lstarOfHex(stock.groundColour)).toBeCloseTo(stock.groundLstar, 1);

@@ -19,7 +19,11 @@ afterAll(async () => {
 
 /** Every table, index and trigger as the database itself describes it. */
 const layout = (): Promise<unknown> =>
-  db('sqlite_schema').select('type', 'name', 'sql').whereNot('name', 'like', 'knex_%').whereNot('name', 'like', 'sqlite_%').orderBy('name');
+  db('sqlite_schema')
+    .select('type', 'name', 'sql')
+    .whereNot('name', 'like', 'knex_%')
+    .whereNot('name', 'like', 'sqlite_%')
+    .orderBy('name');
 
 describe('migrations', () => {
   it('go up, down to nothing, and up to the same layout again', async () => {
@@ -52,7 +56,8 @@ describe('migrations', () => {
   });
 
   it('leave foreign keys on, the journal in WAL and every commit on disk', async () => {
-    const value = async (pragma: string): Promise<unknown> => Object.values((await db.raw(`pragma ${pragma}`))[0])[0];
+    const value = async (pragma: string): Promise<unknown> =>
+      Object.values((await db.raw(`pragma ${pragma}`))[0])[0];
     expect(await value('foreign_keys')).toBe(1);
     expect(await value('journal_mode')).toBe('wal');
     expect(await value('synchronous')).toBe(2);
@@ -60,6 +65,8 @@ describe('migrations', () => {
   });
 
   it.each(files)('%s imports nothing of the program', (file) => {
-    expect(readFileSync(path.join('db/migrations', file), 'utf8')).not.toMatch(/\bimport\b(?!\()[^*]*\bfrom\b/);
+    expect(readFileSync(path.join('db/migrations', file), 'utf8')).not.toMatch(
+      /\bimport\b(?!\()[^*]*\bfrom\b/,
+    );
   });
 });

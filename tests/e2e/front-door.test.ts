@@ -21,14 +21,28 @@ let number: string;
 const cookies: Record<string, string> = { nobody: '' };
 
 /** Sends a path exactly as written: fetch would tidy it up first. */
-function send(path: string, options: { as?: string; method?: string; headers?: Record<string, string>; body?: string } = {}): Promise<Answer> {
+function send(
+  path: string,
+  options: { as?: string; method?: string; headers?: Record<string, string>; body?: string } = {},
+): Promise<Answer> {
   const { as = 'nobody', method = 'GET', headers = {}, body } = options;
   return new Promise((resolve, reject) => {
-    const sent = request({ host: '127.0.0.1', port: new URL(site.base).port, path, method, headers: { host: new URL(site.base).host, cookie: cookies[as], ...headers } }, (response) => {
-      let text = '';
-      response.setEncoding('utf8').on('data', (part) => (text += part));
-      response.on('end', () => resolve({ status: response.statusCode ?? 0, headers: response.headers, text }));
-    });
+    const sent = request(
+      {
+        host: '127.0.0.1',
+        port: new URL(site.base).port,
+        path,
+        method,
+        headers: { host: new URL(site.base).host, cookie: cookies[as], ...headers },
+      },
+      (response) => {
+        let text = '';
+        response.setEncoding('utf8').on('data', (part) => (text += part));
+        response.on('end', () =>
+          resolve({ status: response.statusCode ?? 0, headers: response.headers, text }),
+        );
+      },
+    );
     sent.on('error', reject).end(body);
   });
 }
@@ -37,16 +51,31 @@ async function signIn(name: string, email: string, password: string): Promise<Ap
   const client = new ApiClient(site.base);
   await client.signIn(email, password);
   const { headers } = await signInByHand(email, password);
-  const session = [headers['set-cookie']].flat().find((cookie) => cookie?.startsWith('authjs.session-token')) ?? '';
+  const session =
+    [headers['set-cookie']].flat().find((cookie) => cookie?.startsWith('authjs.session-token')) ?? '';
   cookies[name] = session.split(';')[0];
   return client;
 }
 
 async function signInByHand(email: string, password: string, address = '127.0.0.1'): Promise<Answer> {
   const csrf = await send('/api/auth/csrf');
-  const cookie = [csrf.headers['set-cookie']].flat().map((line) => line?.split(';')[0]).join('; ');
-  const body = new URLSearchParams({ csrfToken: JSON.parse(csrf.text).csrfToken, email, password, callbackUrl: site.base }).toString();
-  const headers = { cookie, origin: site.base, 'content-type': 'application/x-www-form-urlencoded', 'x-auth-return-redirect': '1', 'x-forwarded-for': address };
+  const cookie = [csrf.headers['set-cookie']]
+    .flat()
+    .map((line) => line?.split(';')[0])
+    .join('; ');
+  const body = new URLSearchParams({
+    csrfToken: JSON.parse(csrf.text).csrfToken,
+    email,
+    password,
+    callbackUrl: site.base,
+  }).toString();
+  const headers = {
+    cookie,
+    origin: site.base,
+    'content-type': 'application/x-www-form-urlencoded',
+    'x-auth-return-redirect': '1',
+    'x-forwarded-for': address,
+  };
   return send('/api/auth/callback/credentials', { method: 'POST', headers, body });
 }
 
@@ -91,7 +120,14 @@ const forms = (path: string): string[] => {
 };
 
 describe('another customer’s order', () => {
-  const parts = ['', '/progress', '/artwork/1/original', '/artwork/1/picture', '/preparations/1', '/preparations/1/pictures/burned'];
+  const parts = [
+    '',
+    '/progress',
+    '/artwork/1/original',
+    '/artwork/1/picture',
+    '/preparations/1',
+    '/preparations/1/pictures/burned',
+  ];
 
   it.each(parts)('is hidden in every form of /api/orders/:number%s', async (part) => {
     for (const form of forms(`/api/orders/${number}${part}`)) {
@@ -114,7 +150,17 @@ describe('another customer’s order', () => {
 });
 
 describe('what belongs to the staff', () => {
-  it.each(['/api/people', '/api/machines', '/api/record', '/people', '/machines', '/stocks', '/record', '/queue', '/today'])('is closed to a customer in every form of %s', async (path) => {
+  it.each([
+    '/api/people',
+    '/api/machines',
+    '/api/record',
+    '/people',
+    '/machines',
+    '/stocks',
+    '/record',
+    '/queue',
+    '/today',
+  ])('is closed to a customer in every form of %s', async (path) => {
     for (const form of forms(path)) {
       for (const as of ['customer', 'nobody']) {
         const answer = await send(form, { as });
@@ -129,7 +175,8 @@ describe('what belongs to the staff', () => {
 describe('a change', () => {
   const body = JSON.stringify({ name: 'Changed from elsewhere' });
   const json = { 'content-type': 'application/json' };
-  const change = (headers: Record<string, string>) => send('/api/account', { as: 'customer', method: 'PATCH', headers, body });
+  const change = (headers: Record<string, string>) =>
+    send('/api/account', { as: 'customer', method: 'PATCH', headers, body });
 
   it('is taken from our own pages', async () => {
     expect((await change({ ...json, origin: site.base, 'sec-fetch-site': 'same-origin' })).status).toBe(200);
@@ -154,18 +201,27 @@ describe('a change', () => {
 it('the header that names another address is not believed', async () => {
   const urls: string[] = [];
   for (let index = 0; index < 11; index += 1) {
-    urls.push(JSON.parse((await signInByHand('victim@shop.example', 'wrong-password', `203.0.113.${index}`)).text).url);
+    urls.push(
+      JSON.parse((await signInByHand('victim@shop.example', 'wrong-password', `203.0.113.${index}`)).text)
+        .url,
+    );
   }
   expect(urls.at(-1)).toContain('code=too-many');
 });
 
 describe('every answer', () => {
-  it.each(['/', '/sign-in', '/health', '/api/account', '/api/openapi.json', '/nowhere'])('of %s carries the security headers', async (path) => {
-    const { headers } = await send(path);
-    expect(headers).toMatchObject({ 'x-content-type-options': 'nosniff', 'referrer-policy': 'same-origin' });
-    const policy = String(headers['content-security-policy']);
-    expect(policy).toContain("default-src 'none'");
-    expect(policy).not.toMatch(/script-src[^;]*unsafe/);
-    expect(headers['x-powered-by']).toBeUndefined();
-  });
+  it.each(['/', '/sign-in', '/health', '/api/account', '/api/openapi.json', '/nowhere'])(
+    'of %s carries the security headers',
+    async (path) => {
+      const { headers } = await send(path);
+      expect(headers).toMatchObject({
+        'x-content-type-options': 'nosniff',
+        'referrer-policy': 'same-origin',
+      });
+      const policy = String(headers['content-security-policy']);
+      expect(policy).toContain("default-src 'none'");
+      expect(policy).not.toMatch(/script-src[^;]*unsafe/);
+      expect(headers['x-powered-by']).toBeUndefined();
+    },
+  );
 });

@@ -56,7 +56,7 @@ async function order(page: Page, story: Story): Promise<string> {
   await page.getByText('I have the right to have it engraved').click();
   await expectAccessible(page);
   await press(page, 'Submit order');
-  await page.waitForURL(/\/orders\/U-\d+$/);
+  await page.waitForURL(/\/orders\/U-\d+\b/, { timeout: 60_000 });
   await page.getByText('Submitted').first().waitFor();
   return new URL(page.url()).pathname.split('/').at(-1) ?? '';
 }
@@ -65,6 +65,12 @@ async function order(page: Page, story: Story): Promise<string> {
 async function prepareAndSendProof(page: Page, number: string): Promise<void> {
   await page.goto(`/queue/${number}`);
   await press(page, 'Take this order');
+  await press(page, 'power and speed not yet typed');
+  const figures = page.getByRole('dialog');
+  await fillLength(figures, 'Power in %', '40');
+  await figures.getByLabel(/^Speed in/).fill('90');
+  await page.keyboard.press('Tab');
+  await page.keyboard.press('Escape');
   await page.getByRole('button', { name: /^Prepare/ }).click();
   await page.getByText('Files for the machine').waitFor({ timeout: 120_000 });
   await expectAccessible(page);

@@ -305,6 +305,29 @@ describe('treatments', () => {
     const middle = rows[Math.floor(rows.length / 2)];
     expect(middle).toContain('#');
   });
+
+  test('what is transparent is not engraved, whichever way the stock turns', async () => {
+    const dark = {
+      name: 'slate',
+      direction: 'lightens',
+      groundLstar: 30,
+      markLstar: 70,
+      groundColour: '#444444',
+      markColour: '#bbbbbb',
+    } as const;
+    const rgba = Uint8Array.from({ length: 24 * 16 * 4 }, (_, i) =>
+      i % 4 === 3 ? (Math.floor(i / 4) % 24 < 12 ? 255 : 0) : 255,
+    );
+    const half = await sharp(rgba, { raw: { width: 24, height: 16, channels: 4 } })
+      .png()
+      .toBuffer();
+    const lightened = dots(await prepare(half, { stock: dark, formats: ['png'] }));
+    expect(lightened[40].slice(0, 50)).toBe('#'.repeat(50));
+    expect(lightened[40].slice(70)).toBe('.'.repeat(50));
+    const drawn = dots(await prepare(DRAWING, { stock: dark, formats: ['png'] }));
+    expect(share(drawn)).toBe(0);
+    expect(share(dots(await prepare(half, { formats: ['png'] })))).toBe(0);
+  });
 });
 
 describe('dose and time', () => {

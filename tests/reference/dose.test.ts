@@ -10,7 +10,8 @@ referenceCheck(
   {
     what: 'dose of eight beech patches, power ÷ (speed × pitch)',
     basis: 'published',
-    source: 'Acta Facultatis Xylologiae Zvolen 61(1), 2019, table 1 (published_dose_check.csv); the row at 18 mm/s is off by 2 % in print',
+    source:
+      'Acta Facultatis Xylologiae Zvolen 61(1), 2019, table 1 (published_dose_check.csv); the row at 18 mm/s is off by 2 % in print',
     within: '0.6 %, one row 2.1 %',
   },
   () => {

@@ -44,28 +44,43 @@ describe('registering', () => {
     const email = freshEmail();
     expect(await jsonOf(await call(register, { body: fields(email) }))).toEqual({ ok: true });
     const person = await row(email);
-    expect(person).toMatchObject({ name: 'Mira Oster', role: 'customer', confirmed_at: null, disabled_at: null });
+    expect(person).toMatchObject({
+      name: 'Mira Oster',
+      role: 'customer',
+      confirmed_at: null,
+      disabled_at: null,
+    });
     expect(await passwords.passwordMatches('rye-and-ember', person.password_hash ?? '')).toBe(true);
-    expect((await mailsTo(email)).map(({ subject }) => subject)).toEqual(['Confirm your address for Quillfold Engraving']);
-    expect((await recordOf(database(), `person ${person.id}`)).map(({ event }) => event)).toEqual(['register']);
+    expect((await mailsTo(email)).map(({ subject }) => subject)).toEqual([
+      'Confirm your address for Quillfold Engraving',
+    ]);
+    expect((await recordOf(database(), `person ${person.id}`)).map(({ event }) => event)).toEqual([
+      'register',
+    ]);
   });
 
   it('keeps no token that could be read out of the database', async () => {
     const email = freshEmail();
     await call(register, { body: fields(email) });
     const token = await mailedToken(email);
-    for (const table of ['tokens', 'mails', 'people', 'record']) expect(JSON.stringify(await database()(table))).not.toContain(token);
+    for (const table of ['tokens', 'mails', 'people', 'record'])
+      expect(JSON.stringify(await database()(table))).not.toContain(token);
   });
 
   it('reveals nothing about a known address: same answer, nothing changed, its owner told', async () => {
     const email = freshEmail();
     const first = await call(register, { body: fields(email) });
     const before = await row(email);
-    const second = await call(register, { body: { name: 'Nosy Neighbour', email: email.toUpperCase(), password: 'another-password' } });
+    const second = await call(register, {
+      body: { name: 'Nosy Neighbour', email: email.toUpperCase(), password: 'another-password' },
+    });
     expect([second.status, await second.text()]).toEqual([first.status, await first.text()]);
     expect(await row(email)).toEqual(before);
     const mails = await mailsTo(email);
-    expect(mails.map(({ subject }) => subject)).toEqual(['You already have an account at Quillfold Engraving', 'Confirm your address for Quillfold Engraving']);
+    expect(mails.map(({ subject }) => subject)).toEqual([
+      'You already have an account at Quillfold Engraving',
+      'Confirm your address for Quillfold Engraving',
+    ]);
     expect(mails[0].text).not.toContain('Nosy');
     expect(mails[0].text).not.toContain('token=');
   });
@@ -113,7 +128,9 @@ describe('confirming', () => {
   it('works for seven days', async () => {
     const token = await mailedToken(email);
     expect((await later(7 * 24 * HOUR_MS + 1000, () => call(confirm, { body: { token } }))).status).toBe(422);
-    expect((await later(7 * 24 * HOUR_MS - 60_000, () => call(confirm, { body: { token } }))).status).toBe(200);
+    expect((await later(7 * 24 * HOUR_MS - 60_000, () => call(confirm, { body: { token } }))).status).toBe(
+      200,
+    );
   });
 
   it('is asked for again with a new link, and the old one stops working', async () => {
@@ -142,7 +159,11 @@ describe('a forgotten password', () => {
     const known = await addPerson('customer');
     const disabled = await addPerson('customer');
     await database()('people').where({ id: disabled.id }).update({ disabled_at: new Date().toISOString() });
-    const answers = await Promise.all([known.email, disabled.email, freshEmail()].map(async (email) => (await call(forgotten, { body: { email } })).text()));
+    const answers = await Promise.all(
+      [known.email, disabled.email, freshEmail()].map(async (email) =>
+        (await call(forgotten, { body: { email } })).text(),
+      ),
+    );
     expect(new Set(answers)).toEqual(new Set(['{"ok":true}']));
     expect(await mailsTo(known.email)).toHaveLength(1);
     expect(await mailsTo(disabled.email)).toHaveLength(0);
@@ -150,10 +171,19 @@ describe('a forgotten password', () => {
 
   it('is set anew once, within an hour, confirms the address and ends every session', async () => {
     const person = await addPerson('customer', { confirmed: false });
-    await database()('sessions').insert({ id: 's-of-reset', person_id: person.id, token_version: 1, created_at: '2026-01-01T00:00:00Z', expires_at: '2099-01-01T00:00:00Z' });
+    await database()('sessions').insert({
+      id: 's-of-reset',
+      person_id: person.id,
+      token_version: 1,
+      created_at: '2026-01-01T00:00:00Z',
+      expires_at: '2099-01-01T00:00:00Z',
+    });
     await call(forgotten, { body: { email: person.email } });
     const token = await mailedToken(person.email);
-    expect((await later(HOUR_MS + 1000, () => call(reset, { body: { token, password: 'a-new-password' } }))).status).toBe(422);
+    expect(
+      (await later(HOUR_MS + 1000, () => call(reset, { body: { token, password: 'a-new-password' } })))
+        .status,
+    ).toBe(422);
     expect((await call(reset, { body: { token, password: 'short' } })).status).toBe(422);
     expect((await call(reset, { body: { token, password: 'a-new-password' } })).status).toBe(200);
     expect((await call(reset, { body: { token, password: 'one-more-password' } })).status).toBe(422);
@@ -168,7 +198,9 @@ describe('a forgotten password', () => {
     const person = await addPerson('customer');
     await call(forgotten, { body: { email: person.email } });
     const token = await mailedToken(person.email);
-    const both = await Promise.all(['first-password', 'second-password'].map((password) => call(reset, { body: { token, password } })));
+    const both = await Promise.all(
+      ['first-password', 'second-password'].map((password) => call(reset, { body: { token, password } })),
+    );
     expect(both.map(({ status }) => status).sort()).toEqual([200, 422]);
   });
 
@@ -186,25 +218,37 @@ describe('the own account', () => {
   it('is null for a stranger and the person for whoever is signed in', async () => {
     expect(await jsonOf(await call(readAccount))).toEqual({ person: null });
     const person = await addPerson('designer');
-    expect(await jsonOf(await call(readAccount, { person }))).toEqual({ person: { ...person, disabled: false } });
+    expect(await jsonOf(await call(readAccount, { person }))).toEqual({
+      person: { ...person, disabled: false },
+    });
   });
 
   it('changes its name, with a line in the record', async () => {
     const person = await addPerson('customer', { name: 'Mira' });
     await jsonOf(await call(changeAccount, { method: 'PATCH', body: { name: 'Mira Oster' }, person }));
     expect((await row(person.email)).name).toBe('Mira Oster');
-    expect((await recordOf(database(), `person ${person.id}`)).map(({ words }) => words)).toEqual(['Mira is now Mira Oster']);
+    expect((await recordOf(database(), `person ${person.id}`)).map(({ words }) => words)).toEqual([
+      'Mira is now Mira Oster',
+    ]);
   });
 
   it('changes its password only with the present one, and ends every session but this one', async () => {
     const person = await addPerson('customer', { password: 'rye-and-ember' });
-    const [here, elsewhere] = [await signIn(person.email, 'rye-and-ember', '192.0.2.1'), await signIn(person.email, 'rye-and-ember', '192.0.2.9')];
+    const [here, elsewhere] = [
+      await signIn(person.email, 'rye-and-ember', '192.0.2.1'),
+      await signIn(person.email, 'rye-and-ember', '192.0.2.9'),
+    ];
     if (!here || !elsewhere) throw new Error('expected two sessions');
-    const change = (body: object) => call(changeAccount, { method: 'PATCH', body, person, sessionId: here.sessionId });
+    const change = (body: object) =>
+      call(changeAccount, { method: 'PATCH', body, person, sessionId: here.sessionId });
     for (const currentPassword of [undefined, '', 'wrong-password']) {
-      expect(await jsonOf(await change({ currentPassword, newPassword: 'a-new-password' }), 422)).toMatchObject({ code: 'wrong-password' });
+      expect(
+        await jsonOf(await change({ currentPassword, newPassword: 'a-new-password' }), 422),
+      ).toMatchObject({ code: 'wrong-password' });
     }
-    expect((await change({ currentPassword: 'rye-and-ember', newPassword: 'a-new-password' })).status).toBe(200);
+    expect((await change({ currentPassword: 'rye-and-ember', newPassword: 'a-new-password' })).status).toBe(
+      200,
+    );
     const after = await row(person.email);
     expect(after.token_version).toBe(2);
     expect([await findSessionPerson(here), await findSessionPerson(elsewhere)]).toEqual([person, null]);

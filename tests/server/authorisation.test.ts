@@ -79,7 +79,8 @@ const pathOf = (file: string): string =>
     .replace(/\[(\w+)\]/g, ':$1');
 const handlers = new Map<string, APIRoute>();
 for (const [file, load] of Object.entries(files)) {
-  for (const [name, handler] of Object.entries(await load())) if (METHODS.includes(name)) handlers.set(`${name} ${pathOf(file)}`, handler);
+  for (const [name, handler] of Object.entries(await load()))
+    if (METHODS.includes(name)) handlers.set(`${name} ${pathOf(file)}`, handler);
 }
 
 let shop: Shop;
@@ -87,19 +88,42 @@ let real: Record<string, string>;
 let people: Record<Who, Person | null>;
 beforeAll(async () => {
   ({ shop, real } = await openAuthorisationShop());
-  people = { stranger: null, customer: shop.customer, designer: shop.designer, operator: shop.operator, admin: shop.admin };
+  people = {
+    stranger: null,
+    customer: shop.customer,
+    designer: shop.designer,
+    operator: shop.operator,
+    admin: shop.admin,
+  };
 });
 afterAll(closeShop);
 beforeEach(forgetAttempts);
 
-function ask(key: RouteKey, person: Person | null, params: Record<string, string>, options: CallOptions = {}): Promise<Response> {
+function ask(
+  key: RouteKey,
+  person: Person | null,
+  params: Record<string, string>,
+  options: CallOptions = {},
+): Promise<Response> {
   const [method, path] = key.split(' ');
   const handler = handlers.get(key);
   if (!handler) throw new Error(`no file answers ${key}`);
   const names = [...path.matchAll(/:(\w+)/g)].map(([, name]) => name);
   const own = Object.fromEntries(names.map((name) => [name, params[name] ?? '999999']));
-  const upload = key === 'POST /api/orders/:number/artwork' ? { raw: fileForm('x') } : method === 'GET' ? {} : { body: {} };
-  return call(handler, { method, path: path.replace(/:(\w+)/g, (_, name: string) => own[name]), params: own, person, ...upload, ...options });
+  const upload =
+    key === 'POST /api/orders/:number/artwork'
+      ? { raw: fileForm('x') }
+      : method === 'GET'
+        ? {}
+        : { body: {} };
+  return call(handler, {
+    method,
+    path: path.replace(/:(\w+)/g, (_, name: string) => own[name]),
+    params: own,
+    person,
+    ...upload,
+    ...options,
+  });
 }
 /** Nothing of this number exists, so that a call that is let through changes nothing. */
 const NOWHERE = { number: 'U-99999999' };
@@ -117,13 +141,17 @@ describe('the list', () => {
 describe.each(KEYS)('%s', (key) => {
   it.each(WHO)('asked by a %s', async (who) => {
     const response = await ask(key, people[who], NOWHERE);
-    const { code } = response.headers.get('content-type')?.includes('json') ? await response.json() : { code: undefined };
+    const { code } = response.headers.get('content-type')?.includes('json')
+      ? await response.json()
+      : { code: undefined };
     await response.body?.cancel().catch(() => undefined);
     if (TABLE[key].includes(who)) {
       expect(['not-signed-in', 'not-allowed']).not.toContain(code);
       expect(response.status).not.toBe(500);
     } else {
-      expect([response.status, code]).toEqual(who === 'stranger' ? [401, 'not-signed-in'] : [403, 'not-allowed']);
+      expect([response.status, code]).toEqual(
+        who === 'stranger' ? [401, 'not-signed-in'] : [403, 'not-allowed'],
+      );
     }
   });
 });
@@ -152,8 +180,17 @@ describe('another customer’s order', () => {
 
   it('is in no list and found by no search', async () => {
     const handler = handlers.get('GET /api/orders');
-    for (const query of ['', `q=${real.number}`, 'q=Bakery', 'state=proof-sent', `machineId=${shop.machineId}`]) {
-      const response = await call(handler as APIRoute, { path: `/api/orders?${query}`, person: shop.stranger });
+    for (const query of [
+      '',
+      `q=${real.number}`,
+      'q=Bakery',
+      'state=proof-sent',
+      `machineId=${shop.machineId}`,
+    ]) {
+      const response = await call(handler as APIRoute, {
+        path: `/api/orders?${query}`,
+        person: shop.stranger,
+      });
       const { rows } = (await response.json()) as { rows: { number: string }[] };
       expect(rows.map(({ number }) => number).filter((number) => number !== real.ownNumber)).toEqual([]);
     }
@@ -170,17 +207,30 @@ describe('another customer’s order', () => {
   ])('stays hidden behind %s: the address decides nothing', async (_, form) => {
     const path = form.replace('NUMBER', real.number);
     const handler = handlers.get('GET /api/orders/:number') as APIRoute;
-    expect((await call(handler, { path, params: { number: real.number }, person: shop.stranger })).status).toBe(404);
+    expect(
+      (await call(handler, { path, params: { number: real.number }, person: shop.stranger })).status,
+    ).toBe(404);
     expect((await call(handler, { path, params: { number: real.number }, person: null })).status).toBe(401);
   });
 
-  it.each(['u-1001', ' U-1001', 'U-1001 ', 'U-1001%20', 'U-01001', 'U-1001/', '..%2FU-1001', "U-1001' or 1=1 --"])('has no second number: %s', async (written) => {
+  it.each([
+    'u-1001',
+    ' U-1001',
+    'U-1001 ',
+    'U-1001%20',
+    'U-01001',
+    'U-1001/',
+    '..%2FU-1001',
+    "U-1001' or 1=1 --",
+  ])('has no second number: %s', async (written) => {
     const number = written.replace('1001', real.number.slice(2));
     expect((await ask('GET /api/orders/:number', shop.customer, { number })).status).toBe(404);
   });
 
   it('lends its parts to no other order of the one who asks', async () => {
-    for (const key of OF_ORDERS.filter((key) => /artwork\/|preparations\//.test(key) && key.startsWith('GET'))) {
+    for (const key of OF_ORDERS.filter(
+      (key) => /artwork\/|preparations\//.test(key) && key.startsWith('GET'),
+    )) {
       expect((await ask(key, shop.stranger, { ...real, number: real.ownNumber })).status, key).toBe(404);
     }
   });

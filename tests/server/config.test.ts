@@ -12,13 +12,23 @@ const PRODUCTION = {
 describe('readConfig', () => {
   it('needs nothing in development', () => {
     const config = readConfig({});
-    expect(config).toMatchObject({ port: 4380, host: '127.0.0.1', isProduction: false, isDemo: true, smtpUrl: null, adminEmail: null });
+    expect(config).toMatchObject({
+      port: 4380,
+      host: '127.0.0.1',
+      isProduction: false,
+      isDemo: true,
+      smtpUrl: null,
+      adminEmail: null,
+    });
     expect(config.publicAddress.origin).toBe('http://localhost:4380');
     expect(config.databaseFile).toBe(`${config.dataDir}/umberline.sqlite`);
   });
 
   it('takes an empty variable for an absent one', () => {
-    expect(readConfig({ PORT: '', PUBLIC_ADDRESS: '', NODE_ENV: '', SMTP_URL: '', HOST: '' })).toMatchObject({ port: 4380, isProduction: false });
+    expect(readConfig({ PORT: '', PUBLIC_ADDRESS: '', NODE_ENV: '', SMTP_URL: '', HOST: '' })).toMatchObject({
+      port: 4380,
+      isProduction: false,
+    });
   });
 
   it('follows the port in its own address', () => {
@@ -64,6 +74,8 @@ describe('readConfig', () => {
   });
 
   it('names every fault at once', () => {
-    expect(() => readConfig({ NODE_ENV: 'production' })).toThrow(/PUBLIC_ADDRESS.*SESSION_SECRET.*SMTP_URL.*MAIL_FROM/);
+    expect(() => readConfig({ NODE_ENV: 'production' })).toThrow(
+      /PUBLIC_ADDRESS.*SESSION_SECRET.*SMTP_URL.*MAIL_FROM/,
+    );
   });
 });

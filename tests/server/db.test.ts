@@ -9,7 +9,8 @@ beforeEach(async () => {
   await database().raw("insert into counters values ('hits', 0) on conflict (name) do update set value = 0");
 });
 
-const hits = async (): Promise<number> => (await database()('counters').where({ name: 'hits' }).first('value')).value;
+const hits = async (): Promise<number> =>
+  (await database()('counters').where({ name: 'hits' }).first('value')).value;
 
 describe('withWrite', () => {
   it('keeps what it did, or nothing of it', async () => {
@@ -41,7 +42,9 @@ describe('withWrite', () => {
     await withWrite(async () => {
       expect(() => database()).toThrow('expected the transaction inside withWrite');
     });
-    await expect(withWrite(() => withWrite(async () => 1))).rejects.toThrow('expected the transaction inside withWrite');
+    await expect(withWrite(() => withWrite(async () => 1))).rejects.toThrow(
+      'expected the transaction inside withWrite',
+    );
   });
 
   it('lets read-then-write changes of many at once lose nothing', async () => {

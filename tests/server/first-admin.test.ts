@@ -12,14 +12,21 @@ import { addPerson } from '../setup/people';
 const EMAIL = 'odile@quillfold.example';
 const production = (adminEmail: string | null) => {
   const real = settings.config();
-  vi.spyOn(settings, 'config').mockReturnValue({ ...real, isProduction: true, isDemo: false, adminEmail, publicAddress: new URL('https://shop.example') });
+  vi.spyOn(settings, 'config').mockReturnValue({
+    ...real,
+    isProduction: true,
+    isDemo: false,
+    adminEmail,
+    publicAddress: new URL('https://shop.example'),
+  });
 };
 async function printed(): Promise<string> {
   const lines: string[] = [];
   await introduceFirstAdmin((line) => lines.push(line));
   return lines.join('\n');
 }
-const tokenIn = (lines: string): string => /https:\/\/shop\.example\/invitation\?token=([\w-]+)/.exec(lines)?.[1] ?? '';
+const tokenIn = (lines: string): string =>
+  /https:\/\/shop\.example\/invitation\?token=([\w-]+)/.exec(lines)?.[1] ?? '';
 
 beforeEach(async () => {
   await database()('tokens').delete();
@@ -51,7 +58,9 @@ describe('introduceFirstAdmin', () => {
     expect(await personByEmail(database(), EMAIL)).toMatchObject({ role: 'admin', name: 'Odile Marsh' });
     expect((await call(acceptInvitation, { body, headers })).status).toBe(422);
     expect(await printed()).toBe('');
-    expect((await database()('record').where({ event: 'invite' }).first()).words).toBe(`${EMAIL} as the first admin`);
+    expect((await database()('record').where({ event: 'invite' }).first()).words).toBe(
+      `${EMAIL} as the first admin`,
+    );
   });
 
   it('prints another when the first grew too old unused', async () => {

@@ -21,7 +21,12 @@ describe('health', () => {
   });
 
   it('is 503 without a queue, naming the part', async () => {
-    expect(await jsonOf(await call(GET), 503)).toMatchObject({ ok: false, database: true, storage: true, queue: false });
+    expect(await jsonOf(await call(GET), 503)).toMatchObject({
+      ok: false,
+      database: true,
+      storage: true,
+      queue: false,
+    });
   });
 
   it('is 503 without a database or a storage, and tells nothing of the reason', async () => {
@@ -33,6 +38,12 @@ describe('health', () => {
     const response = await call(GET);
     expect(response.status).toBe(503);
     const text = await response.text();
-    expect(JSON.parse(text)).toEqual({ ok: false, database: false, storage: false, queue: true, freeBytes: 0 });
+    expect(JSON.parse(text)).toEqual({
+      ok: false,
+      database: false,
+      storage: false,
+      queue: true,
+      freeBytes: 0,
+    });
   });
 });

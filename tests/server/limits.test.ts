@@ -12,13 +12,19 @@ const attempts = async (times: number, address: (index: number) => string, accou
 describe('countAttempt', () => {
   it('stops an account however many addresses are used, without regard to capitals', async () => {
     await attempts(ALLOWANCES['sign-in'].perAccount, (index) => `192.0.2.${index}`, 'Mira@shop.example');
-    await expect(countAttempt('sign-in', '192.0.2.200', ' mira@SHOP.example')).rejects.toMatchObject({ code: 'too-many', status: 429 });
+    await expect(countAttempt('sign-in', '192.0.2.200', ' mira@SHOP.example')).rejects.toMatchObject({
+      code: 'too-many',
+      status: 429,
+    });
     await countAttempt('sign-in', '192.0.2.200', 'other@shop.example');
   });
 
   it('stops an address however many accounts are tried', async () => {
-    for (let index = 0; index < ALLOWANCES['sign-in'].perAddress; index += 1) await countAttempt('sign-in', '192.0.2.1', `p${index}@shop.example`);
-    await expect(countAttempt('sign-in', '192.0.2.1', 'fresh@shop.example')).rejects.toMatchObject({ code: 'too-many' });
+    for (let index = 0; index < ALLOWANCES['sign-in'].perAddress; index += 1)
+      await countAttempt('sign-in', '192.0.2.1', `p${index}@shop.example`);
+    await expect(countAttempt('sign-in', '192.0.2.1', 'fresh@shop.example')).rejects.toMatchObject({
+      code: 'too-many',
+    });
     await countAttempt('sign-in', '192.0.2.2', 'fresh@shop.example');
   });
 
@@ -29,7 +35,9 @@ describe('countAttempt', () => {
       const refused = await countAttempt('sign-in', '192.0.2.1', 'mira@shop.example').catch((error) => error);
       expect(refused.problem.action).toBe('Wait 15 minutes and try again.');
       vi.advanceTimersByTime(899_000);
-      await expect(countAttempt('sign-in', '192.0.2.1', 'mira@shop.example')).rejects.toMatchObject({ code: 'too-many' });
+      await expect(countAttempt('sign-in', '192.0.2.1', 'mira@shop.example')).rejects.toMatchObject({
+        code: 'too-many',
+      });
       vi.advanceTimersByTime(2_000);
       await countAttempt('sign-in', '192.0.2.1', 'mira@shop.example');
     } finally {
@@ -53,6 +61,8 @@ describe('forgive', () => {
 });
 
 it('limits every route that anyone may change something by', () => {
-  const open = ROUTES.filter((route) => route.access === 'anyone' && route.method !== 'GET').map((route) => `${route.method} ${route.path}`);
+  const open = ROUTES.filter((route) => route.access === 'anyone' && route.method !== 'GET').map(
+    (route) => `${route.method} ${route.path}`,
+  );
   expect(open.filter((key) => !isLimited(key))).toEqual([]);
 });

@@ -11,9 +11,14 @@ import { addPerson } from '../setup/people';
 vi.mock('auth-astro/server', () => ({ getSession: vi.fn() }));
 vi.mock('@/start-up', () => ({ startUp: () => Promise.resolve() }));
 
-const ask = async (headers: Record<string, string> = {}): Promise<{ locals: App.Locals; response: Response }> => {
+const ask = async (
+  headers: Record<string, string> = {},
+): Promise<{ locals: App.Locals; response: Response }> => {
   const locals = {} as App.Locals;
-  const context = { request: new Request('http://localhost:4380/', { headers }), locals } as unknown as APIContext;
+  const context = {
+    request: new Request('http://localhost:4380/', { headers }),
+    locals,
+  } as unknown as APIContext;
   const next = () => Promise.resolve(new Response('page', { headers: { 'content-type': 'text/html' } }));
   return { locals, response: (await onRequest(context, next)) as Response };
 };

@@ -23,7 +23,8 @@ beforeEach(async () => {
   odile = await addPerson('admin', { name: 'Odile Marsh' });
 });
 
-const change = (person: Person, id: number, body: object) => call(changePerson, { method: 'PATCH', body, params: { id: String(id) }, person });
+const change = (person: Person, id: number, body: object) =>
+  call(changePerson, { method: 'PATCH', body, params: { id: String(id) }, person });
 const standing = async (id: number) => {
   const row = await personById(database(), id);
   return [row?.role, row?.disabled_at === null ? 'enabled' : 'disabled'];
@@ -58,7 +59,10 @@ describe('the last admin', () => {
 
   it('is left when two admins demote each other at once', async () => {
     const second = await addPerson('admin');
-    const both = await Promise.all([change(odile, second.id, { role: 'designer' }), change(second, odile.id, { role: 'designer' })]);
+    const both = await Promise.all([
+      change(odile, second.id, { role: 'designer' }),
+      change(second, odile.id, { role: 'designer' }),
+    ]);
     expect(both.map(({ status }) => status).sort()).toEqual([200, 409]);
   });
 
@@ -73,7 +77,12 @@ describe('changing a person', () => {
     const { person } = await jsonOf(await change(odile, runa.id, { role: 'designer', disabled: true }));
     expect(person).toMatchObject({ id: runa.id, role: 'designer', disabled: true });
     const [entry] = await recordOf(database(), `person ${runa.id}`);
-    expect(entry).toMatchObject({ by: 'Odile Marsh', person_id: odile.id, event: 'change-person', words: 'Runa: now designer, disabled' });
+    expect(entry).toMatchObject({
+      by: 'Odile Marsh',
+      person_id: odile.id,
+      event: 'change-person',
+      words: 'Runa: now designer, disabled',
+    });
   });
 
   it('answers 404 where there is nobody', async () => {
@@ -83,13 +92,16 @@ describe('changing a person', () => {
 
 describe('inviting', () => {
   const send = (body: object) => call(invite, { body, person: odile });
-  const accept = (token: string, name = 'Runa Vester') => call(acceptInvitation, { body: { token, name, password: 'line-after-line' } });
+  const accept = (token: string, name = 'Runa Vester') =>
+    call(acceptInvitation, { body: { token, name, password: 'line-after-line' } });
 
   it('mails a link by which name and password are chosen, once', async () => {
     const email = 'runa@quillfold.example';
     expect((await send({ email, role: 'operator' })).status).toBe(200);
     const token = await mailedToken(email);
-    expect((await mailsTo(email))[0].text).toContain('Odile Marsh invites you to work with Quillfold Engraving as operator.');
+    expect((await mailsTo(email))[0].text).toContain(
+      'Odile Marsh invites you to work with Quillfold Engraving as operator.',
+    );
     expect((await accept(token)).status).toBe(200);
     expect(await personByEmail(database(), email)).toMatchObject({ name: 'Runa Vester', role: 'operator' });
     expect((await personByEmail(database(), email))?.confirmed_at).not.toBeNull();
@@ -109,8 +121,12 @@ describe('inviting', () => {
 
   it('is not for customers, nor for an address that is known', async () => {
     const known = await addPerson('customer');
-    expect(await jsonOf(await send({ email: 'new@shop.example', role: 'customer' }), 422)).toMatchObject({ code: 'customers-register' });
-    expect(await jsonOf(await send({ email: known.email, role: 'designer' }), 409)).toMatchObject({ code: 'address-known' });
+    expect(await jsonOf(await send({ email: 'new@shop.example', role: 'customer' }), 422)).toMatchObject({
+      code: 'customers-register',
+    });
+    expect(await jsonOf(await send({ email: known.email, role: 'designer' }), 409)).toMatchObject({
+      code: 'address-known',
+    });
     expect((await personByEmail(database(), known.email))?.role).toBe('customer');
   });
 
@@ -131,9 +147,16 @@ describe('a walk-in customer', () => {
   it('is entered once, without a password', async () => {
     const body = { name: 'Ferdinand Loy', email: 'loy@counter.example' };
     const first = await jsonOf<{ person: { id: number } }>(await enter(body));
-    const second = await jsonOf<{ person: { id: number } }>(await enter({ name: 'F. Loy', email: 'LOY@counter.example' }));
+    const second = await jsonOf<{ person: { id: number } }>(
+      await enter({ name: 'F. Loy', email: 'LOY@counter.example' }),
+    );
     expect(second).toEqual(first);
-    expect(await personById(database(), first.person.id)).toMatchObject({ name: 'Ferdinand Loy', role: 'customer', password_hash: null, confirmed_at: null });
+    expect(await personById(database(), first.person.id)).toMatchObject({
+      name: 'Ferdinand Loy',
+      role: 'customer',
+      password_hash: null,
+      confirmed_at: null,
+    });
     expect(await mailsTo(body.email)).toEqual([]);
   });
 
@@ -144,7 +167,11 @@ describe('a walk-in customer', () => {
 
 describe('the list', () => {
   const search = async (query: string) =>
-    (await jsonOf<{ people: { name: string }[] }>(await call(listPeople, { path: `/api/people?${query}`, person: odile }))).people.map(({ name }) => name);
+    (
+      await jsonOf<{ people: { name: string }[] }>(
+        await call(listPeople, { path: `/api/people?${query}`, person: odile }),
+      )
+    ).people.map(({ name }) => name);
 
   it('finds by name, address and role, and takes signs for what they are', async () => {
     await addPerson('customer', { name: 'Ärmel 100 % Wolle', email: 'wolle@list.example' });
@@ -157,6 +184,8 @@ describe('the list', () => {
   });
 
   it('never holds a hash', async () => {
-    expect(await (await call(listPeople, { path: '/api/people', person: odile })).text()).not.toMatch(/scrypt|hash/);
+    expect(await (await call(listPeople, { path: '/api/people', person: odile })).text()).not.toMatch(
+      /scrypt|hash/,
+    );
   });
 });

@@ -15,13 +15,27 @@ interface Page {
   perPage: number;
 }
 let odile: Person;
-const page = async (query: string) => jsonOf<Page>(await call(readRecord, { path: `/api/record?${query}`, person: odile }));
+const page = async (query: string) =>
+  jsonOf<Page>(await call(readRecord, { path: `/api/record?${query}`, person: odile }));
 
 beforeAll(async () => {
   odile = await addPerson('admin', { name: 'Odile Marsh' });
   await withWrite(async (trx) => {
-    for (let index = 1; index <= 60; index += 1) await audit(trx, { by: odile, event: 'take', subject: `U-${1000 + index}`, words: `entry ${index} at 100 %` });
-    await audit(trx, { by: null, event: 'approve', subject: 'U-1001', from: 'proof-sent', to: 'approved', words: 'in person' });
+    for (let index = 1; index <= 60; index += 1)
+      await audit(trx, {
+        by: odile,
+        event: 'take',
+        subject: `U-${1000 + index}`,
+        words: `entry ${index} at 100 %`,
+      });
+    await audit(trx, {
+      by: null,
+      event: 'approve',
+      subject: 'U-1001',
+      from: 'proof-sent',
+      to: 'approved',
+      words: 'in person',
+    });
   });
 });
 
@@ -29,7 +43,12 @@ describe('the record', () => {
   it('is read newest first, fifty a page', async () => {
     const first = await page('');
     expect(first).toMatchObject({ total: 61, page: 1, perPage: 50 });
-    expect(first.entries[0]).toMatchObject({ by: 'Umberline', event: 'approve', subject: 'U-1001', words: 'in person' });
+    expect(first.entries[0]).toMatchObject({
+      by: 'Umberline',
+      event: 'approve',
+      subject: 'U-1001',
+      words: 'in person',
+    });
     expect((await page('page=2')).entries).toHaveLength(11);
     expect((await page('page=3')).entries).toEqual([]);
   });
@@ -51,7 +70,9 @@ describe('the record', () => {
   });
 
   it('can be neither changed nor shortened', async () => {
-    await expect(database()('record').update({ words: 'other' })).rejects.toThrow('the record is only ever added to');
+    await expect(database()('record').update({ words: 'other' })).rejects.toThrow(
+      'the record is only ever added to',
+    );
     await expect(database()('record').delete()).rejects.toThrow('the record is only ever added to');
   });
 

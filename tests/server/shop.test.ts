@@ -9,7 +9,10 @@ import type { Stock } from '@/lib/stock/stock';
 import { GET as listMachines, POST as addMachine } from '@/pages/api/machines';
 import { PATCH as changeMachine } from '@/pages/api/machines/[id]';
 import { POST as addPreset } from '@/pages/api/machines/[id]/spot-presets';
-import { DELETE as removePreset, PATCH as changePreset } from '@/pages/api/machines/[id]/spot-presets/[presetId]';
+import {
+  DELETE as removePreset,
+  PATCH as changePreset,
+} from '@/pages/api/machines/[id]/spot-presets/[presetId]';
 import { GET as listStocks, POST as addStock } from '@/pages/api/stocks';
 import { PATCH as changeStock } from '@/pages/api/stocks/[id]';
 import { GET as readWash, PUT as enterWash } from '@/pages/api/wash';
@@ -30,7 +33,14 @@ const MACHINE: Machine = {
   firing: 'swept',
   scanning: 'two-way',
 };
-const PRESET: SpotPreset = { name: 'Fine', widthMm: 0.07, heightMm: 0.11, shape: 'rectangle', measuredBy: 'burned-line', measuredAtDoseJPerMm2: null };
+const PRESET: SpotPreset = {
+  name: 'Fine',
+  widthMm: 0.07,
+  heightMm: 0.11,
+  shape: 'rectangle',
+  measuredBy: 'burned-line',
+  measuredAtDoseJPerMm2: null,
+};
 const STOCK: Stock = {
   name: 'Maple 5 mm',
   species: 'maple',
@@ -46,7 +56,12 @@ const STOCK: Stock = {
   routes: ['bare-burn'],
   notes: '',
 };
-const WASH = { product: 'Own wash', ratio: '1 part to 10 parts warm water', dryingMinutes: 30, sheetUrl: 'https://shop.example/sheet.pdf' };
+const WASH = {
+  product: 'Own wash',
+  ratio: '1 part to 10 parts warm water',
+  dryingMinutes: 30,
+  sheetUrl: 'https://shop.example/sheet.pdf',
+};
 
 let odile: Person;
 beforeAll(async () => {
@@ -56,13 +71,20 @@ beforeEach(async () => {
   for (const table of ['spot_presets', 'machines', 'stocks', 'shop_washes']) await database()(table).delete();
 });
 
-const send = <T>(route: Parameters<typeof call>[0], options: CallOptions, status = 200) => call(route, { person: odile, ...options }).then((response) => jsonOf<T>(response, status));
-const newMachine = async (fields: Partial<Machine> = {}) => (await send<{ machine: MachineView }>(addMachine, { body: { ...MACHINE, ...fields } })).machine;
-const newStock = async (fields: Partial<Stock> = {}) => (await send<{ stock: StockView }>(addStock, { body: { ...STOCK, ...fields } })).stock;
+const send = <T>(route: Parameters<typeof call>[0], options: CallOptions, status = 200) =>
+  call(route, { person: odile, ...options }).then((response) => jsonOf<T>(response, status));
+const newMachine = async (fields: Partial<Machine> = {}) =>
+  (await send<{ machine: MachineView }>(addMachine, { body: { ...MACHINE, ...fields } })).machine;
+const newStock = async (fields: Partial<Stock> = {}) =>
+  (await send<{ stock: StockView }>(addStock, { body: { ...STOCK, ...fields } })).stock;
 
 describe('machines', () => {
   const patch = (id: number, body: object, status = 200) =>
-    send<{ machine: MachineView; code: string }>(changeMachine, { method: 'PATCH', body, params: { id: String(id) } }, status);
+    send<{ machine: MachineView; code: string }>(
+      changeMachine,
+      { method: 'PATCH', body, params: { id: String(id) } },
+      status,
+    );
 
   it('come back as they were entered', async () => {
     const machine = await newMachine();
@@ -74,7 +96,9 @@ describe('machines', () => {
     const { id } = await newMachine();
     const { machine } = await patch(id, { wattsAtFull: 7.1, powerCurve: [] });
     expect(machine).toMatchObject({ ...MACHINE, wattsAtFull: 7.1, powerCurve: [] });
-    expect((await recordOf(database(), `machine ${id}`)).slice(-2).map(({ event, words }) => [event, words])).toEqual([
+    expect(
+      (await recordOf(database(), `machine ${id}`)).slice(-2).map(({ event, words }) => [event, words]),
+    ).toEqual([
       ['add-machine', 'South bench'],
       ['change-machine', 'South bench: wattsAtFull, powerCurve'],
     ]);
@@ -84,7 +108,9 @@ describe('machines', () => {
     const first = await newMachine({ name: 'A bench' });
     await newMachine({ name: 'B bench' });
     expect((await patch(first.id, { retired: true })).machine.retired).toBe(true);
-    expect((await send<{ machines: MachineView[] }>(listMachines, {})).machines.map(({ name }) => name)).toEqual(['B bench', 'A bench']);
+    expect(
+      (await send<{ machines: MachineView[] }>(listMachines, {})).machines.map(({ name }) => name),
+    ).toEqual(['B bench', 'A bench']);
     expect((await patch(first.id, { retired: false })).machine.retired).toBe(false);
     const events = (await recordOf(database(), `machine ${first.id}`)).map(({ event }) => event);
     expect(events.slice(-2)).toEqual(['retire-machine', 'bring-machine-back']);
@@ -92,7 +118,9 @@ describe('machines', () => {
 
   it('have names of their own', async () => {
     await newMachine();
-    expect(await send(addMachine, { body: { ...MACHINE, name: 'SOUTH BENCH' } }, 409)).toMatchObject({ code: 'name-taken' });
+    expect(await send(addMachine, { body: { ...MACHINE, name: 'SOUTH BENCH' } }, 409)).toMatchObject({
+      code: 'name-taken',
+    });
     const other = await newMachine({ name: 'West bench' });
     expect((await patch(other.id, { name: 'South bench' }, 409)).code).toBe('name-taken');
   });
@@ -114,23 +142,39 @@ describe('machines', () => {
 });
 
 describe('spot presets', () => {
-  const at = (id: number, presetId?: number) => ({ params: { id: String(id), ...(presetId ? { presetId: String(presetId) } : {}) } });
+  const at = (id: number, presetId?: number) => ({
+    params: { id: String(id), ...(presetId ? { presetId: String(presetId) } : {}) },
+  });
 
   it('are added, changed and removed', async () => {
     const { id } = await newMachine();
-    const added = (await send<{ machine: MachineView }>(addPreset, { body: PRESET, ...at(id) })).machine.spotPresets;
+    const added = (await send<{ machine: MachineView }>(addPreset, { body: PRESET, ...at(id) })).machine
+      .spotPresets;
     expect(added).toEqual([{ ...PRESET, id: added[0].id }]);
     const broad = { ...PRESET, name: 'Broad', widthMm: 0.13, measuredAtDoseJPerMm2: 0.6 };
-    const changed = (await send<{ machine: MachineView }>(changePreset, { method: 'PATCH', body: broad, ...at(id, added[0].id) })).machine.spotPresets;
+    const changed = (
+      await send<{ machine: MachineView }>(changePreset, {
+        method: 'PATCH',
+        body: broad,
+        ...at(id, added[0].id),
+      })
+    ).machine.spotPresets;
     expect(changed).toEqual([{ ...broad, id: added[0].id }]);
-    expect((await send<{ machine: MachineView }>(removePreset, { method: 'DELETE', ...at(id, added[0].id) })).machine.spotPresets).toEqual([]);
-    expect((await recordOf(database(), `machine ${id}`)).at(-1)).toMatchObject({ event: 'remove-spot-preset', words: 'Broad: 0.13 x 0.11 mm, rectangle' });
+    expect(
+      (await send<{ machine: MachineView }>(removePreset, { method: 'DELETE', ...at(id, added[0].id) }))
+        .machine.spotPresets,
+    ).toEqual([]);
+    expect((await recordOf(database(), `machine ${id}`)).at(-1)).toMatchObject({
+      event: 'remove-spot-preset',
+      words: 'Broad: 0.13 x 0.11 mm, rectangle',
+    });
   });
 
   it('belong to their machine alone', async () => {
     const one = await newMachine();
     const two = await newMachine({ name: 'Other' });
-    const [{ id }] = (await send<{ machine: MachineView }>(addPreset, { body: PRESET, ...at(one.id) })).machine.spotPresets;
+    const [{ id }] = (await send<{ machine: MachineView }>(addPreset, { body: PRESET, ...at(one.id) }))
+      .machine.spotPresets;
     await send(changePreset, { method: 'PATCH', body: PRESET, ...at(two.id, id) }, 404);
     await send(removePreset, { method: 'DELETE', ...at(two.id, id) }, 404);
     await send(addPreset, { body: PRESET, ...at(two.id) });
@@ -140,11 +184,31 @@ describe('spot presets', () => {
 
   it('stay while an order refers to them', async () => {
     const machine = await newMachine();
-    const [{ id }] = (await send<{ machine: MachineView }>(addPreset, { body: PRESET, ...at(machine.id) })).machine.spotPresets;
+    const [{ id }] = (await send<{ machine: MachineView }>(addPreset, { body: PRESET, ...at(machine.id) }))
+      .machine.spotPresets;
     const at_ = new Date().toISOString();
-    const order = { customer_id: odile.id, opened_by: odile.id, state: 'draft', created_at: at_, updated_at: at_, title: '', quantity: 1, placement: '{}', route: 'bare-burn', use: 'decoration', notes: '', without_proof: 0 };
-    const [orderId] = await database()('orders').insert({ ...order, machine_id: machine.id, spot_preset_id: id });
-    expect(await send(removePreset, { method: 'DELETE', ...at(machine.id, id) }, 409)).toMatchObject({ code: 'preset-in-use' });
+    const order = {
+      customer_id: odile.id,
+      opened_by: odile.id,
+      state: 'draft',
+      created_at: at_,
+      updated_at: at_,
+      title: '',
+      quantity: 1,
+      placement: '{}',
+      route: 'bare-burn',
+      use: 'decoration',
+      notes: '',
+      without_proof: 0,
+    };
+    const [orderId] = await database()('orders').insert({
+      ...order,
+      machine_id: machine.id,
+      spot_preset_id: id,
+    });
+    expect(await send(removePreset, { method: 'DELETE', ...at(machine.id, id) }, 409)).toMatchObject({
+      code: 'preset-in-use',
+    });
     await database()('orders').where({ id: orderId }).delete();
     await send(removePreset, { method: 'DELETE', ...at(machine.id, id) });
   });
@@ -152,13 +216,24 @@ describe('spot presets', () => {
 
 describe('stocks', () => {
   const patch = (id: number, body: object, status = 200) =>
-    send<{ stock: StockView; code: string }>(changeStock, { method: 'PATCH', body, params: { id: String(id) } }, status);
+    send<{ stock: StockView; code: string }>(
+      changeStock,
+      { method: 'PATCH', body, params: { id: String(id) } },
+      status,
+    );
 
   it('come back as they were entered, and change only what is sent', async () => {
     const stock = await newStock();
     expect(stock).toEqual({ ...STOCK, id: stock.id, retired: false });
-    expect((await patch(stock.id, { cautions: ['treated-wood'], forbidden: true })).stock).toEqual({ ...stock, cautions: ['treated-wood'], forbidden: true });
-    expect((await recordOf(database(), `stock ${stock.id}`)).slice(-2).map(({ event }) => event)).toEqual(['add-stock', 'change-stock']);
+    expect((await patch(stock.id, { cautions: ['treated-wood'], forbidden: true })).stock).toEqual({
+      ...stock,
+      cautions: ['treated-wood'],
+      forbidden: true,
+    });
+    expect((await recordOf(database(), `stock ${stock.id}`)).slice(-2).map(({ event }) => event)).toEqual([
+      'add-stock',
+      'change-stock',
+    ]);
   });
 
   it('are seen by customers, forbidden ones too', async () => {
@@ -181,13 +256,19 @@ describe('stocks', () => {
     ['cautions', ['boredom']],
     ['routes', ['magic']],
   ])('refuse %s of %s', async (field, value) => {
-    const problem = await send<{ fields: Record<string, string> }>(addStock, { body: { ...STOCK, [field]: value } }, 422);
+    const problem = await send<{ fields: Record<string, string> }>(
+      addStock,
+      { body: { ...STOCK, [field]: value } },
+      422,
+    );
     expect(Object.keys(problem.fields)[0]).toMatch(new RegExp(`^${field}`));
   });
 
   it('offer the darkening wash only once the shop has entered its own with the sheet', async () => {
     const routes = ['bare-burn', 'darkening-wash'];
-    expect(await send(addStock, { body: { ...STOCK, routes } }, 422)).toMatchObject({ code: 'wash-without-sheet' });
+    expect(await send(addStock, { body: { ...STOCK, routes } }, 422)).toMatchObject({
+      code: 'wash-without-sheet',
+    });
     const stock = await newStock();
     expect((await patch(stock.id, { routes }, 422)).code).toBe('wash-without-sheet');
     await send(enterWash, { method: 'PUT', body: WASH });
@@ -204,8 +285,16 @@ describe('the wash', () => {
     expect(await send(readWash, {})).toEqual({ wash: second });
   });
 
-  it.each([['an empty address', ''], ['no address', undefined], ['a script', 'javascript:alert(1)']])('needs its sheet: %s', async (_, sheetUrl) => {
-    const problem = await send<{ fields: object }>(enterWash, { method: 'PUT', body: { ...WASH, sheetUrl } }, 422);
+  it.each([
+    ['an empty address', ''],
+    ['no address', undefined],
+    ['a script', 'javascript:alert(1)'],
+  ])('needs its sheet: %s', async (_, sheetUrl) => {
+    const problem = await send<{ fields: object }>(
+      enterWash,
+      { method: 'PUT', body: { ...WASH, sheetUrl } },
+      422,
+    );
     expect(Object.keys(problem.fields)).toEqual(['sheetUrl']);
   });
 });

@@ -33,7 +33,11 @@ export function storageConformance(name: string, open: () => Promise<Storage>): 
 
     it('takes the same bytes twice, also at once, and keeps one', async () => {
       const storage = await open();
-      const keys = await Promise.all([storage.put(bytesOf('same')), storage.put(bytesOf('same')), storage.put(bytesOf('same'))]);
+      const keys = await Promise.all([
+        storage.put(bytesOf('same')),
+        storage.put(bytesOf('same')),
+        storage.put(bytesOf('same')),
+      ]);
       expect(new Set(keys).size).toBe(1);
       expect(await storage.has(keys[0])).toBe(true);
       await storage.delete(keys[0]);
@@ -58,12 +62,15 @@ export function storageConformance(name: string, open: () => Promise<Storage>): 
       await expect(storage.delete(key)).resolves.toBeUndefined();
     });
 
-    it.each(['', '../../etc/passwd', 'A'.repeat(64), `${'a'.repeat(63)}/`, 'a'.repeat(65)])('refuses the key %j', async (key) => {
-      const storage = await open();
-      for (const call of [storage.get(key), storage.has(key), storage.delete(key), storage.stream(key)]) {
-        await expect(call).rejects.toMatchObject({ code: 'bad-key' });
-      }
-    });
+    it.each(['', '../../etc/passwd', 'A'.repeat(64), `${'a'.repeat(63)}/`, 'a'.repeat(65)])(
+      'refuses the key %j',
+      async (key) => {
+        const storage = await open();
+        for (const call of [storage.get(key), storage.has(key), storage.delete(key), storage.stream(key)]) {
+          await expect(call).rejects.toMatchObject({ code: 'bad-key' });
+        }
+      },
+    );
 
     it('holds received bytes back until they are kept', async () => {
       const storage = await open();
@@ -86,7 +93,10 @@ export function storageConformance(name: string, open: () => Promise<Storage>): 
 
     it('discarding one of two equal arrivals leaves the kept one', async () => {
       const storage = await open();
-      const [first, second] = [await storage.receive(stream('twice')), await storage.receive(stream('twice'))];
+      const [first, second] = [
+        await storage.receive(stream('twice')),
+        await storage.receive(stream('twice')),
+      ];
       await first.keep();
       await second.discard();
       expect(await storage.has(first.key)).toBe(true);

@@ -1,4 +1,13 @@
-import { copyFileSync, existsSync, mkdirSync, mkdtempSync, readdirSync, readFileSync, renameSync, rmSync } from 'node:fs';
+import {
+  copyFileSync,
+  existsSync,
+  mkdirSync,
+  mkdtempSync,
+  readdirSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+} from 'node:fs';
 import { createHash } from 'node:crypto';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
@@ -13,13 +22,19 @@ process.env.PASSWORD_COST = '8';
 
 const { openDatabase, closeDatabase } = await import('@/lib/server/db');
 const { config } = await import('@/lib/server/config');
-if (config().dataDir !== dataDir) throw new Error('import tests/setup/database before anything of src/lib/server');
+if (config().dataDir !== dataDir)
+  throw new Error('import tests/setup/database before anything of src/lib/server');
 
 function templateName(): string {
   const folder = path.resolve('db/migrations');
   const hash = createHash('sha256');
-  for (const name of readdirSync(folder).sort()) hash.update(name).update(readFileSync(path.join(folder, name)));
-  return path.join(tmpdir(), `umberline-template-${process.getuid?.() ?? 0}`, `${hash.digest('hex').slice(0, 16)}.sqlite`);
+  for (const name of readdirSync(folder).sort())
+    hash.update(name).update(readFileSync(path.join(folder, name)));
+  return path.join(
+    tmpdir(),
+    `umberline-template-${process.getuid?.() ?? 0}`,
+    `${hash.digest('hex').slice(0, 16)}.sqlite`,
+  );
 }
 
 /** Every test file works on its own copy of one migrated database, made anew when a migration changes. */

@@ -5,7 +5,9 @@ import { readOutbox, type OutboxRow } from '@/lib/server/tables/outbox';
 /** Mails that an address was sent so far, newest first. */
 export async function mailsTo(address: string): Promise<OutboxRow[]> {
   await deliveryIdle();
-  return (await readOutbox(database())).filter(({ recipient }) => recipient.toLowerCase() === address.toLowerCase());
+  return (await readOutbox(database())).filter(
+    ({ recipient }) => recipient.toLowerCase() === address.toLowerCase(),
+  );
 }
 
 /** The token in the link of the newest mail to an address. */

@@ -20,7 +20,12 @@ let made = 0;
 /** Enters a person as the database would have them after registering or accepting an invitation. */
 export async function addPerson(role: Role, fields: PersonFields = {}): Promise<Person> {
   made += 1;
-  const { name = `The ${role} ${made}`, email = `${role}${made}@shop.example`, password = null, confirmed = true } = fields;
+  const {
+    name = `The ${role} ${made}`,
+    email = `${role}${made}@shop.example`,
+    password = null,
+    confirmed = true,
+  } = fields;
   const at = new Date().toISOString();
   const id = await insertPerson(database(), {
     name,

@@ -11,7 +11,9 @@ describe('cautionOf', () => {
       const { title, text } = cautionOf(id, atMachine);
       expect(title).not.toBe('');
       expect(text).toMatch(/^According to (the |university |makers’|suppliers’|finish makers’|fire )/);
-      expect(text).toMatch(/The machine’s manual, local codes and a qualified laser safety officer decide\.$/);
+      expect(text).toMatch(
+        /The machine’s manual, local codes and a qualified laser safety officer decide\.$/,
+      );
     }
   });
 
@@ -25,13 +27,23 @@ describe('cautionOf', () => {
   });
 
   it('tells of mixing the wash to staff only', () => {
-    expect(cautionOf('darkening-wash', true).text).toContain('borates are classified toxic to reproduction; follow the safety data sheet');
+    expect(cautionOf('darkening-wash', true).text).toContain(
+      'borates are classified toxic to reproduction; follow the safety data sheet',
+    );
     expect(cautionOf('darkening-wash', false).text).not.toMatch(/mixing|gloves/i);
   });
 
   it('states the class of an open frame, eye protection, attendance, extinguisher and extraction', () => {
     const { text } = cautionOf('machine-class', true);
-    for (const part of ['IEC 60825-1', 'interlocks', 'class 4', 'eye protection', 'Never leave', 'extinguisher', 'outside']) {
+    for (const part of [
+      'IEC 60825-1',
+      'interlocks',
+      'class 4',
+      'eye protection',
+      'Never leave',
+      'extinguisher',
+      'outside',
+    ]) {
       expect(text).toContain(part);
     }
   });
@@ -43,13 +55,19 @@ describe('cautionsFor', () => {
   });
 
   it('puts the class of the machine first for whoever stands at it', () => {
-    expect(ids({ cautions: ['glued-board'] }, 'bare-burn', 'decoration', true)).toEqual(['machine-class', 'glued-board']);
+    expect(ids({ cautions: ['glued-board'] }, 'bare-burn', 'decoration', true)).toEqual([
+      'machine-class',
+      'glued-board',
+    ]);
     expect(ids({ cautions: ['glued-board'] }, 'bare-burn', 'decoration', false)).toEqual(['glued-board']);
   });
 
   it('adds those of the route and of the use, each once', () => {
     expect(ids({ cautions: [] }, 'darkening-wash', 'decoration', false)).toEqual(['darkening-wash']);
-    expect(ids({ cautions: ['wet-finish'] }, 'paint-fill', 'touches-food', false)).toEqual(['wet-finish', 'food-contact']);
+    expect(ids({ cautions: ['wet-finish'] }, 'paint-fill', 'touches-food', false)).toEqual([
+      'wet-finish',
+      'food-contact',
+    ]);
     expect(ids({ cautions: [] }, 'bare-burn', 'outdoors', false)).toEqual([]);
   });
 });
@@ -57,16 +75,21 @@ describe('cautionsFor', () => {
 describe('routeRefusal', () => {
   const every = { name: 'Oak 8 mm', routes: [...routeSchema.options] };
 
-  it.each(routeSchema.options.flatMap((route) => USES.map((use) => [route, use] as const)))('%s for %s', (route, use) => {
-    const refused = route === 'darkening-wash' && (use === 'touches-food' || use === 'for-a-child');
-    expect(routeRefusal(every, route, use) !== null).toBe(refused);
-    expect(routeRefusal(null, route, use) !== null).toBe(refused);
-  });
+  it.each(routeSchema.options.flatMap((route) => USES.map((use) => [route, use] as const)))(
+    '%s for %s',
+    (route, use) => {
+      const refused = route === 'darkening-wash' && (use === 'touches-food' || use === 'for-a-child');
+      expect(routeRefusal(every, route, use) !== null).toBe(refused);
+      expect(routeRefusal(null, route, use) !== null).toBe(refused);
+    },
+  );
 
   it('refuses a route that the stock does not offer, by name', () => {
     expect(routeRefusal({ name: 'Slate', routes: ['bare-burn'] }, 'paint-fill', 'decoration')).toBe(
       'Paint fill is not offered on Slate. Choose another route or another stock.',
     );
-    expect(routeRefusal({ name: 'Vinyl', routes: [] }, 'bare-burn', 'decoration')).toContain('Bare burn is not offered on Vinyl');
+    expect(routeRefusal({ name: 'Vinyl', routes: [] }, 'bare-burn', 'decoration')).toContain(
+      'Bare burn is not offered on Vinyl',
+    );
   });
 });

@@ -31,7 +31,7 @@ function Slip({ row, hrefBase, today }: { row: OrderRow; hrefBase: string; today
             <span>
               {STATE_WORDS[row.state]} · {row.customerName}
             </span>
-            <Due row={row} today={today} />
+            <Due row={row} today={today} inline />
           </span>
           {row.blockers + row.warnings > 0 && (
             <span className="block text-13">

@@ -34,7 +34,8 @@ export function FindingCounts({ row }: { row: OrderRow }) {
   );
 }
 
-export function Due({ row, today }: { row: OrderRow; today: string }) {
+/** A due date and how far it is; on one line where `inline`. */
+export function Due({ row, today, inline = false }: { row: OrderRow; today: string; inline?: boolean }) {
   if (row.dueOn === null) return <span className="text-quiet">no date</span>;
   const words = dueWords(row.dueOn, today);
   const open = row.state !== 'finished' && row.state !== 'handed-over' && row.state !== 'cancelled';
@@ -42,8 +43,13 @@ export function Due({ row, today }: { row: OrderRow; today: string }) {
   return (
     <span className="figure">
       {dayWords(row.dueOn)}
+      {open && inline && ', '}
       {open && (
-        <span className={`block text-13 ${late ? 'font-semibold text-stop' : 'text-quiet'}`}>{words}</span>
+        <span
+          className={`text-13 ${inline ? '' : 'block'} ${late ? 'font-semibold text-stop' : 'text-quiet'}`}
+        >
+          {words}
+        </span>
       )}
     </span>
   );

@@ -1,5 +1,4 @@
 import { useQuery } from '@tanstack/react-query';
-import { changedChoices } from '@/lib/orders/sentence';
 import { firstDesign, placedSize } from '@/lib/orders/settings';
 import type { OrderEvent } from '@/lib/orders/state';
 import type { Design, MachineView, OrderView, TaskView } from '@/lib/orders/views';
@@ -17,10 +16,12 @@ import { useOrder } from '../use-order';
 import { useProgress } from '../use-progress';
 import { picturesOf } from '../viewer/pictures';
 import { Viewer } from '../viewer/Viewer';
+import { ArtworkCheck } from './ArtworkCheck';
 import { ChangeOrder } from './ChangeOrder';
 import { ArtworkVersions, OrderFacts } from './OrderFacts';
 import { Prepare } from './Prepare';
 import { PreparationFacts } from './PreparationFacts';
+import { standingOf } from './standing';
 import { Steps } from './Steps';
 import { useDesign } from './use-design';
 import { Waive } from './Waive';
@@ -39,7 +40,7 @@ const OFFERED: readonly OrderEvent[] = [
   'resume',
   'cancel',
 ];
-const PREPARABLE = ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'];
+const ON_TICKET = ['released', 'running', 'finished', 'handed-over'];
 
 /** The choices a designer starts from where none are kept yet: the shop's first machine, the suggested treatment. */
 function startingDesign(order: OrderView, machines: readonly MachineView[]): Design | null {
@@ -91,47 +92,47 @@ function Work({ number, initial }: { number: string; initial?: OrderView }) {
     ) : (
       <p role="status">Fetching the machines.</p>
     );
-  const prepareTask = tasks.find((task) => task.kind === 'prepare') ?? null;
-  return <LoadedWork order={order} machines={machines.data.machines} liveTask={prepareTask} />;
+  const newest = (kind: 'check' | 'prepare') => tasks.filter((task) => task.kind === kind).at(-1) ?? null;
+  return (
+    <LoadedWork
+      order={order}
+      machines={machines.data.machines}
+      prepareTask={newest('prepare')}
+      checkTask={newest('check')}
+    />
+  );
 }
 
 function LoadedWork({
   order,
   machines,
-  liveTask,
+  prepareTask,
+  checkTask,
 }: {
   order: OrderView;
   machines: readonly MachineView[];
-  liveTask: TaskView | null;
+  prepareTask: TaskView | null;
+  checkTask: TaskView | null;
 }) {
   const first = startingDesign(order, machines);
   const work = useDesign(order, first);
-  const artwork = newestArtwork(order.artworks);
-  const latest = order.preparations[0] ?? null;
-  const finished = order.preparations.find((p) => p.task.state === 'done' && p.report !== null) ?? null;
-  const open = PREPARABLE.includes(order.state);
-  const size = finished?.report ?? placedSize(order.fields) ?? artwork?.check ?? null;
-  const report =
-    finished?.report && finished.artworkVersion === artwork?.version
-      ? finished.report
-      : (artwork?.check ?? null);
   const { design } = work;
   const context = design && choiceContext(design, machines, order);
+  const { artwork, latest, finished, findings, size, isOpen, isStale } = standingOf(order, design, context);
   const before = latest?.design ?? first ?? design;
-  const isStale = Boolean(
-    open &&
-    design &&
-    context &&
-    (!latest ||
-      latest.artworkVersion !== artwork?.version ||
-      changedChoices(latest.design, design, context).length > 0),
-  );
   return (
     <div className="flex flex-col gap-10">
       <div className="flex flex-col gap-6">
         <Head order={order} />
         <LifeRule state={order.state} reached={reachedState(order)} />
         <Steps order={order} offered={OFFERED} quiet={isStale} />
+        {ON_TICKET.includes(order.state) && (
+          <p>
+            <a href={`/tickets/${order.number}`} className="link">
+              See the job ticket
+            </a>
+          </p>
+        )}
       </div>
       {design && context && before ? (
         <div className="flex flex-col gap-4">
@@ -140,14 +141,14 @@ function LoadedWork({
             before={before}
             context={context}
             onChange={work.change}
-            isDisabled={!open}
+            isDisabled={!isOpen}
           />
           {work.keep.error && <ProblemNotice problem={problemOf(work.keep.error)} />}
-          {open && (
+          {isOpen && (
             <Prepare
               order={order}
               latest={latest}
-              liveTask={liveTask}
+              liveTask={prepareTask}
               isStale={isStale}
               isBusy={work.prepare.isPending}
               isDisabled={!artwork || !placedSize(order.fields)}
@@ -169,12 +170,17 @@ function LoadedWork({
           widthMm={size.widthMm}
           heightMm={size.heightMm}
           pitchMm={finished?.report?.settings.scan.linePitchMm ?? design?.scan.linePitchMm ?? 0.1}
-          findings={report?.findings ?? []}
+          findings={findings ?? []}
           resultKey={finished?.key ?? null}
-          clear={report ? 'Nothing to note on this artwork.' : 'The artwork is still being checked.'}
-          before={<h2>Notes</h2>}
+          clear={findings ? 'Nothing to note on this artwork.' : 'No notes until it is checked.'}
+          before={
+            <>
+              <h2>Notes</h2>
+              <ArtworkCheck order={order} artwork={artwork} liveTask={checkTask} />
+            </>
+          }
           action={(finding) => (
-            <Waive order={order} finding={finding} artworkVersion={artwork.version} mayWaive={open} />
+            <Waive order={order} finding={finding} artworkVersion={artwork.version} mayWaive={isOpen} />
           )}
         />
       ) : (

@@ -5,6 +5,7 @@ import { Button } from '../Button';
 import { Notice, ProblemNotice } from '../Notice';
 import { ProgressRule } from '../ProgressRule';
 import { EventDialog } from './EventDialog';
+import { isUnderWay, stageWords } from './task-state';
 
 interface Props {
   order: OrderView;
@@ -20,13 +21,6 @@ interface Props {
 
 const VOIDING = ['passed', 'proof-sent', 'approved', 'released'] as const;
 
-const isUnderWay = (task: TaskView | null): boolean => task?.state === 'waiting' || task?.state === 'running';
-
-function stageWords(task: TaskView): string {
-  if (task.state === 'waiting') return 'Waiting for its turn';
-  return `${task.stage || 'Preparing'}, ${Math.round(task.progress * 100)} %`;
-}
-
 /** Starts a preparation, shows it on the rule, and says what to do where it failed. */
 export function Prepare({ order, latest, liveTask, isStale, isBusy, isDisabled, error, onPrepare }: Props) {
   const [asking, setAsking] = useState(false);
@@ -40,7 +34,7 @@ export function Prepare({ order, latest, liveTask, isStale, isBusy, isDisabled, 
       {running ? (
         <ProgressRule
           progress={task?.progress ?? null}
-          words={task ? stageWords(task) : 'Sending the choices'}
+          words={task ? stageWords(task, 'Preparing') : 'Sending the choices'}
           mayLeave
         />
       ) : (

@@ -86,15 +86,9 @@ function Plate({ preparation, report }: Pick<Props, 'preparation' | 'report'>) {
 
 function Passes({ report, speedUnit }: Pick<Props, 'report' | 'speedUnit'>) {
   const linework = lineworkLine(report, speedUnit);
+  const role = linework ? 'linework' : 'raster';
   const fileOf = (pass: number) =>
-    fileWords(
-      report.files
-        .filter((f) => f.pass === pass && f.role === (linework ? 'linework' : 'raster'))
-        .map((f) => f.name),
-    );
-  report.files
-    .filter((f) => f.pass === pass && f.role === (linework ? 'linework' : 'raster'))
-    .map((f) => f.name);
+    fileWords(report.files.filter((f) => f.pass === pass && f.role === role).map((f) => f.name));
   return (
     <section>
       <h2>Passes</h2>

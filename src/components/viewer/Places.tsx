@@ -11,8 +11,9 @@ interface Props {
 }
 
 const RADIUS = 6;
-/** Places of one finding drawn at once; the note says how many there are. */
-const MOST_PLACES = 60;
+/** Places drawn of a finding that is not lit, and of the one that is; the note says how many there are. */
+const QUIET_PLACES = 6;
+const LIT_PLACES = 200;
 
 const MARK_COLOUR: Record<Severity, string> = {
   blocker: 'var(--mark-stop)',
@@ -45,10 +46,13 @@ export function Places({ findings, view, frame, lit, onLight, onChoose }: Props)
     xPx >= -20 && yPx >= -20 && xPx <= frame.widthPx + 20 && yPx <= frame.heightPx + 20;
   const drawn = [...findings].sort((a, b) => Number(a.id === lit) - Number(b.id === lit));
   /** the note's leader ends at the place that lies nearest to the margin */
+  const placesOf = (finding: Finding) =>
+    finding.places.slice(0, finding.id === lit ? LIT_PLACES : QUIET_PLACES);
   const leaderPlace = (finding: Finding): number => {
-    const inView = finding.places
-      .slice(0, MOST_PLACES)
-      .map((place, index) => ({ index, at: toFrame(view, frame, place.xMm, place.yMm) }));
+    const inView = placesOf(finding).map((place, index) => ({
+      index,
+      at: toFrame(view, frame, place.xMm, place.yMm),
+    }));
     const visible = inView.filter(
       ({ at }) => at.xPx >= 0 && at.yPx >= 0 && at.xPx <= frame.widthPx && at.yPx <= frame.heightPx,
     );
@@ -60,7 +64,7 @@ export function Places({ findings, view, frame, lit, onLight, onChoose }: Props)
         const leader = leaderPlace(finding);
         return (
           <g key={finding.id}>
-            {finding.places.slice(0, MOST_PLACES).map((place, index) => {
+            {placesOf(finding).map((place, index) => {
               const at = toFrame(view, frame, place.xMm, place.yMm);
               if (!inFrame(at.xPx, at.yPx)) return null;
               const width = place.widthMm * view.pxPerMm;

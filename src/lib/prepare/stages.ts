@@ -2,6 +2,7 @@ import { judge } from '../preflight/checks';
 import { colourPicture } from './forecast/colour-picture';
 import { passagePictures } from './forecast/passage-pictures';
 import { ingest } from './ingest/ingest';
+import { overBlack } from './ingest/over-black';
 import { mark } from './mark';
 import { measure } from './measure/measure';
 import { smallestSoundWidth } from './measure/smallest-sound-width';
@@ -10,6 +11,7 @@ import { packageLinework } from './package/package-linework';
 import { packageRasters } from './package/package-rasters';
 import { placedSize } from './placed-size';
 import { turnArtwork } from './resample/turn';
+import { untouchedLuminance } from './tone/burn-table';
 import { trace } from './trace/trace';
 import type { CheckWork, PrepareWork, Stage } from './work';
 
@@ -71,12 +73,13 @@ export const markStage: Stage<PrepareWork> = {
   name: 'mark',
   timesItself: true,
   async run(work) {
-    const { settings, artwork, frames } = work;
-    const turned = turnArtwork(artwork, settings.quarterTurns);
+    const { settings, artwork, frames, bytes } = work;
+    const base = untouchedLuminance(settings) === 0 ? await overBlack(artwork, bytes) : artwork;
+    work.turned = turnArtwork(base, settings.quarterTurns);
     work.passes = [];
     for (const [index, frame] of frames.entries()) {
       const onProgress = (share: number): void => work.onProgress((index + share) / frames.length);
-      const marks = await mark(turned, frame, settings, { ...work, onProgress });
+      const marks = await mark(work.turned, frame, settings, { ...work, onProgress });
       work.passes.push({ pass: index === 0 ? 1 : 2, frame, marks });
     }
   },

@@ -102,6 +102,8 @@ export interface PrepareWork extends CheckWork {
   readonly preparationKey: string;
   /** pixels of every pass */
   readonly frames: readonly ScanFrame[];
+  /** mark: the artwork as it is placed, laid over what the stock leaves untouched */
+  turned: Artwork;
   /** mark */
   passes: MarkedPass[];
   /** trace: for linework, else null */

@@ -42,7 +42,8 @@ const writing = new AsyncLocalStorage<Write>();
 
 /** The database for reading. Inside a write it throws: the pool has one connection, and the write holds it. */
 export function database(): Db {
-  if (writing.getStore()) throw new Error('expected the transaction inside withWrite, got a query outside it');
+  if (writing.getStore())
+    throw new Error('expected the transaction inside withWrite, got a query outside it');
   return (slot.umberlineDatabase ??= openDatabase(config().databaseFile));
 }
 

@@ -11,6 +11,7 @@ interface Refusal {
 }
 
 /** Every refusal that a person may be shown, with its status: the one table. */
+// prettier-ignore
 export const REFUSALS = {
   'not-signed-in': { status: 401, title: 'You are not signed in.', detail: 'This needs to know who you are.', action: 'Sign in and try again.' },
   'not-allowed': { status: 403, title: 'This is not yours to do.', detail: 'Your role does not include it.', action: 'Ask an admin of the shop.' },

@@ -58,7 +58,9 @@ export async function countAttempt(what: Limited, address: string, account: stri
   } catch (refused) {
     if (!(refused instanceof RateLimiterRes)) throw refused;
     const minutes = Math.max(1, Math.ceil(refused.msBeforeNext / 60_000));
-    throw new AppError('too-many', { action: `Wait ${minutes} ${minutes === 1 ? 'minute' : 'minutes'} and try again.` });
+    throw new AppError('too-many', {
+      action: `Wait ${minutes} ${minutes === 1 ? 'minute' : 'minutes'} and try again.`,
+    });
   }
 }
 

@@ -5,5 +5,8 @@ import { config } from './config';
 export const log = pino({
   level: config().logLevel,
   base: undefined,
-  redact: { paths: ['password', 'token', '*.password', '*.token', 'req.headers.cookie'], censor: '(kept back)' },
+  redact: {
+    paths: ['password', 'token', '*.password', '*.token', 'req.headers.cookie'],
+    censor: '(kept back)',
+  },
 });

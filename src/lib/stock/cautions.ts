@@ -100,7 +100,12 @@ export function cautionOf(id: CautionId, atMachine: boolean): Caution {
  * @returns in a fixed order, the machine's class first; empty where nothing applies
  * @example cautionsFor(null, 'bare-burn', 'decoration', false).map((c) => c.id) // ['unidentified-plastic']
  */
-export function cautionsFor(stock: Pick<Stock, 'cautions'> | null, route: Route, use: Use, atMachine: boolean): Caution[] {
+export function cautionsFor(
+  stock: Pick<Stock, 'cautions'> | null,
+  route: Route,
+  use: Use,
+  atMachine: boolean,
+): Caution[] {
   const ids: CautionId[] = [
     ...(atMachine ? (['machine-class'] as const) : []),
     ...(stock ? stock.cautions : (['unidentified-plastic'] as const)),
@@ -122,7 +127,11 @@ export const ROUTE_WORDS: Record<Route, string> = {
  * @param stock null while it is not identified: then only the use is looked at
  * @example routeRefusal(null, 'darkening-wash', 'touches-food') // 'The darkening wash is not food-safe. …'
  */
-export function routeRefusal(stock: Pick<Stock, 'name' | 'routes'> | null, route: Route, use: Use): string | null {
+export function routeRefusal(
+  stock: Pick<Stock, 'name' | 'routes'> | null,
+  route: Route,
+  use: Use,
+): string | null {
   if (route === 'darkening-wash' && use === 'touches-food') {
     return 'The darkening wash is not food-safe. Choose another route, or another use.';
   }

@@ -276,6 +276,13 @@ describe('trouble', () => {
     expect(performance.now() - since).toBeLessThan(2000);
   });
 
+  test('AVIF, whose decoder takes more memory, has a lower cap', async () => {
+    const large = sharp({ create: { width: 5000, height: 4001, channels: 3, background: '#888' } });
+    const error = await trouble(await large.avif({ effort: 0 }).toBuffer());
+    expect(error.code).toBe('too-large');
+    expect(error.message).toMatch(/20.0 million of AVIF/);
+  });
+
   test('1 × 50,000 and 1 × 1 are fine', async () => {
     const tall = await read(
       await sharp({ create: { width: 1, height: 50_000, channels: 3, background: '#000' } })

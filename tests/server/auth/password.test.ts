@@ -17,7 +17,10 @@ async function milliseconds(work: () => Promise<unknown>): Promise<number> {
 
 describe('hashPassword', () => {
   it('keeps scheme, cost, salt and key, and never twice the same', async () => {
-    const [one, two] = await Promise.all([hashPassword('rye-and-ember', CHEAP), hashPassword('rye-and-ember', CHEAP)]);
+    const [one, two] = await Promise.all([
+      hashPassword('rye-and-ember', CHEAP),
+      hashPassword('rye-and-ember', CHEAP),
+    ]);
     expect(one).toMatch(/^scrypt\$4\$8\$1\$[\w-]{22}\$[\w-]{43}$/);
     expect(one).not.toBe(two);
     expect(one).not.toContain('rye');
@@ -25,7 +28,11 @@ describe('hashPassword', () => {
 
   it('is scrypt as another caller computes it', async () => {
     const [, , , , salt, key] = (await hashPassword('rye-and-ember', CHEAP)).split('$');
-    expect(scryptSync('rye-and-ember', Buffer.from(salt, 'base64url'), 32, { N: 16, r: 8, p: 1 }).toString('base64url')).toBe(key);
+    expect(
+      scryptSync('rye-and-ember', Buffer.from(salt, 'base64url'), 32, { N: 16, r: 8, p: 1 }).toString(
+        'base64url',
+      ),
+    ).toBe(key);
   });
 
   it('costs 32 MiB and three rounds unless set higher', async () => {
@@ -40,7 +47,8 @@ describe('passwordMatches', () => {
   it('knows the right one and no other', async () => {
     const stored = await hashPassword('rye-and-ember', CHEAP);
     expect(await passwordMatches('rye-and-ember', stored)).toBe(true);
-    for (const wrong of ['', 'Rye-and-ember', 'rye-and-ember ', 'rye-and-embe', 'ember-and-rye']) expect(await passwordMatches(wrong, stored)).toBe(false);
+    for (const wrong of ['', 'Rye-and-ember', 'rye-and-ember ', 'rye-and-embe', 'ember-and-rye'])
+      expect(await passwordMatches(wrong, stored)).toBe(false);
   });
 
   it('reads the cost that is stored, not today’s', async () => {
@@ -52,7 +60,14 @@ describe('passwordMatches', () => {
     expect(await passwordMatches('ro\u0308stbrot', stored)).toBe(true);
   });
 
-  it.each(['', 'plain', 'scrypt$4$8$1$salt', 'scrypt$40$8$1$c2FsdA$a2V5', 'scrypt$x$8$1$c2FsdA$a2V5', 'bcrypt$4$8$1$c2FsdA$a2V5'])('refuses what is no hash: %s', async (stored) => {
+  it.each([
+    '',
+    'plain',
+    'scrypt$4$8$1$salt',
+    'scrypt$40$8$1$c2FsdA$a2V5',
+    'scrypt$x$8$1$c2FsdA$a2V5',
+    'bcrypt$4$8$1$c2FsdA$a2V5',
+  ])('refuses what is no hash: %s', async (stored) => {
     await expect(passwordMatches('rye', stored)).rejects.toThrow('expected a stored scrypt hash');
   });
 });

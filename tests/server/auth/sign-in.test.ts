@@ -23,11 +23,17 @@ class Visitor {
   constructor(readonly address = '192.0.2.1') {}
 
   async send(path: string, form?: Record<string, string>): Promise<Response> {
-    const headers = new Headers({ cookie: [...this.cookies].map(([name, value]) => `${name}=${value}`).join('; ') });
+    const headers = new Headers({
+      cookie: [...this.cookies].map(([name, value]) => `${name}=${value}`).join('; '),
+    });
     if (form) headers.set('content-type', 'application/x-www-form-urlencoded');
     headers.set('x-auth-return-redirect', '1');
     markSocketAddress(headers, this.address);
-    const request = new Request(`${BASE}/api/auth/${path}`, { method: form ? 'POST' : 'GET', headers, body: form && new URLSearchParams(form) });
+    const request = new Request(`${BASE}/api/auth/${path}`, {
+      method: form ? 'POST' : 'GET',
+      headers,
+      body: form && new URLSearchParams(form),
+    });
     const response = await Auth(request, authConfig(SECRET));
     for (const cookie of response.headers.getSetCookie()) {
       const [pair] = cookie.split(';');
@@ -40,7 +46,8 @@ class Visitor {
 
   async submit(path: string, fields: Record<string, string> = {}): Promise<string> {
     const { csrfToken } = await (await this.send('csrf')).json();
-    return (await (await this.send(path, { ...fields, csrfToken, callbackUrl: `${BASE}/orders` })).json()).url;
+    return (await (await this.send(path, { ...fields, csrfToken, callbackUrl: `${BASE}/orders` })).json())
+      .url;
   }
 
   signIn = (email: string, password: string) => this.submit('callback/credentials', { email, password });
@@ -83,12 +90,20 @@ describe('signing in', () => {
 
   it('sends nobody to another site', async () => {
     const { csrfToken } = await (await visitor.send('csrf')).json();
-    const form = { csrfToken, email: mira.email, password: 'rye-and-ember', callbackUrl: 'https://elsewhere.example/' };
+    const form = {
+      csrfToken,
+      email: mira.email,
+      password: 'rye-and-ember',
+      callbackUrl: 'https://elsewhere.example/',
+    };
     expect((await (await visitor.send('callback/credentials', form)).json()).url).toBe(BASE);
   });
 
   it('needs the token of its own form', async () => {
-    const response = await visitor.send('callback/credentials', { email: mira.email, password: 'rye-and-ember' });
+    const response = await visitor.send('callback/credentials', {
+      email: mira.email,
+      password: 'rye-and-ember',
+    });
     expect((await response.json()).url).toContain('error=MissingCSRF');
     expect(await visitor.person()).toBeNull();
   });
@@ -97,7 +112,9 @@ describe('signing in', () => {
     for (let index = 0; index < ALLOWANCES['sign-in'].perAccount; index += 1) {
       await new Visitor(`192.0.2.${index}`).signIn(mira.email, 'wrong-password');
     }
-    expect(await visitor.signIn(mira.email, 'rye-and-ember')).toBe(`${BASE}/sign-in?error=CredentialsSignin&code=too-many`);
+    expect(await visitor.signIn(mira.email, 'rye-and-ember')).toBe(
+      `${BASE}/sign-in?error=CredentialsSignin&code=too-many`,
+    );
   });
 
   it('stores the password at today’s cost when it was kept at another', async () => {

@@ -22,7 +22,11 @@ describe('setSecurityHeaders', () => {
   });
 
   it('takes the hashes of a page’s scripts from the build and allows no inline script besides', () => {
-    const policy = set({ ...HTML, 'content-security-policy': "script-src 'self' 'sha256-abc='; style-src 'self' 'sha256-def=';" }).get('content-security-policy') ?? '';
+    const policy =
+      set({
+        ...HTML,
+        'content-security-policy': "script-src 'self' 'sha256-abc='; style-src 'self' 'sha256-def=';",
+      }).get('content-security-policy') ?? '';
     expect(policy).toContain("script-src 'self' 'sha256-abc=';");
     expect(policy).toContain("default-src 'none'");
     expect(/script-src[^;]*unsafe/.test(policy)).toBe(false);
@@ -33,8 +37,14 @@ describe('setSecurityHeaders', () => {
   });
 
   it('allows nothing at all to what is no page, and leaves a stricter policy alone', () => {
-    expect(set({ 'content-type': 'image/png' }).get('content-security-policy')).toMatch(/^default-src 'none'/);
-    expect(set({ 'content-type': 'image/png', 'content-security-policy': 'sandbox' }).get('content-security-policy')).toBe('sandbox');
+    expect(set({ 'content-type': 'image/png' }).get('content-security-policy')).toMatch(
+      /^default-src 'none'/,
+    );
+    expect(
+      set({ 'content-type': 'image/png', 'content-security-policy': 'sandbox' }).get(
+        'content-security-policy',
+      ),
+    ).toBe('sandbox');
   });
 
   it('sets no policy on pages of the development server', () => {

@@ -38,7 +38,9 @@ describe('on a real connection', () => {
   let port: number;
   beforeAll(async () => {
     server = createServer((incoming, answer) => {
-      const headers = new Headers(Object.entries(incoming.headers).map(([name, value]): [string, string] => [name, String(value)]));
+      const headers = new Headers(
+        Object.entries(incoming.headers).map(([name, value]): [string, string] => [name, String(value)]),
+      );
       answer.end(socketAddress(new Request('http://localhost/', { headers })));
     });
     await new Promise<void>((done) => server.listen(0, '127.0.0.1', done));
@@ -48,9 +50,12 @@ describe('on a real connection', () => {
 
   it('the listener writes the address before anything else sees the request', async () => {
     const text = await new Promise((resolve, reject) => {
-      const sent = httpRequest({ port, host: '127.0.0.1', headers: { 'x-forwarded-for': '6.6.6.6' } }, (response) => {
-        response.setEncoding('utf8').on('data', resolve);
-      });
+      const sent = httpRequest(
+        { port, host: '127.0.0.1', headers: { 'x-forwarded-for': '6.6.6.6' } },
+        (response) => {
+          response.setEncoding('utf8').on('data', resolve);
+        },
+      );
       sent.on('error', reject).end();
     });
     expect(text).toBe('127.0.0.1');

@@ -25,7 +25,12 @@ describe('queueMail', () => {
     await deliveryIdle();
     const [received, ...others] = await readOutbox(database());
     expect(others).toEqual([]);
-    expect(received).toMatchObject({ recipient: 'mira@shop.example', subject: mail().subject, text: mail().text, html: mail().html });
+    expect(received).toMatchObject({
+      recipient: 'mira@shop.example',
+      subject: mail().subject,
+      text: mail().text,
+      html: mail().html,
+    });
     const [row] = await mails();
     expect(row).toMatchObject({ text: '', html: '', attempts: 1, problem: '', failed_at: null });
     expect(row.sent_at).not.toBeNull();
@@ -78,7 +83,13 @@ describe('deliverDue', () => {
     await deliveryIdle();
     await database()('outbox').delete();
     const past = new Date(Date.now() - 1000).toISOString();
-    await database()('mails').update({ sent_at: null, attempts: 1, due_at: past, text: 'Text', html: '<p>Text</p>' });
+    await database()('mails').update({
+      sent_at: null,
+      attempts: 1,
+      due_at: past,
+      text: 'Text',
+      html: '<p>Text</p>',
+    });
     await deliverDue();
     expect(await readOutbox(database())).toHaveLength(1);
   });
@@ -97,7 +108,11 @@ describe('deliverDue', () => {
     vi.spyOn(mailServer, 'sendByMailServer').mockImplementation(async ({ message_id }) => {
       sent.push(message_id);
     });
-    await Promise.all(Array.from({ length: 20 }, (_, index) => withWrite((trx) => queueMail(trx, `person${index}@shop.example`, mail()))));
+    await Promise.all(
+      Array.from({ length: 20 }, (_, index) =>
+        withWrite((trx) => queueMail(trx, `person${index}@shop.example`, mail())),
+      ),
+    );
     await Promise.all([deliverDue(), deliverDue(), deliverDue()]);
     await deliveryIdle();
     expect(sent).toHaveLength(20);

@@ -14,7 +14,16 @@ const LETTER: Letter = {
 describe('dress', () => {
   it('says the same in plain text and in HTML', () => {
     const { text, html } = dress('kind', LETTER);
-    for (const part of ['U-1001 Bakery sign', 'Proof', 'Mira,', 'Your proof is ready.', 'First.', 'Line two.', 'See the proof', 'A note.']) {
+    for (const part of [
+      'U-1001 Bakery sign',
+      'Proof',
+      'Mira,',
+      'Your proof is ready.',
+      'First.',
+      'Line two.',
+      'See the proof',
+      'A note.',
+    ]) {
       expect(text).toContain(part);
       expect(html).toContain(part);
     }
@@ -23,13 +32,20 @@ describe('dress', () => {
   });
 
   it('lets no word of a customer become markup', () => {
-    const { html } = dress('kind', { ...LETTER, greeting: '<script>x</script>', sentence: '"><img src=x>', plate: { title: '<b>', line: "'" } });
+    const { html } = dress('kind', {
+      ...LETTER,
+      greeting: '<script>x</script>',
+      sentence: '"><img src=x>',
+      plate: { title: '<b>', line: "'" },
+    });
     expect(html).not.toMatch(/<script|<img|<b>/);
     expect(html).toContain('&#60;script&#62;');
   });
 
   it('lets no subject become a second header', () => {
-    expect(dress('kind', { ...LETTER, subject: 'One\r\nBcc: all@shop.example' }).subject).toBe('One Bcc: all@shop.example');
+    expect(dress('kind', { ...LETTER, subject: 'One\r\nBcc: all@shop.example' }).subject).toBe(
+      'One Bcc: all@shop.example',
+    );
   });
 
   it('leaves out what there is not', () => {

@@ -62,7 +62,12 @@ const MAILS: Record<string, Expected> = {
     link: `${SITE}/queue/U-1042`,
   },
   approved: {
-    mail: approvedMail({ ...order, approvedBy: 'Ines Farrow', how: 'at the counter', manifestSha256: '0123456789abcdef'.repeat(4) }),
+    mail: approvedMail({
+      ...order,
+      approvedBy: 'Ines Farrow',
+      how: 'at the counter',
+      manifestSha256: '0123456789abcdef'.repeat(4),
+    }),
     subject: 'Approved: order U-1042',
     says: ['Ines Farrow has approved the proof (at the counter)', '0123456789abcdef.'],
     link: `${SITE}/orders/U-1042`,
@@ -114,6 +119,8 @@ describe('words that depend on the order', () => {
   });
 
   it('say how an approval was given only where that was written down', () => {
-    expect(approvedMail({ ...order, approvedBy: 'Ines', how: '', manifestSha256: 'a'.repeat(64) }).text).toContain('Ines has approved the proof; it goes');
+    expect(
+      approvedMail({ ...order, approvedBy: 'Ines', how: '', manifestSha256: 'a'.repeat(64) }).text,
+    ).toContain('Ines has approved the proof; it goes');
   });
 });

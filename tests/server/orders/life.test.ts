@@ -80,7 +80,8 @@ describe('an order’s life', () => {
     const mine = await open(shop.unconfirmed, { widthMm: 60, heightMm: 40, blank: blankOf(shop.birch) });
     await upload(shop.unconfirmed, mine.number);
     await settled(shop.unconfirmed, mine.number);
-    await cause(shop.unconfirmed, mine.number, { event: 'submit', rightsConfirmed: true }, 409);
+    await cause(shop.unconfirmed, mine.number, { event: 'submit', rightsConfirmed: true }, 403);
+    expect((await read(shop.unconfirmed, mine.number)).waitsFor.submit).toMatch(/not confirmed/);
     expect((await cause(shop.designer, mine.number, { event: 'submit', rightsConfirmed: true })).state).toBe('submitted');
   });
 
@@ -214,6 +215,9 @@ describe('an order’s life', () => {
     const held = await cause(shop.operator, number, { event: 'hold', reason: 'The machine is being cleaned.' });
     expect(held).toMatchObject({ state: 'on-hold', heldBecause: 'The machine is being cleaned.' });
     expect((await cause(shop.operator, number, { event: 'resume' })).state).toBe('approved');
+    const other = await orderAt(shop, 'submitted');
+    await cause(shop.designer, other.number, { event: 'hold', reason: 'No cork in the shop.' });
+    expect(await cause(shop.designer, other.number, { event: 'cancel', reason: 'agreed' })).toMatchObject({ state: 'cancelled', heldBecause: '' });
     await cause(shop.customer, number, { event: 'cancel', reason: 'changed my mind' }, 409);
     expect((await cause(shop.designer, number, { event: 'cancel', reason: 'agreed with Ina' })).state).toBe('cancelled');
   });

@@ -2,7 +2,6 @@ import type { StockTone } from '../settings';
 import { FULL_LUMINANCE } from '../../imaging/srgb';
 import type { PassagePicture } from '../report';
 import { placedGrey } from '../resample/resample';
-import { turnArtwork } from '../resample/turn';
 import type { Grey } from '../resample/upright';
 import { burnTable } from '../tone/burn-table';
 import type { PrepareWork } from '../work';
@@ -55,12 +54,11 @@ async function sharesOf(work: PrepareWork, size: PictureSize): Promise<{ asked: 
  * @returns PNGs by name
  */
 export async function passagePictures(work: PrepareWork): Promise<Record<PassagePicture, Uint8Array>> {
-  const { settings, artwork, bytes, tools, passes } = work;
+  const { settings, artwork, bytes, tools, passes, turned } = work;
   const { widthMm, heightMm, quarterTurns, mirror } = settings;
   const pitch = Math.min(...passes.flatMap(({ frame }) => [frame.pitchXMm, frame.pitchYMm]));
   const size = pictureSize(widthMm, heightMm, pitch);
   const tonal = settings.treatment === 'halftone' || settings.treatment === 'continuous';
-  const turned = turnArtwork(artwork, quarterTurns);
   const placed = await placedGrey(turned, size.columns, size.rows, tonal ? 'linear' : 'coverage', tools);
   const sized = mirrored(placed, mirror);
   const { asked, marked } = await sharesOf(work, size);

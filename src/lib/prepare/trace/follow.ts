@@ -1,7 +1,7 @@
 import { apply, flatten, polyline, type Curve, type Point } from './curve';
 import type { Drawing, Painting } from './drawing';
 import { GrowingArea, meet, within, type Bounds } from './parts';
-import { boundsOf, cutLine, EMPTY, intersect, offsetByDisc, penArea, regionOf, type Region } from './region';
+import { boundsOf, cutLine, intersect, offsetByDisc, penArea, regionOf, type Region } from './region';
 
 /** Beyond so many comparisons of paintings with each other, hidden lines are no longer looked for. */
 const MAX_COMPARISONS = 20_000_000;

@@ -5,6 +5,7 @@ import { SHAPES } from '../svg/vocabulary';
 import { readRoot } from '../svg/window-svg';
 import {
   flatten,
+  IDENTITY,
   multiply,
   readPathData,
   readTransform,
@@ -12,12 +13,14 @@ import {
   type Curve,
   type Matrix,
 } from './curve';
+import { ClipReader } from './clip-region';
 import { dash } from './dash';
 import type { Drawing, Painting } from './drawing';
+import { gradientEffect } from './gradient-effect';
 import { INITIAL, inherit, opacityOf, readDashes, readPaint, readPen, type Paint } from './inherited';
-import { effectOf, readColour, type Effect } from './paint';
-import { boundsOf, intersect, regionOf, unite, type Region } from './region';
-import { readLength, shapePath, type Viewport } from './shape';
+import { effectOf } from './paint';
+import { intersect, regionOf, type Region } from './region';
+import { readLength, shapePath, useOffset, type Viewport } from './shape';
 import { viewportMatrix } from './viewport-matrix';
 
 /** What an element stands in. */
@@ -39,6 +42,7 @@ class Reader {
   needsRender = false;
   private byId = new Map<string, SvgNode>();
   private unfollowed = new Set<SvgNode>();
+  private readonly clips: ClipReader;
   readonly followed = new Set<SvgNode>();
 
   constructor(
@@ -47,6 +51,7 @@ class Reader {
     private readonly dividingLstar: number,
     private readonly toleranceMm: number,
   ) {
+    this.clips = new ClipReader(this.byId, styles, toleranceMm);
     const visit = (node: SvgNode): void => {
       const { id } = node.attributes;
       if (id !== undefined && !this.byId.has(id)) this.byId.set(id, node);
@@ -79,71 +84,15 @@ class Reader {
       own[name] !== undefined && !/^(none|normal|auto)$/.test(own[name].trim());
     if (set('mask') || set('filter') || set('mix-blend-mode')) return { ...here, veiled: true };
     if (!set('clip-path')) return here;
-    const clip = this.clipRegion(own['clip-path'], node, here, 0);
+    const clip = this.clips.region(own['clip-path'], node, here);
     if (clip === null) return { ...here, veiled: true };
     return { ...here, clip: here.clip ? intersect(here.clip, clip) : clip };
-  }
-
-  /** Area of a clip path, mm; null where only a render can tell it. */
-  private clipRegion(value: string, node: SvgNode, here: Around, depth: number): Region | null {
-    const id = /^\s*url\(\s*['"]?#([^)'"\s]+)['"]?\s*\)\s*$/.exec(value)?.[1];
-    if (id === undefined || depth > 10) return null;
-    const path = this.byId.get(id);
-    // A clip path that is not there clips nothing, as the renderer has it.
-    if (path?.name !== 'clipPath') return [page(1e6)];
-    const own = this.styles.get(path) ?? {};
-    let matrix = multiply(here.matrix, readTransform(path.attributes.transform));
-    if (path.attributes.clipPathUnits === 'objectBoundingBox') {
-      if (!SHAPES.has(node.name)) return null;
-      const [left, top, right, bottom] = boundsOf(
-        readPathData(shapePath(node, here.viewport)).map((c) => flatten(c, 0.01)),
-      );
-      if (!(right > left) || !(bottom > top)) return null;
-      matrix = multiply(matrix, [right - left, 0, 0, bottom - top, left, top]);
-    }
-    let region: Region = [];
-    for (const child of path.children.filter(isElement)) {
-      const part = this.clipPart(child, { ...here, matrix, style: inherit(INITIAL, own) }, depth);
-      if (part === null) return null;
-      region = unite(region, part);
-    }
-    if (own['clip-path'] === undefined || own['clip-path'] === 'none') return region;
-    const outer = this.clipRegion(own['clip-path'], node, here, depth + 1);
-    return outer && intersect(region, outer);
-  }
-
-  private clipPart(node: SvgNode, around: Around, depth: number): Region | null {
-    const own = this.styles.get(node) ?? {};
-    if (own.display === 'none' || own.visibility === 'hidden') return [];
-    let matrix = multiply(around.matrix, readTransform(node.attributes.transform));
-    if (node.name === 'use') {
-      const target = this.byId.get(node.attributes.href?.slice(1) ?? '');
-      if (!target || depth > 10) return null;
-      matrix = multiply(matrix, this.useOffset(node, around.viewport));
-      return this.clipPart(target, { ...around, matrix }, depth + 1);
-    }
-    if (!SHAPES.has(node.name)) return null;
-    const rule = inherit(around.style, own)['clip-rule'] === 'evenodd' ? 'evenodd' : 'nonzero';
-    const curves = readPathData(shapePath(node, around.viewport), matrix);
-    const region = regionOf(
-      curves.map((curve) => flatten(curve, this.toleranceMm)),
-      rule,
-    );
-    if (own['clip-path'] === undefined || own['clip-path'] === 'none') return region;
-    const further = this.clipRegion(own['clip-path'], node, { ...around, matrix }, depth + 1);
-    return further && intersect(region, further);
-  }
-
-  private useOffset(node: SvgNode, viewport: Viewport): Matrix {
-    const x = readLength(node.attributes.x, viewport, 'x') ?? 0;
-    const y = readLength(node.attributes.y, viewport, 'y') ?? 0;
-    return [1, 0, 0, 1, x, y];
   }
 
   private readUse(node: SvgNode, here: Around): void {
     const target = this.byId.get(node.attributes.href?.slice(1) ?? '');
     if (!target) return;
-    const moved = { ...here, matrix: multiply(here.matrix, this.useOffset(node, here.viewport)) };
+    const moved = { ...here, matrix: multiply(here.matrix, useOffset(node, here.viewport)) };
     if (target.name !== 'symbol' && target.name !== 'svg') {
       this.read(target, moved);
       return;
@@ -164,10 +113,7 @@ class Reader {
     const [wide, high] = [readLength(width, here.viewport, 'x'), readLength(height, here.viewport, 'y')];
     const [w, h] = [wide ?? here.viewport[0], high ?? here.viewport[1]];
     if (!(w > 0) || !(h > 0)) return;
-    const offset =
-      node.name === 'svg'
-        ? this.useOffset(node, here.viewport)
-        : multiply([1, 0, 0, 1, 0, 0], [1, 0, 0, 1, 0, 0]);
+    const offset = node.name === 'svg' ? useOffset(node, here.viewport) : IDENTITY;
     const placed = multiply(here.matrix, offset);
     const box = readViewBox(node.attributes.viewBox);
     const inner = box ? viewportMatrix(box, w, h, node.attributes.preserveAspectRatio ?? '') : null;
@@ -202,27 +148,7 @@ class Reader {
       const [r, g, b, alpha] = paint.colour;
       return effectOf([r, g, b, alpha * opacity], this.dividingLstar);
     }
-    return this.gradientEffect(paint.id, opacity, 0);
-  }
-
-  /** A gradient whose stops all do the same does that everywhere. */
-  private gradientEffect(id: string, opacity: number, depth: number): Painting['effect'] | 'none' {
-    const server = this.byId.get(id);
-    if (!server || !/Gradient$/.test(server.name) || depth > 20) return 'unknown';
-    const stops = server.children.filter(isElement).filter((child) => child.name === 'stop');
-    if (stops.length === 0) {
-      const next = server.attributes.href?.slice(1);
-      return next === undefined ? 'unknown' : this.gradientEffect(next, opacity, depth + 1);
-    }
-    const effects = new Set<Effect>(
-      stops.map((stop) => {
-        const style = this.styles.get(stop) ?? {};
-        const colour = readColour(style['stop-color'] ?? 'black') ?? [0, 0, 0, 1];
-        const alpha = colour[3] * opacityOf(style['stop-opacity']) * opacity;
-        return effectOf([colour[0], colour[1], colour[2], alpha], this.dividingLstar);
-      }),
-    );
-    return effects.size === 1 ? [...effects][0] : 'unknown';
+    return gradientEffect(paint.id, opacity, this.dividingLstar, this.byId, this.styles);
   }
 
   private readShape(node: SvgNode, here: Around): void {
@@ -288,13 +214,6 @@ class Reader {
     return curves.flatMap((curve) => dash(flatten(curve, tolerance), curve.closed, dashes, offset));
   }
 }
-
-const page = (side: number): readonly (readonly [number, number])[] => [
-  [-side, -side],
-  [side, -side],
-  [side, side],
-  [-side, side],
-];
 
 function pickSize({ attributes }: SvgNode): { width?: string; height?: string } {
   const { width, height } = attributes;

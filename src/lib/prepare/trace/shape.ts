@@ -1,5 +1,6 @@
 import { lengthPx } from '../svg/physical-size';
 import type { SvgNode } from '../svg/parse-xml';
+import type { Matrix } from './curve';
 
 /** Width and height that percentages refer to, in user units. */
 export type Viewport = readonly [width: number, height: number];
@@ -16,6 +17,18 @@ export function readLength(
   const whole =
     along === 'x' ? width : along === 'y' ? height : Math.sqrt((width * width + height * height) / 2);
   return (Number(percent[1]) / 100) * whole;
+}
+
+/** The shift of a `use` or nested `svg` by its x and y. */
+export function useOffset({ attributes }: SvgNode, viewport: Viewport): Matrix {
+  return [
+    1,
+    0,
+    0,
+    1,
+    readLength(attributes.x, viewport, 'x') ?? 0,
+    readLength(attributes.y, viewport, 'y') ?? 0,
+  ];
 }
 
 function rectangle(x: number, y: number, w: number, h: number, rx: number, ry: number): string {

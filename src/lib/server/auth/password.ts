@@ -16,7 +16,9 @@ function derive(password: string, salt: Buffer, { ln, r, p }: Cost, bytes: numbe
   const options: ScryptOptions = { N: 2 ** ln, r, p, maxmem: 256 * 2 ** ln * r };
   // The same letters may be typed in composed or decomposed form.
   return new Promise((resolve, reject) => {
-    scrypt(password.normalize('NFKC'), salt, bytes, options, (error, key) => (error ? reject(error) : resolve(key)));
+    scrypt(password.normalize('NFKC'), salt, bytes, options, (error, key) =>
+      error ? reject(error) : resolve(key),
+    );
   });
 }
 
@@ -30,7 +32,10 @@ export async function hashPassword(password: string, cost: Cost = presentCost())
 function parse(stored: string): { cost: Cost; salt: Buffer; key: Buffer } {
   const [scheme, ln, r, p, salt, key] = stored.split('$');
   const cost = { ln: Number(ln), r: Number(r), p: Number(p) };
-  const sound = scheme === 'scrypt' && Object.values(cost).every((part) => Number.isInteger(part) && part > 0) && cost.ln <= 20;
+  const sound =
+    scheme === 'scrypt' &&
+    Object.values(cost).every((part) => Number.isInteger(part) && part > 0) &&
+    cost.ln <= 20;
   if (!sound || !salt || !key) throw new Error('expected a stored scrypt hash, got something else');
   return { cost, salt: Buffer.from(salt, 'base64url'), key: Buffer.from(key, 'base64url') };
 }

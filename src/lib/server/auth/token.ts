@@ -4,7 +4,11 @@ import { AppError } from '../errors';
 import { dropExpiredTokens, dropTokens, insertToken, spendToken, type TokenKind } from '../tables/tokens';
 
 const HOUR_MS = 60 * 60 * 1000;
-const LIFE_MS: Record<TokenKind, number> = { confirm: 7 * 24 * HOUR_MS, invitation: 7 * 24 * HOUR_MS, reset: HOUR_MS };
+const LIFE_MS: Record<TokenKind, number> = {
+  confirm: 7 * 24 * HOUR_MS,
+  invitation: 7 * 24 * HOUR_MS,
+  reset: HOUR_MS,
+};
 
 // A token is 192 random bits, so a plain hash hides it as well as a slow one would.
 const hashOf = (token: string): string => createHash('sha256').update(token).digest('hex');

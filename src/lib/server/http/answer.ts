@@ -6,13 +6,20 @@ import { isDiskFull } from '../storage/disk-full';
 const SAFE_HEADERS = { 'cache-control': 'no-store', 'x-content-type-options': 'nosniff' };
 
 export function json(value: unknown, status = 200, mediaType = 'application/json'): Response {
-  return new Response(JSON.stringify(value), { status, headers: { ...SAFE_HEADERS, 'content-type': `${mediaType}; charset=utf-8` } });
+  return new Response(JSON.stringify(value), {
+    status,
+    headers: { ...SAFE_HEADERS, 'content-type': `${mediaType}; charset=utf-8` },
+  });
 }
 
 function refusalFor(error: unknown): AppError {
   if (error instanceof AppError) return error;
   if (error instanceof ArtworkError) {
-    return new AppError(error.code === 'too-large' ? 'artwork-too-large' : 'artwork-refused', { detail: error.message }, { cause: error });
+    return new AppError(
+      error.code === 'too-large' ? 'artwork-too-large' : 'artwork-refused',
+      { detail: error.message },
+      { cause: error },
+    );
   }
   if (isDiskFull(error)) return new AppError('no-room', {}, { cause: error });
   log.error({ err: error }, 'an endpoint broke');

@@ -8,7 +8,15 @@ import { json, problem } from './answer';
 import { requireOwnOrigin } from './own-origin';
 import { parseGiven } from './parse-given';
 import { readJson, requireMediaType } from './read-body';
-import { NUMERIC_PARAMETERS, routeOf, type AnswerOf, type BodyOf, type ParametersOf, type PersonOf, type QueryOf } from './routing';
+import {
+  NUMERIC_PARAMETERS,
+  routeOf,
+  type AnswerOf,
+  type BodyOf,
+  type ParametersOf,
+  type PersonOf,
+  type QueryOf,
+} from './routing';
 import { socketAddress } from './socket-address';
 
 /** What a handler is given: everything parsed, the person authorised for the route. */
@@ -59,7 +67,10 @@ async function limit(route: Route, person: Person | null, body: unknown, address
  * An endpoint of the list: it checks where the request came from, who asks and what was sent, calls the handler, and
  * gives its answer cut to the listed schema. Whose object it is, is decided by the use case.
  */
-export function endpoint<K extends RouteKey>(key: K, handle: (call: Call<K>) => AnswerOf<K> | Promise<AnswerOf<K>>): APIRoute {
+export function endpoint<K extends RouteKey>(
+  key: K,
+  handle: (call: Call<K>) => AnswerOf<K> | Promise<AnswerOf<K>>,
+): APIRoute {
   const route = routeOf(key);
   return async ({ request, params: raw, locals, url }) => {
     try {
@@ -71,7 +82,16 @@ export function endpoint<K extends RouteKey>(key: K, handle: (call: Call<K>) => 
       const query = route.query && parseGiven(route.query, Object.fromEntries(url.searchParams));
       const body = await readBody(route, request);
       await limit(route, person, body, address);
-      const call = { person, params, body, query, request, url, address, sessionId: locals.sessionId ?? null } as Call<K>;
+      const call = {
+        person,
+        params,
+        body,
+        query,
+        request,
+        url,
+        address,
+        sessionId: locals.sessionId ?? null,
+      } as Call<K>;
       const answer: unknown = await handle(call);
       if (answer instanceof Response) return answer;
       return json(route.response ? route.response.parse(answer) : answer);

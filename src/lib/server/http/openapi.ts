@@ -5,12 +5,20 @@ import { NUMERIC_PARAMETERS } from './routing';
 type Json = Record<string, unknown>;
 
 const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Json => {
-  const { $schema: _, ...rest } = z.toJSONSchema(schema, { io, target: 'draft-2020-12', unrepresentable: 'any' });
+  const { $schema: _, ...rest } = z.toJSONSchema(schema, {
+    io,
+    target: 'draft-2020-12',
+    unrepresentable: 'any',
+  });
   return rest;
 };
 
 const whoMay = (access: Access): string =>
-  access === 'anyone' ? 'Anyone.' : access === 'signed-in' ? 'Anyone signed in.' : `For: ${access.join(', ')}.`;
+  access === 'anyone'
+    ? 'Anyone.'
+    : access === 'signed-in'
+      ? 'Anyone signed in.'
+      : `For: ${access.join(', ')}.`;
 
 function pathParameters(path: string): Json[] {
   return [...path.matchAll(/:(\w+)/g)].map(([, name]) => ({
@@ -23,16 +31,33 @@ function pathParameters(path: string): Json[] {
 
 function queryParameters(query: z.ZodType | undefined): Json[] {
   if (!query) return [];
-  const { properties = {}, required = [] } = schemaOf(query, 'input') as { properties?: Json; required?: string[] };
-  return Object.entries(properties).map(([name, schema]) => ({ name, in: 'query', required: required.includes(name), schema }));
+  const { properties = {}, required = [] } = schemaOf(query, 'input') as {
+    properties?: Json;
+    required?: string[];
+  };
+  return Object.entries(properties).map(([name, schema]) => ({
+    name,
+    in: 'query',
+    required: required.includes(name),
+    schema,
+  }));
 }
 
 function requestBody(route: Route): Json | undefined {
   if (route.upload) {
-    const schema = { type: 'object', properties: { artwork: { type: 'string', format: 'binary' } }, required: ['artwork'] };
+    const schema = {
+      type: 'object',
+      properties: { artwork: { type: 'string', format: 'binary' } },
+      required: ['artwork'],
+    };
     return { required: true, content: { 'multipart/form-data': { schema } } };
   }
-  return route.body && { required: true, content: { 'application/json': { schema: schemaOf(route.body, 'input') } } };
+  return (
+    route.body && {
+      required: true,
+      content: { 'application/json': { schema: schemaOf(route.body, 'input') } },
+    }
+  );
 }
 
 function responses(route: Route): Json {
@@ -41,7 +66,10 @@ function responses(route: Route): Json {
     : { [route.media ?? 'application/octet-stream']: {} };
   return {
     200: { description: 'Done', content },
-    default: { description: 'Refused: what happened, why, what to do', content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } } },
+    default: {
+      description: 'Refused: what happened, why, what to do',
+      content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } },
+    },
   };
 }
 
@@ -65,7 +93,11 @@ export function openApi(): Json {
   }
   return {
     openapi: '3.1.0',
-    info: { title: 'Umberline', version: '1', description: 'Artwork preflight and preparation for a laser-engraving shop.' },
+    info: {
+      title: 'Umberline',
+      version: '1',
+      description: 'Artwork preflight and preparation for a laser-engraving shop.',
+    },
     paths,
     components: {
       schemas: { Problem: schemaOf(refusalSchema, 'output') },

@@ -11,6 +11,7 @@ function complaints(error: z.ZodError): Record<string, string> {
 /** Reads what a person sent through its schema; throws `malformed` with a complaint for every field that does not fit. */
 export function parseGiven<T extends z.ZodType>(schema: T, given: unknown): z.output<T> {
   const parsed = schema.safeParse(given);
-  if (!parsed.success) throw new AppError('malformed', { fields: complaints(parsed.error) }, { cause: parsed.error });
+  if (!parsed.success)
+    throw new AppError('malformed', { fields: complaints(parsed.error) }, { cause: parsed.error });
   return parsed.data;
 }

@@ -3,7 +3,8 @@ import { AppError } from '../errors';
 /** No JSON body of ours comes near this. */
 export const LONGEST_JSON_BYTES = 256 * 1024;
 
-const mediaType = (request: Request): string => (request.headers.get('content-type') ?? '').split(';')[0].trim().toLowerCase();
+const mediaType = (request: Request): string =>
+  (request.headers.get('content-type') ?? '').split(';')[0].trim().toLowerCase();
 
 export function requireMediaType(request: Request, wanted: string): void {
   if (mediaType(request) === wanted) return;
@@ -15,7 +16,8 @@ async function readCapped(body: ReadableStream<Uint8Array>, longest: number): Pr
   let length = 0;
   for await (const part of body as unknown as AsyncIterable<Uint8Array>) {
     length += part.byteLength;
-    if (length > longest) throw new AppError('too-large', { detail: `A form may have ${longest / 1024} KiB.` });
+    if (length > longest)
+      throw new AppError('too-large', { detail: `A form may have ${longest / 1024} KiB.` });
     parts.push(part);
   }
   return Buffer.concat(parts);

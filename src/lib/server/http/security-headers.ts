@@ -28,7 +28,8 @@ function pagePolicy(scripts: string): string {
   ].join('; ');
 }
 
-const scriptSources = (policy: string): string | undefined => /(?:^|;)\s*script-src ([^;]+)/.exec(policy)?.[1].trim();
+const scriptSources = (policy: string): string | undefined =>
+  /(?:^|;)\s*script-src ([^;]+)/.exec(policy)?.[1].trim();
 
 export interface HeaderCircumstances {
   signedIn: boolean;
@@ -41,14 +42,22 @@ function setPolicy(headers: Headers, isPage: boolean, developing: boolean): void
   if (!isPage) {
     if (!headers.has('content-security-policy')) headers.set('content-security-policy', NO_PAGE);
   } else if (developing) headers.delete('content-security-policy');
-  else headers.set('content-security-policy', pagePolicy(scriptSources(headers.get('content-security-policy') ?? '') ?? "'self'"));
+  else
+    headers.set(
+      'content-security-policy',
+      pagePolicy(scriptSources(headers.get('content-security-policy') ?? '') ?? "'self'"),
+    );
 }
 
 /** Sets what every answer carries; a stricter policy that an endpoint set itself stays. */
-export function setSecurityHeaders(headers: Headers, { signedIn, https, developing }: HeaderCircumstances): void {
+export function setSecurityHeaders(
+  headers: Headers,
+  { signedIn, https, developing }: HeaderCircumstances,
+): void {
   const isPage = (headers.get('content-type') ?? '').startsWith('text/html');
   for (const [name, value] of Object.entries(EVERYWHERE)) headers.set(name, value);
   if (https) headers.set('strict-transport-security', 'max-age=31536000');
-  if (isPage && !headers.has('cache-control')) headers.set('cache-control', signedIn ? 'no-store' : 'no-cache');
+  if (isPage && !headers.has('cache-control'))
+    headers.set('cache-control', signedIn ? 'no-store' : 'no-cache');
   setPolicy(headers, isPage, developing);
 }

@@ -15,8 +15,13 @@ async function sendOne(mail: MailRow): Promise<void> {
   } catch (error) {
     const problem = error instanceof Error ? error.message : String(error);
     const gaveUp = mail.attempts >= MOST_ATTEMPTS;
-    log[gaveUp ? 'error' : 'warn']({ mail: mail.id, kind: mail.kind, attempts: mail.attempts, problem }, 'a mail did not go out');
-    await withWrite((trx) => markMailTrouble(trx, mail.id, problem, gaveUp ? new Date().toISOString() : null));
+    log[gaveUp ? 'error' : 'warn'](
+      { mail: mail.id, kind: mail.kind, attempts: mail.attempts, problem },
+      'a mail did not go out',
+    );
+    await withWrite((trx) =>
+      markMailTrouble(trx, mail.id, problem, gaveUp ? new Date().toISOString() : null),
+    );
     return;
   }
   await withWrite((trx) => markMailSent(trx, mail.id, new Date().toISOString()));
@@ -27,7 +32,9 @@ export async function deliverDue(): Promise<void> {
   for (;;) {
     const now = Date.now();
     const mail = await withWrite((trx) =>
-      claimMail(trx, new Date(now).toISOString(), (attempts) => new Date(now + waitMs(attempts)).toISOString()),
+      claimMail(trx, new Date(now).toISOString(), (attempts) =>
+        new Date(now + waitMs(attempts)).toISOString(),
+      ),
     );
     if (!mail) return;
     await sendOne(mail);

@@ -26,7 +26,8 @@ const escape = (words: string): string =>
   words.replace(/[&<>"']/g, (character) => `&#${character.charCodeAt(0)};`);
 
 const FONT = "font-family:Manrope,'Segoe UI',Helvetica,Arial,sans-serif";
-const paragraph = (words: string, style: string): string => `<p style="margin:0 0 16px;${style}">${escape(words).replace(/\n/g, '<br>')}</p>`;
+const paragraph = (words: string, style: string): string =>
+  `<p style="margin:0 0 16px;${style}">${escape(words).replace(/\n/g, '<br>')}</p>`;
 
 /** Long ticks every eighth: the rule under the plate, drawn with table cells that every mail reader keeps. */
 function rule(): string {

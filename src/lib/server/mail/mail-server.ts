@@ -13,7 +13,9 @@ async function connect(): Promise<Transporter> {
 }
 
 /** Hands a mail to the shop's mail server, or to the in-process one where none is set. */
-export async function sendByMailServer(mail: Pick<MailRow, 'message_id' | 'recipient' | 'subject' | 'text' | 'html'>): Promise<void> {
+export async function sendByMailServer(
+  mail: Pick<MailRow, 'message_id' | 'recipient' | 'subject' | 'text' | 'html'>,
+): Promise<void> {
   const transport = await (slot.umberlineMailServer ??= connect());
   await transport.sendMail({
     messageId: mail.message_id,

@@ -23,7 +23,12 @@ function split(source: string): Part {
 }
 
 const quotedPrintable = (words: string): Buffer =>
-  Buffer.from(words.replace(/=\r?\n/g, '').replace(/=([0-9A-F]{2})/gi, (_, hex: string) => String.fromCharCode(parseInt(hex, 16))), 'latin1');
+  Buffer.from(
+    words
+      .replace(/=\r?\n/g, '')
+      .replace(/=([0-9A-F]{2})/gi, (_, hex: string) => String.fromCharCode(parseInt(hex, 16))),
+    'latin1',
+  );
 
 function content({ headers, body }: Part): string {
   const encoding = (headers.get('content-transfer-encoding') ?? '7bit').toLowerCase();
@@ -45,7 +50,9 @@ function header(words: string): string {
 function leaves(part: Part): Part[] {
   const boundary = /boundary="?([^";]+)"?/i.exec(part.headers.get('content-type') ?? '')?.[1];
   if (!boundary) return [part];
-  const pieces = `\n${part.body}`.split(new RegExp(`\\r?\\n--${boundary.replace(/[.*+?^${}()|[\]\\]/g, '\\$&')}(?:--)?[ \\t]*(?=\\r?\\n|$)`));
+  const pieces = `\n${part.body}`.split(
+    new RegExp(`\\r?\\n--${boundary.replace(/[.*+?^${}()|[\]\\]/g, '\\$&')}(?:--)?[ \\t]*(?=\\r?\\n|$)`),
+  );
   return pieces.slice(1, -1).flatMap((piece) => leaves(split(piece.replace(/^\r?\n/, ''))));
 }
 
@@ -54,7 +61,9 @@ export function readMime(source: Buffer): ReadMail {
   const whole = split(source.toString('latin1'));
   const parts = leaves(whole);
   const typed = (type: string): string => {
-    const found = parts.find(({ headers }) => (headers.get('content-type') ?? 'text/plain').toLowerCase().startsWith(type));
+    const found = parts.find(({ headers }) =>
+      (headers.get('content-type') ?? 'text/plain').toLowerCase().startsWith(type),
+    );
     return found ? content(found).replaceAll('\r\n', '\n') : '';
   };
   return {

@@ -75,6 +75,7 @@ export async function moveOrder(
     const order = await loadOrder(trx, row);
     const next = requireNextState(order, event, person);
     const facts = ruleFacts(order, person.role, preparationId);
+    if (event === 'submit' && !facts.customerConfirmed) throw new AppError('address-not-confirmed');
     requireNothingWaits(waitsFor(event, facts));
     const { change = {}, words, also } = decide(order, facts);
     const state = change.state ?? next;

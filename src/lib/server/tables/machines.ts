@@ -97,7 +97,9 @@ export async function allMachines(db: Db): Promise<MachineView[]> {
 
 export async function machineById(db: Db, id: number): Promise<MachineView | null> {
   const row = await db<MachineRow>('machines').where({ id }).first();
-  return row ? view(row, await db<SpotPresetRow>('spot_presets').where({ machine_id: id }).orderBy('id')) : null;
+  return row
+    ? view(row, await db<SpotPresetRow>('spot_presets').where({ machine_id: id }).orderBy('id'))
+    : null;
 }
 
 export async function insertMachine(db: Db, machine: Machine): Promise<number> {
@@ -105,7 +107,12 @@ export async function insertMachine(db: Db, machine: Machine): Promise<number> {
   return id;
 }
 
-export async function updateMachine(db: Db, id: number, machine: Machine, retiredAt: string | null): Promise<void> {
+export async function updateMachine(
+  db: Db,
+  id: number,
+  machine: Machine,
+  retiredAt: string | null,
+): Promise<void> {
   await db('machines')
     .where({ id })
     .update({ ...columns(machine), retired_at: retiredAt });
@@ -117,7 +124,12 @@ export async function insertSpotPreset(db: Db, machineId: number, preset: SpotPr
 }
 
 /** False when the machine has no such preset. */
-export async function updateSpotPreset(db: Db, machineId: number, id: number, preset: SpotPreset): Promise<boolean> {
+export async function updateSpotPreset(
+  db: Db,
+  machineId: number,
+  id: number,
+  preset: SpotPreset,
+): Promise<boolean> {
   return (await db('spot_presets').where({ id, machine_id: machineId }).update(presetColumns(preset))) === 1;
 }
 

@@ -16,18 +16,30 @@ export interface MailRow {
   created_at: string;
 }
 
-export async function insertMail(db: Db, row: Pick<MailRow, 'message_id' | 'kind' | 'recipient' | 'subject' | 'text' | 'html' | 'created_at' | 'due_at'>): Promise<void> {
+export async function insertMail(
+  db: Db,
+  row: Pick<
+    MailRow,
+    'message_id' | 'kind' | 'recipient' | 'subject' | 'text' | 'html' | 'created_at' | 'due_at'
+  >,
+): Promise<void> {
   await db('mails').insert(row);
 }
 
 const waiting = (db: Db) => db<MailRow>('mails').whereNull('sent_at').whereNull('failed_at');
 
 /** Takes the next mail that is due and puts its next attempt off, so that nobody else takes it meanwhile. */
-export async function claimMail(db: Db, now: string, nextAttempt: (attempts: number) => string): Promise<MailRow | null> {
+export async function claimMail(
+  db: Db,
+  now: string,
+  nextAttempt: (attempts: number) => string,
+): Promise<MailRow | null> {
   const next = await waiting(db).where('due_at', '<=', now).orderBy('id').first();
   if (!next) return null;
   const attempts = next.attempts + 1;
-  await db('mails').where({ id: next.id }).update({ attempts, due_at: nextAttempt(attempts) });
+  await db('mails')
+    .where({ id: next.id })
+    .update({ attempts, due_at: nextAttempt(attempts) });
   return { ...next, attempts };
 }
 
@@ -37,7 +49,12 @@ export async function markMailSent(db: Db, id: number, at: string): Promise<void
 }
 
 /** Notes why an attempt failed; a time in `failedAt` gives the mail up. */
-export async function markMailTrouble(db: Db, id: number, problem: string, failedAt: string | null): Promise<void> {
+export async function markMailTrouble(
+  db: Db,
+  id: number,
+  problem: string,
+  failedAt: string | null,
+): Promise<void> {
   await db('mails').where({ id }).update({ problem, failed_at: failedAt });
 }
 

@@ -13,7 +13,10 @@ export interface PersonRow {
   token_version: number;
   created_at: string;
 }
-export type NewPerson = Pick<PersonRow, 'email' | 'name' | 'role' | 'password_hash' | 'confirmed_at' | 'created_at'>;
+export type NewPerson = Pick<
+  PersonRow,
+  'email' | 'name' | 'role' | 'password_hash' | 'confirmed_at' | 'created_at'
+>;
 
 export async function personById(db: Db, id: number): Promise<PersonRow | null> {
   return (await db<PersonRow>('people').where({ id }).first()) ?? null;
@@ -53,7 +56,9 @@ export async function confirmPerson(db: Db, id: number, at: string): Promise<voi
 
 /** Sets a password and, with it, ends every session that was opened under the old one. */
 export async function setPassword(db: Db, id: number, password_hash: string): Promise<void> {
-  await db('people').where({ id }).update({ password_hash, token_version: db.raw('token_version + 1') });
+  await db('people')
+    .where({ id })
+    .update({ password_hash, token_version: db.raw('token_version + 1') });
 }
 
 export async function raiseTokenVersion(db: Db, id: number): Promise<void> {
@@ -64,7 +69,12 @@ export async function raiseTokenVersion(db: Db, id: number): Promise<void> {
  * Changes role and disabled state unless that would leave no admin who can sign in. The condition is part of the update,
  * so that two changes at once cannot each rely on the other's admin. False: nothing was changed.
  */
-export async function changeStanding(db: Db, id: number, role: Role, disabledAt: string | null): Promise<boolean> {
+export async function changeStanding(
+  db: Db,
+  id: number,
+  role: Role,
+  disabledAt: string | null,
+): Promise<boolean> {
   const changed = await db('people')
     .where({ id })
     .whereRaw(
@@ -81,13 +91,19 @@ export async function changeStanding(db: Db, id: number, role: Role, disabledAt:
 
 /** Whether anybody can sign in as an admin. */
 export async function hasAdmin(db: Db): Promise<boolean> {
-  const found = await db('people').where({ role: 'admin', disabled_at: null }).whereNotNull('password_hash').first('id');
+  const found = await db('people')
+    .where({ role: 'admin', disabled_at: null })
+    .whereNotNull('password_hash')
+    .first('id');
   return found !== undefined;
 }
 
 /** Addresses of those who hold a role and can sign in. */
 export async function peopleInRole(db: Db, role: Role): Promise<PersonRow[]> {
-  return db<PersonRow>('people').where({ role, disabled_at: null }).whereNotNull('password_hash').orderBy('id');
+  return db<PersonRow>('people')
+    .where({ role, disabled_at: null })
+    .whereNotNull('password_hash')
+    .orderBy('id');
 }
 
 /** Stores the same password at a new cost, unless it was changed meanwhile; sessions go on. */

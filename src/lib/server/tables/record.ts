@@ -23,13 +23,23 @@ export async function recordOf(db: Db, subject: string): Promise<RecordRow[]> {
 }
 
 /** One page of the record, newest first, with the number of rows that match in all. */
-export async function searchRecord(db: Db, words: string, page: number, perPage: number): Promise<{ rows: RecordRow[]; total: number }> {
+export async function searchRecord(
+  db: Db,
+  words: string,
+  page: number,
+  perPage: number,
+): Promise<{ rows: RecordRow[]; total: number }> {
   const matching = db<RecordRow>('record').where((where) => {
     if (words === '') return;
     const like = `%${words.replace(/[\\%_]/g, '\\$&')}%`;
-    for (const column of ['by', 'event', 'subject', 'words']) where.orWhereRaw('?? like ? escape ?', [column, like, '\\']);
+    for (const column of ['by', 'event', 'subject', 'words'])
+      where.orWhereRaw('?? like ? escape ?', [column, like, '\\']);
   });
   const counted = await matching.clone().count<{ count: number }[]>({ count: '*' });
-  const rows = await matching.clone().orderBy('id', 'desc').limit(perPage).offset((page - 1) * perPage);
+  const rows = await matching
+    .clone()
+    .orderBy('id', 'desc')
+    .limit(perPage)
+    .offset((page - 1) * perPage);
   return { rows, total: counted[0].count };
 }

@@ -15,7 +15,12 @@ export async function insertSession(db: Db, session: SessionRow): Promise<void> 
 }
 
 /** The person of a live session, when the account is enabled and its token version is still the session's. */
-export async function personOfSession(db: Db, sessionId: string, personId: number, now: string): Promise<PersonRow | null> {
+export async function personOfSession(
+  db: Db,
+  sessionId: string,
+  personId: number,
+  now: string,
+): Promise<PersonRow | null> {
   const row = await db<PersonRow>('people')
     .join('sessions', 'sessions.person_id', 'people.id')
     .where({ 'sessions.id': sessionId, 'people.id': personId })

@@ -17,7 +17,11 @@ export async function insertToken(db: Db, token: Omit<TokenRow, 'used_at'>): Pro
 
 /** Spends a token: the person it was made for, or null when it is unknown, used, replaced or too old. */
 export async function spendToken(db: Db, kind: TokenKind, hash: string, now: string): Promise<number | null> {
-  const spent = await db<TokenRow>('tokens').where({ hash, kind }).whereNull('used_at').where('expires_at', '>', now).update({ used_at: now });
+  const spent = await db<TokenRow>('tokens')
+    .where({ hash, kind })
+    .whereNull('used_at')
+    .where('expires_at', '>', now)
+    .update({ used_at: now });
   if (spent === 0) return null;
   const row = await db<TokenRow>('tokens').where({ hash }).first();
   return row?.person_id ?? null;
@@ -29,7 +33,11 @@ export async function dropTokens(db: Db, personId: number, kind: TokenKind): Pro
 }
 
 export async function hasOpenToken(db: Db, personId: number, kind: TokenKind, now: string): Promise<boolean> {
-  const found = await db('tokens').where({ person_id: personId, kind }).whereNull('used_at').where('expires_at', '>', now).first('hash');
+  const found = await db('tokens')
+    .where({ person_id: personId, kind })
+    .whereNull('used_at')
+    .where('expires_at', '>', now)
+    .first('hash');
   return found !== undefined;
 }
 

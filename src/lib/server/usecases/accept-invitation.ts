@@ -6,7 +6,11 @@ import { AppError } from '../errors';
 import { confirmPerson, personById, renamePerson, setPassword } from '../tables/people';
 
 /** Lets an invited person in under a name and a password of their own; the mailed link proves the address. */
-export async function acceptInvitation(fields: { token: string; name: string; password: string }): Promise<void> {
+export async function acceptInvitation(fields: {
+  token: string;
+  name: string;
+  password: string;
+}): Promise<void> {
   const passwordHash = await hashPassword(fields.password);
   await withWrite(async (trx) => {
     const id = await useToken(trx, 'invitation', fields.token);
@@ -15,6 +19,11 @@ export async function acceptInvitation(fields: { token: string; name: string; pa
     await renamePerson(trx, id, fields.name);
     await setPassword(trx, id, passwordHash);
     await confirmPerson(trx, id, new Date().toISOString());
-    await audit(trx, { by: { id, name: fields.name }, event: 'accept-invitation', subject: `person ${id}`, words: `as ${person.role}` });
+    await audit(trx, {
+      by: { id, name: fields.name },
+      event: 'accept-invitation',
+      subject: `person ${id}`,
+      words: `as ${person.role}`,
+    });
   });
 }

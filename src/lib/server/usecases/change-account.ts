@@ -14,12 +14,20 @@ export interface AccountChange {
 
 async function requirePassword(by: Person, password: string | undefined): Promise<void> {
   const row = await personById(database(), by.id);
-  const right = row?.password_hash && password !== undefined && (await passwordMatches(password, row.password_hash));
-  if (!right) throw new AppError('wrong-password', { fields: { currentPassword: 'This is not the present password.' } });
+  const right =
+    row?.password_hash && password !== undefined && (await passwordMatches(password, row.password_hash));
+  if (!right)
+    throw new AppError('wrong-password', {
+      fields: { currentPassword: 'This is not the present password.' },
+    });
 }
 
 /** Changes the own name or password; a new password needs the present one and ends every session but the one at hand. */
-export async function changeAccount(by: Person, change: AccountChange, sessionId: string | null): Promise<void> {
+export async function changeAccount(
+  by: Person,
+  change: AccountChange,
+  sessionId: string | null,
+): Promise<void> {
   if (change.newPassword !== undefined) await requirePassword(by, change.currentPassword);
   const passwordHash = change.newPassword === undefined ? null : await hashPassword(change.newPassword);
   await withWrite(async (trx) => {

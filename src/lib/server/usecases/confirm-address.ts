@@ -21,6 +21,10 @@ export async function resendConfirmation(by: Person): Promise<void> {
   await withWrite(async (trx) => {
     const person = await personById(trx, by.id);
     if (!person || person.confirmed_at !== null) return;
-    await queueMail(trx, person.email, confirmMail({ name: person.name, token: await makeToken(trx, person.id, 'confirm') }));
+    await queueMail(
+      trx,
+      person.email,
+      confirmMail({ name: person.name, token: await makeToken(trx, person.id, 'confirm') }),
+    );
   });
 }

@@ -12,7 +12,14 @@ async function invitedId(trx: Transaction, email: string, role: Role): Promise<n
   const known = await personByEmail(trx, email);
   if (!known) {
     const at = new Date().toISOString();
-    return insertPerson(trx, { email, name: email, role, password_hash: null, confirmed_at: null, created_at: at });
+    return insertPerson(trx, {
+      email,
+      name: email,
+      role,
+      password_hash: null,
+      confirmed_at: null,
+      created_at: at,
+    });
   }
   const stillInvited = known.role !== 'customer' && known.password_hash === null;
   if (!stillInvited) throw new AppError('address-known');
@@ -25,7 +32,11 @@ export async function invitePerson(by: Person, email: string, role: Role): Promi
   if (role === 'customer') throw new AppError('customers-register');
   await withWrite(async (trx) => {
     const id = await invitedId(trx, email, role);
-    await queueMail(trx, email, invitationMail({ role, invitedBy: by.name, token: await makeToken(trx, id, 'invitation') }));
+    await queueMail(
+      trx,
+      email,
+      invitationMail({ role, invitedBy: by.name, token: await makeToken(trx, id, 'invitation') }),
+    );
     await audit(trx, { by, event: 'invite', subject: `person ${id}`, words: `${email} as ${role}` });
   });
 }

@@ -22,14 +22,26 @@ export async function addMachine(by: Person, machine: Machine): Promise<MachineV
 }
 
 /** Changes a machine, or takes it out of service; what was prepared for it keeps the figures it was prepared with. */
-export async function changeMachine(by: Person, id: number, change: Partial<Machine> & { retired?: boolean }): Promise<MachineView> {
+export async function changeMachine(
+  by: Person,
+  id: number,
+  change: Partial<Machine> & { retired?: boolean },
+): Promise<MachineView> {
   return withWrite(async (trx) => {
     const before = await requireMachine(trx, id);
     const { retired = before.retired, ...changed } = { ...before, ...change };
     const machine = machineSchema.parse(changed);
-    await refuseOn('SQLITE_CONSTRAINT_UNIQUE', 'name-taken', () => updateMachine(trx, id, machine, retired ? new Date().toISOString() : null));
-    const event = retired === before.retired ? 'change-machine' : retired ? 'retire-machine' : 'bring-machine-back';
-    await audit(trx, { by, event, subject: `machine ${id}`, words: `${machine.name}: ${Object.keys(change).join(', ')}` });
+    await refuseOn('SQLITE_CONSTRAINT_UNIQUE', 'name-taken', () =>
+      updateMachine(trx, id, machine, retired ? new Date().toISOString() : null),
+    );
+    const event =
+      retired === before.retired ? 'change-machine' : retired ? 'retire-machine' : 'bring-machine-back';
+    await audit(trx, {
+      by,
+      event,
+      subject: `machine ${id}`,
+      words: `${machine.name}: ${Object.keys(change).join(', ')}`,
+    });
     return requireMachine(trx, id);
   });
 }

@@ -16,5 +16,12 @@ export interface OutboxMail {
 export async function listOutbox(): Promise<OutboxMail[]> {
   if (!config().isDemo) throw new AppError('not-found');
   const rows = await readOutbox(database());
-  return rows.map(({ id, received_at, recipient, subject, text, html }) => ({ id, at: received_at, to: recipient, subject, text, html }));
+  return rows.map(({ id, received_at, recipient, subject, text, html }) => ({
+    id,
+    at: received_at,
+    to: recipient,
+    subject,
+    text,
+    html,
+  }));
 }

@@ -9,7 +9,14 @@ import { insertPerson, personByEmail } from '../tables/people';
 
 async function enter(trx: Transaction, name: string, email: string, passwordHash: string): Promise<void> {
   const at = new Date().toISOString();
-  const id = await insertPerson(trx, { name, email, role: 'customer', password_hash: passwordHash, confirmed_at: null, created_at: at });
+  const id = await insertPerson(trx, {
+    name,
+    email,
+    role: 'customer',
+    password_hash: passwordHash,
+    confirmed_at: null,
+    created_at: at,
+  });
   await audit(trx, { by: { id, name }, event: 'register', subject: `person ${id}` });
   await queueMail(trx, email, confirmMail({ name, token: await makeToken(trx, id, 'confirm') }));
 }
@@ -18,7 +25,11 @@ async function enter(trx: Transaction, name: string, email: string, passwordHash
  * Registers a customer. A known address looks the same from outside, takes as long, changes nothing, and writes to the
  * address's owner instead.
  */
-export async function registerCustomer(fields: { name: string; email: string; password: string }): Promise<void> {
+export async function registerCustomer(fields: {
+  name: string;
+  email: string;
+  password: string;
+}): Promise<void> {
   const passwordHash = await hashPassword(fields.password);
   await withWrite(async (trx) => {
     const known = await personByEmail(trx, fields.email);

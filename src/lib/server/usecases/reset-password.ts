@@ -14,7 +14,11 @@ export async function askForReset(email: string): Promise<void> {
     if (!person || person.disabled_at !== null) return;
     // Staff who were invited choose their name with the invitation; a reset must not take its place.
     if (person.password_hash === null && person.role !== 'customer') return;
-    await queueMail(trx, person.email, resetMail({ name: person.name, token: await makeToken(trx, person.id, 'reset') }));
+    await queueMail(
+      trx,
+      person.email,
+      resetMail({ name: person.name, token: await makeToken(trx, person.id, 'reset') }),
+    );
   });
 }
 

@@ -4,4 +4,6 @@ import { listMachines } from '../../../lib/server/usecases/list-machines';
 
 export const GET = endpoint('GET /api/machines', async () => ({ machines: await listMachines() }));
 
-export const POST = endpoint('POST /api/machines', async ({ person, body }) => ({ machine: await addMachine(person, body) }));
+export const POST = endpoint('POST /api/machines', async ({ person, body }) => ({
+  machine: await addMachine(person, body),
+}));

@@ -4,4 +4,6 @@ import { listStocks } from '../../../lib/server/usecases/list-stocks';
 
 export const GET = endpoint('GET /api/stocks', async () => ({ stocks: await listStocks() }));
 
-export const POST = endpoint('POST /api/stocks', async ({ person, body }) => ({ stock: await addStock(person, body) }));
+export const POST = endpoint('POST /api/stocks', async ({ person, body }) => ({
+  stock: await addStock(person, body),
+}));

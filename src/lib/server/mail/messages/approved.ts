@@ -2,7 +2,9 @@ import { dress, type Mail } from '../letter';
 import { orderPlate, orderUrl, type AboutOrder } from './about-order';
 
 /** Confirms to the customer what was approved, by whom and how. */
-export function approvedMail(order: AboutOrder & { approvedBy: string; how: string; manifestSha256: string }): Mail {
+export function approvedMail(
+  order: AboutOrder & { approvedBy: string; how: string; manifestSha256: string },
+): Mail {
   return dress('approved', {
     subject: `Approved: order ${order.orderNumber}`,
     greeting: order.name,

@@ -11,6 +11,7 @@ export function confirmMail(to: { name: string; token: string }): Mail {
     sentence: 'Confirm this address, so that we can write to you about your orders.',
     paragraphs: ['You can draw up an order at once; it can be sent in when the address is confirmed.'],
     action: { label: 'Confirm this address', url: siteUrl('/confirm', { token: to.token }) },
-    margin: 'The link works once, for seven days. If you did not register, leave this mail; nothing will happen.',
+    margin:
+      'The link works once, for seven days. If you did not register, leave this mail; nothing will happen.',
   });
 }

@@ -9,7 +9,9 @@ export function knownAddressMail(to: { name: string }): Mail {
     greeting: to.name,
     plate: { title: config().shopName, line: 'Your account' },
     sentence: 'Somebody, perhaps you, tried to register with this address, which already has an account.',
-    paragraphs: ['Nothing was changed. Sign in as before, or set a new password if you have lost the old one.'],
+    paragraphs: [
+      'Nothing was changed. Sign in as before, or set a new password if you have lost the old one.',
+    ],
     action: { label: 'Set a new password', url: siteUrl('/forgotten') },
     margin: 'If it was not you, leave this mail: whoever tried was told nothing about your account.',
   });

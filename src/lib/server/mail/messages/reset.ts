@@ -11,6 +11,7 @@ export function resetMail(to: { name: string; token: string }): Mail {
     sentence: 'You asked for a new password. Set it with the link below.',
     paragraphs: ['Setting it signs you out everywhere else.'],
     action: { label: 'Set a new password', url: siteUrl('/reset', { token: to.token }) },
-    margin: 'The link works once, for one hour. If you did not ask, leave this mail; your password stays as it is.',
+    margin:
+      'The link works once, for one hour. If you did not ask, leave this mail; your password stays as it is.',
   });
 }
