@@ -54,6 +54,8 @@ async function order(page: Page, story: Story): Promise<string> {
   await part(page, 'Look').getByText('Umber', { exact: true }).click();
   await part(page, 'The order').getByLabel('What you call it').fill(story.title);
   await page.getByText('I have the right to have it engraved').click();
+  await page.getByText('Still missing:').waitFor({ state: 'hidden' });
+  await page.getByText(/^Draft U-\d+ is kept/).waitFor();
   await expectAccessible(page);
   await press(page, 'Submit order');
   await page.waitForURL(/\/orders\/U-\d+\b/, { timeout: 60_000 });
@@ -65,7 +67,7 @@ async function order(page: Page, story: Story): Promise<string> {
 async function prepareAndSendProof(page: Page, number: string): Promise<void> {
   await page.goto(`/queue/${number}`);
   await press(page, 'Take this order');
-  await press(page, 'power and speed not yet typed');
+  await page.getByRole('button', { name: /^power and speed not yet typed/ }).click();
   const figures = page.getByRole('dialog');
   await fillLength(figures, 'Power in %', '40');
   await figures.getByLabel(/^Speed in/).fill('90');
