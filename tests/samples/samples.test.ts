@@ -1,11 +1,12 @@
-import { readdirSync, readFileSync } from 'node:fs';
+import { mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
 import path from 'node:path';
-import { describe, expect, test } from 'vitest';
+import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { z } from 'zod';
 import { DRAWINGS } from '../../samples/drawings';
 import { PICTURES } from '../../samples/pictures';
 import { findingIdSchema, severitySchema } from '../../src/lib/preflight/finding';
-import { checkReportSchema } from '../../src/lib/prepare/report';
+import { reportSchema } from '../../src/lib/prepare/report';
 import { treatmentSchema } from '../../src/lib/prepare/settings';
 import { ROOT, runLine } from '../cli/run-line';
 
@@ -19,6 +20,7 @@ const expectedSchema = z.record(
     status: z.union([z.literal(0), z.literal(1), z.literal(3)]),
     /** every finding and its severity; absent where the file cannot be read */
     findings: z.partialRecord(findingIdSchema, severitySchema).optional(),
+    /** the suggested one, which it is then prepared by */
     treatment: treatmentSchema.optional(),
     /** placed width and height, mm */
     size: z.tuple([z.number(), z.number()]).optional(),
@@ -40,14 +42,25 @@ test.each(Object.keys(DRAWINGS))('%s is what its script draws', (name) => {
   expect(readFileSync(path.join(FOLDER, name), 'utf8')).toBe(DRAWINGS[name]());
 });
 
-describe('what is found in each', () => {
-  test.each(Object.entries(expected))('%s', async (name, { args, status, findings, treatment, size, soundWidthMm }) => {
-    const outcome = await runLine('check', path.join(FOLDER, name), '--spot', '0.07x0.11', '--json', ...args);
+let scratch = '';
+beforeAll(() => {
+  scratch = mkdtempSync(path.join(tmpdir(), 'umberline-samples-'));
+});
+afterAll(() => rmSync(scratch, { recursive: true, force: true }));
+
+describe('what is found in each, and what comes out', () => {
+  test.each(Object.entries(expected))('%s', async (name, { args, status, findings, treatment = 'solid', size, soundWidthMm }) => {
+    const out = path.join(scratch, name);
+    // A coarse pitch makes small files; widths are held against the spot all the same.
+    const line = ['--spot', '0.07x0.11', '--pitch-mm', '0.25', '--formats', 'png', '--treatment', treatment, '--json', ...args];
+    const outcome = await runLine('prepare', path.join(FOLDER, name), '--out', out, ...line);
     expect(outcome.status, outcome.stderr).toBe(status);
     if (status === 3) return;
-    const report = checkReportSchema.parse(JSON.parse(outcome.stdout));
+    const report = reportSchema.parse(JSON.parse(outcome.stdout));
     expect(Object.fromEntries(report.findings.map(({ id, severity }) => [id, severity]))).toEqual(findings);
-    if (treatment) expect(report.artwork.suggestedTreatment).toBe(treatment);
+    expect(report.artwork.suggestedTreatment).toBe(treatment);
+    const written = treatment === 'linework' ? ['.json', '.json', '.pdf', '.svg'] : ['.json', '.json', '.png'];
+    expect(readdirSync(out).map(path.extname).sort()).toEqual(written);
     if (size) {
       expect(report.widthMm).toBeCloseTo(size[0], 2);
       expect(report.heightMm).toBeCloseTo(size[1], 2);

@@ -26,6 +26,10 @@ describe('drawn parts', () => {
   });
 });
 
+test('ink that is not quite black and paper that is not quite white are no tints', () => {
+  expect(surveyTones(field(256, 128, (x) => (x < 128 ? 215 : 40))).tintShare).toBe(0);
+});
+
 describe('tonal parts', () => {
   test.each([
     ['a ramp from bare to full', (x: number) => Math.round(x / 2)],

@@ -11,6 +11,10 @@ const TONAL = 3;
 const BARE = 32;
 const FULL = 223;
 
+/** Mean coverage 0–255 between which a flat block is a tint; beyond, it is paper that is not quite white or ink not quite black. */
+const LIGHTEST_TINT = 56;
+const DARKEST_TINT = 184;
+
 /** What each part of a picture is made of. */
 export interface ToneSurvey {
   columns: number;
@@ -18,7 +22,7 @@ export interface ToneSurvey {
   /** one byte a block: 1 where it belongs to a photograph or a gradient */
   tonal: Uint8Array;
   tonalShare: number;
-  /** share of blocks that are one flat grey, 0–1 */
+  /** share of blocks that are one flat grey between ink and paper, 0–1 */
   tintShare: number;
   /** number of pixels by coverage, 256 entries */
   histogram: Uint32Array;
@@ -118,7 +122,7 @@ export function surveyTones(field: Field): ToneSurvey {
   let [tones, tints] = [0, 0];
   for (let n = 0; n < kinds.length; n++) {
     if (tonal[n]) tones++;
-    else if (kinds[n] === TINT) tints++;
+    else if (kinds[n] === TINT && means[n] >= LIGHTEST_TINT && means[n] <= DARKEST_TINT) tints++;
   }
   return { columns, rows, tonal, tonalShare: tones / kinds.length, tintShare: tints / kinds.length, histogram };
 }
