@@ -22,6 +22,7 @@ import { ArtworkVersions, OrderFacts } from './OrderFacts';
 import { Prepare } from './Prepare';
 import { PreparationFacts } from './PreparationFacts';
 import { standingOf } from './standing';
+import { isUnderWay } from './task-state';
 import { Steps } from './Steps';
 import { useDesign } from './use-design';
 import { Waive } from './Waive';
@@ -58,6 +59,11 @@ function startingDesign(order: OrderView, machines: readonly MachineView[]): Des
 /** The state that an order on hold or cancelled had reached, from its history. */
 function reachedState(order: OrderView) {
   return [...order.history].reverse().find((entry) => entry.to === order.state)?.from ?? null;
+}
+
+function clearWords(isChecked: boolean, isChecking: boolean): string {
+  if (isChecking) return 'Notes follow once it is checked.';
+  return isChecked ? 'Nothing to note on this artwork.' : 'It has not been checked yet.';
 }
 
 function Head({ order }: { order: OrderView }) {
@@ -172,7 +178,7 @@ function LoadedWork({
           pitchMm={finished?.report?.settings.scan.linePitchMm ?? design?.scan.linePitchMm ?? 0.1}
           findings={findings ?? []}
           resultKey={finished?.key ?? null}
-          clear={findings ? 'Nothing to note on this artwork.' : 'No notes until it is checked.'}
+          clear={clearWords(findings !== null, isUnderWay(artwork.task))}
           before={
             <>
               <h2>Notes</h2>

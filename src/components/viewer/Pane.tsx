@@ -24,12 +24,17 @@ interface Props {
   onSize?: (frame: FrameSize) => void;
 }
 
-/** Whether the prepared raster itself is drawn: its picture holds fewer pixels than the screen now shows. */
+/**
+ * Whether the prepared raster itself is drawn: where the screen shows more than its picture holds. A turned raster's
+ * picture is drawn upright, so its own pixels are drawn as soon as they can be told apart.
+ */
 export function needsDetail(layer: PaneLayer, view: View, plate: PlateSize, ratio: number): boolean {
   const { picture, image } = layer;
   if (!picture.detail || !image.image) return false;
   const held = image.image.naturalWidth / plate.widthMm;
-  return held < 1 / picture.detail.xPitchMm && view.pxPerMm * ratio > held;
+  const own = 1 / picture.detail.xPitchMm;
+  const shown = view.pxPerMm * ratio;
+  return picture.detail.angleDeg === 0 ? held < own && shown > held : shown > own;
 }
 
 function paint(canvas: HTMLCanvasElement, { layers, view, frame, plate, laid }: Props): void {
