@@ -44,7 +44,7 @@ export async function carryOneOrder({ base, people, artwork, treatment, screen =
       placement: { datum: 'centre', xMm: 0, yMm: 0, quarterTurns: 0, fixture: '' },
     },
   });
-  order = await as.customer.orderWhen(
+  await as.customer.orderWhen(
     order.number,
     (item) => latest(item)?.task.state === 'done' && Math.abs((latest(item).check?.widthMm ?? 0) - artwork.widthMm) < 0.01,
     'the check of the artwork',
