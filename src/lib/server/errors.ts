@@ -18,7 +18,6 @@ export const REFUSALS = {
   'address-not-confirmed': { status: 403, title: 'Your address is not confirmed yet.', detail: 'We write to you about your order, so the address must be right.', action: 'Open the link in the mail we sent, or have it sent again.' },
   'cross-site': { status: 403, title: 'This request came from another site.', detail: 'Changes are taken from our own pages only.', action: 'Open the page here and try again.' },
   'not-found': { status: 404, title: 'There is nothing here.', detail: 'The address is wrong, or the thing is not yours to see.', action: 'Check the address, or start from your orders.' },
-  'wrong-method': { status: 405, title: 'This address does not take that request.', detail: 'It answers to other methods.', action: 'Use the site’s own pages.' },
   'malformed': { status: 422, title: 'Something in the form does not fit.', detail: 'The marked fields could not be read.', action: 'Correct them and send again.' },
   'unreadable-body': { status: 400, title: 'The request could not be read.', detail: 'Its body is not well-formed JSON.', action: 'Reload the page and try again.' },
   'too-large': { status: 413, title: 'That is too large.', detail: 'It is over the limit for this address.', action: 'Send less, or a smaller file.' },

@@ -189,6 +189,14 @@ describe('a session', () => {
     }
   });
 
+  it('is none when the cookie was sealed under another secret, or is no cookie of ours', async () => {
+    for (const value of ['', 'nonsense', 'eyJhbGciOiJkaXIifQ..a.b.c']) {
+      const other = new Visitor();
+      other.cookies.set('authjs.session-token', value);
+      expect(await other.person()).toBeNull();
+    }
+  });
+
   it('of one person does not speak for another', async () => {
     const other = await addPerson('admin');
     const [row] = await database()('sessions').where({ person_id: mira.id });

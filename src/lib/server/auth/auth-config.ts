@@ -1,4 +1,4 @@
-import { CredentialsSignin } from '@auth/core/errors';
+import { CredentialsSignin, JWTSessionError, MissingCSRF } from '@auth/core/errors';
 import Credentials from '@auth/core/providers/credentials';
 import type { FullAuthConfig } from 'auth-astro/src/config';
 import { z } from 'zod';
@@ -22,6 +22,9 @@ declare module '@auth/core/jwt' {
     opened?: Opened;
   }
 }
+
+/** What visitors bring about themselves: a wrong password, a form without its token, a cookie of another secret. */
+const VISITORS_OWN = [CredentialsSignin, MissingCSRF, JWTSessionError];
 
 const credentialsSchema = z.object({ email: z.email().max(254), password: z.string().min(1).max(200) });
 
@@ -68,8 +71,7 @@ export function authConfig(secret: string): FullAuthConfig {
     },
     logger: {
       error(error) {
-        // A wrong password is everyday; it is counted, not logged.
-        if (!(error instanceof CredentialsSignin)) log.error({ err: error }, 'sign-in broke');
+        log[VISITORS_OWN.some((kind) => error instanceof kind) ? 'debug' : 'error']({ err: error }, 'sign-in');
       },
       warn: (code) => log.debug({ code }, 'sign-in'),
       debug: () => undefined,
