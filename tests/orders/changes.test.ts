@@ -8,7 +8,15 @@ const SIZE: OrderPatch = { widthMm: 50 };
 const NOTE: OrderPatch = { notes: 'ring twice', dueOn: '2027-01-08', title: undefined };
 const OPEN: readonly OrderState[] = ['draft', 'submitted', 'in-preparation'];
 const CLOSED: readonly OrderState[] = ['finished', 'handed-over', 'cancelled'];
-const HOLDABLE: readonly OrderState[] = ['draft', 'submitted', 'in-preparation', 'passed', 'proof-sent', 'approved', 'released'];
+const HOLDABLE: readonly OrderState[] = [
+  'draft',
+  'submitted',
+  'in-preparation',
+  'passed',
+  'proof-sent',
+  'approved',
+  'released',
+];
 
 describe('changing an order', () => {
   it.each(ORDER_STATES.filter((state) => state !== 'on-hold'))('%s', (state) => {
@@ -21,14 +29,31 @@ describe('changing an order', () => {
     }
   });
 
-  it.each(HOLDABLE)('on hold from %s is as it was there for a designer, and closed to the customer', (former) => {
-    expect(changeRefusal(SIZE, 'on-hold', former, 'designer')).toBe(changeRefusal(SIZE, former, null, 'designer'));
-    expect(changeRefusal(SIZE, 'on-hold', former, 'customer')).not.toBeNull();
-  });
+  it.each(HOLDABLE)(
+    'on hold from %s is as it was there for a designer, and closed to the customer',
+    (former) => {
+      expect(changeRefusal(SIZE, 'on-hold', former, 'designer')).toBe(
+        changeRefusal(SIZE, former, null, 'designer'),
+      );
+      expect(changeRefusal(SIZE, 'on-hold', former, 'customer')).not.toBeNull();
+    },
+  );
 
   it.each<[OrderPatch, boolean]>([
     [{}, false],
-    [{ title: 'x', quantity: 3, dueOn: '2027-02-01', notes: 'y', shadeLstar: 40, route: 'paint-fill', use: 'outdoors', withoutProof: true }, false],
+    [
+      {
+        title: 'x',
+        quantity: 3,
+        dueOn: '2027-02-01',
+        notes: 'y',
+        shadeLstar: 40,
+        route: 'paint-fill',
+        use: 'outdoors',
+        withoutProof: true,
+      },
+      false,
+    ],
     [{ widthMm: 61 }, true],
     [{ heightMm: null }, true],
     [{ blank: blank({ widthMm: 101 }) }, true],

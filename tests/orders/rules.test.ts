@@ -1,5 +1,13 @@
 import { describe, expect, it } from 'vitest';
-import { approvalRefusal, checklistRefusal, holdOnSubmit, openBlockers, waitsFor, waiverRefusal, type RuleFacts } from '@/lib/orders/rules';
+import {
+  approvalRefusal,
+  checklistRefusal,
+  holdOnSubmit,
+  openBlockers,
+  waitsFor,
+  waiverRefusal,
+  type RuleFacts,
+} from '@/lib/orders/rules';
 import { ORDER_EVENTS } from '@/lib/orders/state';
 import type { Finding } from '@/lib/preflight/finding';
 import { settingsSchema, type Settings } from '@/lib/prepare/settings';
@@ -8,15 +16,40 @@ import { CHECKLIST } from '@/lib/orders/checklist';
 import { blank, fields } from './order-fixture';
 
 const stock: Stock = {
-  name: 'Birch plywood', species: 'birch', thicknessMm: 4, finish: '', direction: 'darkens', groundColour: '#e3c9a0', groundLstar: 82,
-  markColour: '#3b2414', markLstar: 20, cautions: [], forbidden: false, routes: ['bare-burn', 'darkening-wash'], notes: '',
+  name: 'Birch plywood',
+  species: 'birch',
+  thicknessMm: 4,
+  finish: '',
+  direction: 'darkens',
+  groundColour: '#e3c9a0',
+  groundLstar: 82,
+  markColour: '#3b2414',
+  markLstar: 20,
+  cautions: [],
+  forbidden: false,
+  routes: ['bare-burn', 'darkening-wash'],
+  notes: '',
 };
 const hairline: Finding = {
-  id: 'hairline', severity: 'blocker', title: 'Hairlines', count: 1, places: [], minMm: 0.02, limitMm: 0.07, measured: null, advice: '', waivable: true,
+  id: 'hairline',
+  severity: 'blocker',
+  title: 'Hairlines',
+  count: 1,
+  places: [],
+  minMm: 0.02,
+  limitMm: 0.07,
+  measured: null,
+  advice: '',
+  waivable: true,
 };
 const outside: Finding = { ...hairline, id: 'outside', title: 'Outside the bed', waivable: false };
 const settings: Settings = settingsSchema.parse({
-  widthMm: 60, heightMm: 40, spot: { widthMm: 0.07, heightMm: 0.11 }, treatment: 'solid', tone: {}, label: 'U-1001',
+  widthMm: 60,
+  heightMm: 40,
+  spot: { widthMm: 0.07, heightMm: 0.11 },
+  treatment: 'solid',
+  tone: {},
+  label: 'U-1001',
   scan: { directionDeg: 0, linePitchMm: 0.11, alongPitchMm: 0.11 },
   recipe: { powerPercent: 30, speedMmPerS: 100, perpendicular: null, focusOffsetMm: 0, typedBy: 'Dora' },
 });
@@ -31,13 +64,22 @@ const ready = (over: Partial<RuleFacts> = {}): RuleFacts => ({
   formerState: null,
   artwork: { version: 1, taskState: 'done', findings: [] },
   currentSettings: settings,
-  preparation: { id: 1, artworkVersion: 1, taskState: 'done', manifestSha256: MANIFEST, settings: structuredClone(settings), findings: [] },
+  preparation: {
+    id: 1,
+    artworkVersion: 1,
+    taskState: 'done',
+    manifestSha256: MANIFEST,
+    settings: structuredClone(settings),
+    findings: [],
+  },
   waivers: [],
   passedManifestSha256: MANIFEST,
   approvedManifestSha256: MANIFEST,
   ...over,
 });
-const prepared = (over: Partial<NonNullable<RuleFacts['preparation']>>): Partial<RuleFacts> => ({ preparation: { ...ready().preparation!, ...over } });
+const prepared = (over: Partial<NonNullable<RuleFacts['preparation']>>): Partial<RuleFacts> => ({
+  preparation: { ...ready().preparation!, ...over },
+});
 
 describe('rules', () => {
   it.each(ORDER_EVENTS)('nothing stands in the way of %s when everything is in order', (event) => {
@@ -48,22 +90,53 @@ describe('rules', () => {
     ['address not confirmed', { customerConfirmed: false }, /not confirmed/],
     ['no artwork', { artwork: null }, /no artwork/],
     ['check waiting', { artwork: { version: 1, taskState: 'waiting', findings: [] } }, /still being checked/],
-    ['check running', { artwork: { version: 1, taskState: 'running', findings: null } }, /still being checked/],
+    [
+      'check running',
+      { artwork: { version: 1, taskState: 'running', findings: null } },
+      /still being checked/,
+    ],
     ['check failed', { artwork: { version: 1, taskState: 'failed', findings: [] } }, /could not be checked/],
     ['never checked', { artwork: { version: 1, taskState: 'done', findings: null } }, /still being checked/],
     ['no width', { fields: fields({ widthMm: null }) }, /size is missing/],
     ['no height', { fields: fields({ heightMm: null }) }, /size is missing/],
     ['no blank', { fields: fields({ blank: null }), stock: null }, /blank is missing/],
     ['no stock', { stock: null }, /stock is missing/],
-    ['own blank, not identified', { stock: null, fields: fields({ blank: blank({ source: 'customer', stockId: null }) }) }, null],
-    ['own blank of forbidden stock', { stock: { ...stock, forbidden: true }, fields: fields({ blank: blank({ source: 'customer' }) }) }, /never engraved/],
+    [
+      'own blank, not identified',
+      { stock: null, fields: fields({ blank: blank({ source: 'customer', stockId: null }) }) },
+      null,
+    ],
+    [
+      'own blank of forbidden stock',
+      { stock: { ...stock, forbidden: true }, fields: fields({ blank: blank({ source: 'customer' }) }) },
+      /never engraved/,
+    ],
     ['forbidden stock', { stock: { ...stock, forbidden: true } }, /never engraved/],
-    ['a route that the stock has not', { fields: fields({ route: 'paint-fill' }) }, /not offered on Birch plywood/],
+    [
+      'a route that the stock has not',
+      { fields: fields({ route: 'paint-fill' }) },
+      /not offered on Birch plywood/,
+    ],
     ['wash for food', { fields: fields({ route: 'darkening-wash', use: 'touches-food' }) }, /not food-safe/],
     ['wash for a child', { fields: fields({ route: 'darkening-wash', use: 'for-a-child' }) }, /child/],
     ['wash outdoors', { fields: fields({ route: 'darkening-wash', use: 'outdoors' }) }, null],
-    ['wash without its sheet', { fields: fields({ route: 'darkening-wash' }), washOffered: false }, /safety data sheet/],
-    ['wash for food on an unidentified own blank', { stock: null, fields: fields({ blank: blank({ source: 'customer', stockId: null }), route: 'darkening-wash', use: 'touches-food' }) }, /not food-safe/],
+    [
+      'wash without its sheet',
+      { fields: fields({ route: 'darkening-wash' }), washOffered: false },
+      /safety data sheet/,
+    ],
+    [
+      'wash for food on an unidentified own blank',
+      {
+        stock: null,
+        fields: fields({
+          blank: blank({ source: 'customer', stockId: null }),
+          route: 'darkening-wash',
+          use: 'touches-food',
+        }),
+      },
+      /not food-safe/,
+    ],
     ['blockers', { artwork: { version: 1, taskState: 'done', findings: [hairline, outside] } }, null],
   ])('submit with %s', (_, over, words) => {
     const said = waitsFor('submit', ready(over));
@@ -89,14 +162,41 @@ describe('rules', () => {
     ['newer artwork', { artwork: { version: 2, taskState: 'done', findings: [] } }, /newer artwork/],
     ['another size since', { currentSettings: { ...settings, widthMm: 61 } }, /changed since/],
     ['choices missing since', { currentSettings: null }, /changed since/],
-    ['no recipe', { ...prepared({ settings: { ...settings, recipe: null } }), currentSettings: { ...settings, recipe: null } }, /Power and speed/],
+    [
+      'no recipe',
+      {
+        ...prepared({ settings: { ...settings, recipe: null } }),
+        currentSettings: { ...settings, recipe: null },
+      },
+      /Power and speed/,
+    ],
     ['a blocker', prepared({ findings: [hairline] }), /Blockers are open: hairlines\..*waive/],
-    ['two blockers', prepared({ findings: [outside, hairline] }), /outside the bed and one more\. Mend the artwork or change the size\.$/],
+    [
+      'two blockers',
+      prepared({ findings: [outside, hairline] }),
+      /outside the bed and one more\. Mend the artwork or change the size\.$/,
+    ],
     ['four blockers', prepared({ findings: [hairline, outside, hairline, outside] }), /and 3 more/],
-    ['a blocker waived', { ...prepared({ findings: [hairline] }), waivers: [{ findingId: 'hairline', artworkVersion: 1 }] }, null],
-    ['a blocker waived for older artwork', { ...prepared({ findings: [hairline] }), waivers: [{ findingId: 'hairline', artworkVersion: 0 }] }, /open/],
-    ['another finding waived', { ...prepared({ findings: [hairline] }), waivers: [{ findingId: 'fill-in', artworkVersion: 1 }] }, /open/],
-    ['what cannot be waived, waived', { ...prepared({ findings: [outside] }), waivers: [{ findingId: 'outside', artworkVersion: 1 }] }, /open/],
+    [
+      'a blocker waived',
+      { ...prepared({ findings: [hairline] }), waivers: [{ findingId: 'hairline', artworkVersion: 1 }] },
+      null,
+    ],
+    [
+      'a blocker waived for older artwork',
+      { ...prepared({ findings: [hairline] }), waivers: [{ findingId: 'hairline', artworkVersion: 0 }] },
+      /open/,
+    ],
+    [
+      'another finding waived',
+      { ...prepared({ findings: [hairline] }), waivers: [{ findingId: 'fill-in', artworkVersion: 1 }] },
+      /open/,
+    ],
+    [
+      'what cannot be waived, waived',
+      { ...prepared({ findings: [outside] }), waivers: [{ findingId: 'outside', artworkVersion: 1 }] },
+      /open/,
+    ],
     ['a warning', prepared({ findings: [{ ...hairline, severity: 'warning' }] }), null],
   ])('pass with %s', (_, over, words) => {
     const said = waitsFor('pass', ready(over));
@@ -108,8 +208,16 @@ describe('rules', () => {
     ['no stock', { stock: null }, /stock is missing/],
     ['stock forbidden since', { stock: { ...stock, forbidden: true } }, /never engraved/],
     ['a route withdrawn since', { stock: { ...stock, routes: [] } }, /not offered/],
-    ['a use that the route is not for', { fields: fields({ route: 'darkening-wash', use: 'for-a-child' }) }, /child/],
-    ['the sheet of the wash gone since', { fields: fields({ route: 'darkening-wash' }), washOffered: false }, /safety data sheet/],
+    [
+      'a use that the route is not for',
+      { fields: fields({ route: 'darkening-wash', use: 'for-a-child' }) },
+      /child/,
+    ],
+    [
+      'the sheet of the wash gone since',
+      { fields: fields({ route: 'darkening-wash' }), washOffered: false },
+      /safety data sheet/,
+    ],
     ['another manifest approved', { approvedManifestSha256: 'b'.repeat(64) }, /not what was passed/],
     ['no pass', { passedManifestSha256: null, approvedManifestSha256: null }, /not what was passed/],
   ])('release with %s', (_, over, words) => {
@@ -119,12 +227,16 @@ describe('rules', () => {
   });
 
   it('goes without a proof only where the customer agreed', () => {
-    expect(waitsFor('approve-without-proof', ready({ fields: fields({ withoutProof: false }) }))).toMatch(/wants a proof/);
+    expect(waitsFor('approve-without-proof', ready({ fields: fields({ withoutProof: false }) }))).toMatch(
+      /wants a proof/,
+    );
   });
 
   it('resumes an own blank only once it is identified, except as a draft', () => {
     const own = { stock: null, fields: fields({ blank: blank({ source: 'customer', stockId: null }) }) };
-    expect(waitsFor('resume', ready({ ...own, formerState: 'submitted' }))).toMatch(/what the customer’s blank is made of/);
+    expect(waitsFor('resume', ready({ ...own, formerState: 'submitted' }))).toMatch(
+      /what the customer’s blank is made of/,
+    );
     expect(waitsFor('resume', ready({ ...own, formerState: 'draft' }))).toBeNull();
   });
 
@@ -146,7 +258,9 @@ describe('rules', () => {
     expect(waiverRefusal('hairline', [hairline])).toBeNull();
     expect(waiverRefusal('outside', [hairline, outside])).toMatch(/cannot be waived/);
     expect(waiverRefusal('speck', [hairline])).toMatch(/no such finding/);
-    expect(waiverRefusal('hairline', [hairline, { ...hairline, waivable: false }])).toMatch(/cannot be waived/);
+    expect(waiverRefusal('hairline', [hairline, { ...hairline, waivable: false }])).toMatch(
+      /cannot be waived/,
+    );
   });
 
   it('lists open blockers in order and changes nothing', () => {

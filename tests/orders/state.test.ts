@@ -1,5 +1,15 @@
 import { describe, expect, it } from 'vitest';
-import { nextState, ORDER_EVENTS, ORDER_STATES, possibleEvents, roleSchema, VOIDING_EVENTS, type OrderEvent, type OrderState, type Role } from '@/lib/orders/state';
+import {
+  nextState,
+  ORDER_EVENTS,
+  ORDER_STATES,
+  possibleEvents,
+  roleSchema,
+  VOIDING_EVENTS,
+  type OrderEvent,
+  type OrderState,
+  type Role,
+} from '@/lib/orders/state';
 
 type Next = OrderState | 'former';
 const C: readonly Role[] = ['customer'];
@@ -11,23 +21,55 @@ const ALL: readonly Role[] = [...C, ...S];
 
 /** The life of an order, written a second time state by state: what is missing here must not happen. */
 const LIFE: Record<OrderState, Partial<Record<OrderEvent, [readonly Role[], Next]>>> = {
-  draft: { submit: [CD, 'submitted'], 'new-artwork': [CD, 'draft'], hold: [S, 'on-hold'], cancel: [ALL, 'cancelled'] },
-  submitted: { take: [D, 'in-preparation'], 'new-artwork': [CD, 'submitted'], hold: [S, 'on-hold'], cancel: [ALL, 'cancelled'] },
+  draft: {
+    submit: [CD, 'submitted'],
+    'new-artwork': [CD, 'draft'],
+    hold: [S, 'on-hold'],
+    cancel: [ALL, 'cancelled'],
+  },
+  submitted: {
+    take: [D, 'in-preparation'],
+    'new-artwork': [CD, 'submitted'],
+    hold: [S, 'on-hold'],
+    cancel: [ALL, 'cancelled'],
+  },
   'in-preparation': {
-    pass: [D, 'passed'], 'prepare-again': [D, 'in-preparation'], 'new-artwork': [CD, 'in-preparation'], hold: [S, 'on-hold'], cancel: [ALL, 'cancelled'],
+    pass: [D, 'passed'],
+    'prepare-again': [D, 'in-preparation'],
+    'new-artwork': [CD, 'in-preparation'],
+    hold: [S, 'on-hold'],
+    cancel: [ALL, 'cancelled'],
   },
   passed: {
-    'send-proof': [D, 'proof-sent'], 'approve-without-proof': [D, 'approved'], 'prepare-again': [D, 'in-preparation'], 'new-artwork': [CD, 'in-preparation'],
-    hold: [S, 'on-hold'], cancel: [ALL, 'cancelled'],
+    'send-proof': [D, 'proof-sent'],
+    'approve-without-proof': [D, 'approved'],
+    'prepare-again': [D, 'in-preparation'],
+    'new-artwork': [CD, 'in-preparation'],
+    hold: [S, 'on-hold'],
+    cancel: [ALL, 'cancelled'],
   },
   'proof-sent': {
-    approve: [CD, 'approved'], 'ask-for-changes': [CD, 'in-preparation'], 'prepare-again': [D, 'in-preparation'], 'new-artwork': [CD, 'in-preparation'],
-    hold: [S, 'on-hold'], cancel: [ALL, 'cancelled'],
+    approve: [CD, 'approved'],
+    'ask-for-changes': [CD, 'in-preparation'],
+    'prepare-again': [D, 'in-preparation'],
+    'new-artwork': [CD, 'in-preparation'],
+    hold: [S, 'on-hold'],
+    cancel: [ALL, 'cancelled'],
   },
-  approved: { release: [D, 'released'], 'prepare-again': [D, 'in-preparation'], 'new-artwork': [CD, 'in-preparation'], hold: [S, 'on-hold'], cancel: [S, 'cancelled'] },
+  approved: {
+    release: [D, 'released'],
+    'prepare-again': [D, 'in-preparation'],
+    'new-artwork': [CD, 'in-preparation'],
+    hold: [S, 'on-hold'],
+    cancel: [S, 'cancelled'],
+  },
   released: {
-    recall: [D, 'approved'], 'on-the-machine': [O, 'running'], 'prepare-again': [D, 'in-preparation'], 'new-artwork': [CD, 'in-preparation'],
-    hold: [S, 'on-hold'], cancel: [S, 'cancelled'],
+    recall: [D, 'approved'],
+    'on-the-machine': [O, 'running'],
+    'prepare-again': [D, 'in-preparation'],
+    'new-artwork': [CD, 'in-preparation'],
+    hold: [S, 'on-hold'],
+    cancel: [S, 'cancelled'],
   },
   running: { done: [O, 'finished'], spoiled: [O, 'released'] },
   finished: { 'hand-over': [S, 'handed-over'] },
@@ -36,7 +78,9 @@ const LIFE: Record<OrderState, Partial<Record<OrderEvent, [readonly Role[], Next
   cancelled: {},
 };
 
-const CASES = ORDER_STATES.flatMap((state) => ORDER_EVENTS.flatMap((event) => roleSchema.options.map((role) => ({ state, event, role }))));
+const CASES = ORDER_STATES.flatMap((state) =>
+  ORDER_EVENTS.flatMap((event) => roleSchema.options.map((role) => ({ state, event, role }))),
+);
 
 describe('the life of an order', () => {
   it('is tried in every state, for every event and every role', () => {
@@ -46,25 +90,32 @@ describe('the life of an order', () => {
   it.each(ORDER_STATES)('from %s leads where it should and nowhere else', (from) => {
     for (const { state, event, role } of CASES.filter((one) => one.state === from)) {
       const entry = LIFE[state][event];
-      expect(nextState(state, event, role), `${state} + ${event} by ${role}`).toBe(entry?.[0].includes(role) ? entry[1] : null);
+      expect(nextState(state, event, role), `${state} + ${event} by ${role}`).toBe(
+        entry?.[0].includes(role) ? entry[1] : null,
+      );
     }
   });
 
   it.each(roleSchema.options)('offers a %s exactly what would be carried out', (role) => {
     for (const state of ORDER_STATES) {
-      expect(possibleEvents(state, role)).toEqual(ORDER_EVENTS.filter((event) => nextState(state, event, role) !== null));
+      expect(possibleEvents(state, role)).toEqual(
+        ORDER_EVENTS.filter((event) => nextState(state, event, role) !== null),
+      );
     }
   });
 
   it('never lets a customer or an operator pass, and never lets anybody release what is not approved', () => {
     for (const { state, event, role } of CASES) {
-      if (event === 'pass' && (role === 'customer' || role === 'operator')) expect(nextState(state, event, role)).toBeNull();
+      if (event === 'pass' && (role === 'customer' || role === 'operator'))
+        expect(nextState(state, event, role)).toBeNull();
       if (event === 'release' && state !== 'approved') expect(nextState(state, event, role)).toBeNull();
     }
   });
 
   it('lets an admin do all that a designer and an operator may', () => {
-    for (const { state, event, role } of CASES.filter((one) => one.role === 'designer' || one.role === 'operator')) {
+    for (const { state, event, role } of CASES.filter(
+      (one) => one.role === 'designer' || one.role === 'operator',
+    )) {
       const next = nextState(state, event, role);
       if (next !== null) expect(nextState(state, event, 'admin')).toBe(next);
     }

@@ -10,10 +10,17 @@ const CLOSED: readonly OrderState[] = ['finished', 'handed-over', 'cancelled'];
  * Why a role may not change these fields of an order now, or null where it may.
  * @param formerState state that an order on hold returns to; null where it is not on hold
  */
-export function changeRefusal(patch: OrderPatch, state: OrderState, formerState: OrderState | null, role: Role): string | null {
+export function changeRefusal(
+  patch: OrderPatch,
+  state: OrderState,
+  formerState: OrderState | null,
+  role: Role,
+): string | null {
   const effective = state === 'on-hold' ? (formerState ?? 'draft') : state;
   if (role === 'customer') {
-    return state === 'draft' ? null : 'The order has been submitted. Ask the shop to change it, or cancel it and order again.';
+    return state === 'draft'
+      ? null
+      : 'The order has been submitted. Ask the shop to change it, or cancel it and order again.';
   }
   if (role === 'operator') return 'Orders are changed by a designer.';
   if (DESIGNER_STATES.includes(effective)) return null;

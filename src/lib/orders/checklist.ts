@@ -2,7 +2,10 @@
 export const CHECKLIST = [
   { id: 'material', words: 'The blank is the one on the ticket, and lies as drawn.' },
   { id: 'focus', words: 'File, power, speed, passes and focus are as on the ticket; nothing is rescaled.' },
-  { id: 'extraction', words: 'Covers are closed, extraction is on, eye protection and extinguisher are at hand.' },
+  {
+    id: 'extraction',
+    words: 'Covers are closed, extraction is on, eye protection and extinguisher are at hand.',
+  },
   { id: 'attended', words: 'I stay with the machine while it runs.' },
 ] as const;
 

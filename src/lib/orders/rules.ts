@@ -35,7 +35,11 @@ export interface RuleFacts {
   /** state that an order on hold returns to; null where it is not on hold */
   formerState: OrderState | null;
   /** newest artwork version with its check, or null */
-  artwork: { version: number; taskState: 'waiting' | 'running' | 'done' | 'failed'; findings: readonly Finding[] | null } | null;
+  artwork: {
+    version: number;
+    taskState: 'waiting' | 'running' | 'done' | 'failed';
+    findings: readonly Finding[] | null;
+  } | null;
   /** settings that a preparation would have now; null while choices are missing */
   currentSettings: Settings | null;
   /** preparation that was passed or is to be passed, or null */
@@ -46,13 +50,19 @@ export interface RuleFacts {
 }
 
 /** Blockers that no waiver of this artwork version covers; a waiver of what cannot be waived counts for nothing. */
-export function openBlockers(findings: readonly Finding[], waivers: readonly Waiver[], artworkVersion: number): Finding[] {
+export function openBlockers(
+  findings: readonly Finding[],
+  waivers: readonly Waiver[],
+  artworkVersion: number,
+): Finding[] {
   const waived = (finding: Finding): boolean =>
-    finding.waivable && waivers.some((w) => w.findingId === finding.id && w.artworkVersion === artworkVersion);
+    finding.waivable &&
+    waivers.some((w) => w.findingId === finding.id && w.artworkVersion === artworkVersion);
   return findings.filter((finding) => finding.severity === 'blocker' && !waived(finding));
 }
 
-const ownUnidentified = (facts: RuleFacts): boolean => facts.stock === null && facts.fields.blank?.source === 'customer';
+const ownUnidentified = (facts: RuleFacts): boolean =>
+  facts.stock === null && facts.fields.blank?.source === 'customer';
 
 /** Whether an order goes on hold as it is submitted, and why; null where it need not. */
 export function holdOnSubmit(facts: RuleFacts): string | null {
@@ -71,13 +81,18 @@ function stockRefusal({ fields, stock, washOffered }: RuleFacts): string | null 
 
 function submitWaits(facts: RuleFacts): string | null {
   const { artwork, fields } = facts;
-  if (!facts.customerConfirmed) return 'The e-mail address is not confirmed yet. Open the link in the mail that we sent.';
+  if (!facts.customerConfirmed)
+    return 'The e-mail address is not confirmed yet. Open the link in the mail that we sent.';
   if (!artwork) return 'There is no artwork yet. Add it first.';
-  if (artwork.taskState === 'failed') return 'The artwork could not be checked. Have it checked again, or send another file.';
-  if (artwork.taskState !== 'done' || !artwork.findings) return 'The artwork is still being checked. It takes a few seconds.';
-  if (fields.widthMm === null || fields.heightMm === null) return 'The size is missing. Say how wide the engraving shall be.';
+  if (artwork.taskState === 'failed')
+    return 'The artwork could not be checked. Have it checked again, or send another file.';
+  if (artwork.taskState !== 'done' || !artwork.findings)
+    return 'The artwork is still being checked. It takes a few seconds.';
+  if (fields.widthMm === null || fields.heightMm === null)
+    return 'The size is missing. Say how wide the engraving shall be.';
   if (!fields.blank) return 'The blank is missing. Say what is engraved and how big it is.';
-  if (!facts.stock && !ownUnidentified(facts)) return 'The stock is missing. Choose what the blank is made of.';
+  if (!facts.stock && !ownUnidentified(facts))
+    return 'The stock is missing. Choose what the blank is made of.';
   return stockRefusal(facts);
 }
 
@@ -89,10 +104,12 @@ function passWaits({ artwork, preparation, currentSettings, waivers }: RuleFacts
   if (!currentSettings || canonicalJson(currentSettings) !== canonicalJson(preparation.settings)) {
     return 'Size, blank or choices have changed since. Prepare again first.';
   }
-  if (!preparation.settings.recipe) return 'Power and speed are missing. Type them and prepare again, so that the operator need not ask.';
+  if (!preparation.settings.recipe)
+    return 'Power and speed are missing. Type them and prepare again, so that the operator need not ask.';
   const [blocker, ...others] = openBlockers(preparation.findings, waivers, artwork.version);
   if (!blocker) return null;
-  const rest = others.length === 0 ? '' : others.length === 1 ? ' and one more' : ` and ${others.length} more`;
+  const rest =
+    others.length === 0 ? '' : others.length === 1 ? ' and one more' : ` and ${others.length} more`;
   return `Blockers are open: ${blocker.title.toLowerCase()}${rest}. Mend the artwork or change the size${blocker.waivable ? ', or waive with a reason' : ''}.`;
 }
 
@@ -104,7 +121,9 @@ function approvalHolds(facts: RuleFacts): string | null {
 }
 
 function resumeWaits(facts: RuleFacts): string | null {
-  return ownUnidentified(facts) && facts.formerState !== 'draft' ? 'Say first what the customer’s blank is made of.' : null;
+  return ownUnidentified(facts) && facts.formerState !== 'draft'
+    ? 'Say first what the customer’s blank is made of.'
+    : null;
 }
 
 /**
@@ -146,6 +165,7 @@ export function checklistRefusal(ticked: readonly string[]): string | null {
 export function waiverRefusal(findingId: string, findings: readonly Finding[]): string | null {
   const found = findings.filter((finding) => finding.id === findingId);
   if (found.length === 0) return 'There is no such finding on this artwork.';
-  if (found.some((finding) => !finding.waivable)) return `“${found[0].title}” cannot be waived. Change the artwork, the size or the stock.`;
+  if (found.some((finding) => !finding.waivable))
+    return `“${found[0].title}” cannot be waived. Change the artwork, the size or the stock.`;
   return null;
 }

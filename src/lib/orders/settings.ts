@@ -1,22 +1,39 @@
 import type { Machine } from '../machines/machine';
 import { sizeAcross, type Spot } from '../machines/spot';
 import type { CheckSettings } from '../prepare/pipeline';
-import { DEFAULT_SCREEN, machineRunSchema, scanFor, settingsSchema, stockToneSchema, type MachineRun, type Settings, type StockTone, type Treatment } from '../prepare/settings';
+import {
+  DEFAULT_SCREEN,
+  machineRunSchema,
+  scanFor,
+  settingsSchema,
+  stockToneSchema,
+  type MachineRun,
+  type Settings,
+  type StockTone,
+  type Treatment,
+} from '../prepare/settings';
 import type { Stock } from '../stock/stock';
 import { placeOnBlank, type Blank, type OrderFields } from './order';
 import type { Design } from './views';
 
 /** Size of the artwork as it lies on the blank: width and height change places with an odd number of quarter turns. */
-export function placedSize(fields: Pick<OrderFields, 'widthMm' | 'heightMm' | 'placement'>): { widthMm: number; heightMm: number } | null {
+export function placedSize(
+  fields: Pick<OrderFields, 'widthMm' | 'heightMm' | 'placement'>,
+): { widthMm: number; heightMm: number } | null {
   const { widthMm, heightMm } = fields;
   if (widthMm === null || heightMm === null) return null;
-  return fields.placement.quarterTurns % 2 === 0 ? { widthMm, heightMm } : { widthMm: heightMm, heightMm: widthMm };
+  return fields.placement.quarterTurns % 2 === 0
+    ? { widthMm, heightMm }
+    : { widthMm: heightMm, heightMm: widthMm };
 }
 
 export type BlankLimits = NonNullable<Settings['blank']>;
 
 /** The blank as preflight and the pipeline take it: its outline, and where the artwork lies on it. */
-export function blankLimits(blank: Blank | null, fields: Pick<OrderFields, 'widthMm' | 'heightMm' | 'placement'>): BlankLimits | null {
+export function blankLimits(
+  blank: Blank | null,
+  fields: Pick<OrderFields, 'widthMm' | 'heightMm' | 'placement'>,
+): BlankLimits | null {
   const size = placedSize(fields);
   if (!blank || !size) return null;
   return {

@@ -50,6 +50,8 @@ export function blankWords(blank: Blank, stockName: string | null): string {
     stockName ?? 'stock not identified',
     blank.side,
     ...(blank.grainDeg === null ? [] : [`grain at ${Number(blank.grainDeg.toFixed(1))}°`]),
-    blank.source === 'shop' ? 'from the shop' : `the customer’s own, ${blank.spare ? 'with a spare' : 'no spare'}`,
+    blank.source === 'shop'
+      ? 'from the shop'
+      : `the customer’s own, ${blank.spare ? 'with a spare' : 'no spare'}`,
   ].join(', ');
 }

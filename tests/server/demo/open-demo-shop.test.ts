@@ -12,7 +12,8 @@ import { memoryStorage } from '@/lib/server/storage/memory';
 import { useStorage } from '@/lib/server/storage/store';
 import { standIn, startShopQueue, stopShopQueue } from '../orders/shop';
 
-const orders = (): Promise<{ title: string; state: string; due_on: string | null }[]> => database()('orders').select('title', 'state', 'due_on').orderBy('id');
+const orders = (): Promise<{ title: string; state: string; due_on: string | null }[]> =>
+  database()('orders').select('title', 'state', 'due_on').orderBy('id');
 
 beforeAll(() => {
   useStorage(memoryStorage());
@@ -31,14 +32,17 @@ describe('the demo shop', () => {
   });
 
   it('has a sample for every order', () => {
-    for (const { artwork } of DEMO_ORDERS) expect(existsSync(path.resolve('samples', artwork)), artwork).toBe(true);
+    for (const { artwork } of DEMO_ORDERS)
+      expect(existsSync(path.resolve('samples', artwork)), artwork).toBe(true);
   });
 
   it('gets one order in every state, each as far as it should come, and not a second time', async () => {
     await seed(database());
     await openDemoShop();
     const made = await orders();
-    expect(made.map(({ title, state }) => ({ title, state }))).toEqual(DEMO_ORDERS.map(({ title, state }) => ({ title, state })));
+    expect(made.map(({ title, state }) => ({ title, state }))).toEqual(
+      DEMO_ORDERS.map(({ title, state }) => ({ title, state })),
+    );
     expect([...new Set(made.map(({ state }) => state))].sort()).toEqual([...ORDER_STATES].sort());
     await openDemoShop();
     expect(await orders()).toHaveLength(DEMO_ORDERS.length);

@@ -26,7 +26,13 @@ beforeAll(async () => {
   startShopQueue();
   const order = await orderAt(shop, 'proof-sent');
   ({ number } = order);
-  params = { number, artworkVersion: '1', id: String(order.preparations[0].id), name: 'burned', findingId: 'hairline' };
+  params = {
+    number,
+    artworkVersion: '1',
+    id: String(order.preparations[0].id),
+    name: 'burned',
+    findingId: 'hairline',
+  };
 });
 afterAll(stopShopQueue);
 
@@ -39,24 +45,36 @@ const BODIES: Record<string, unknown> = {
 describe('another customer’s order', () => {
   const reachable = ORDER_ROUTES.filter(({ access }) => (access as readonly string[]).includes('customer'));
 
-  it.each(reachable.map((route) => [`${route.method} ${route.path}`, route] as const))('%s is not found', async (key, route) => {
-    const endpoint = await endpointOf(route);
-    const upload = 'upload' in route;
-    const form = new FormData();
-    form.set('artwork', new File(['x'], 'x.png'));
-    const sent = upload ? { raw: form } : { body: route.method === 'GET' ? undefined : (BODIES[key] ?? {}) };
-    const response = await call(endpoint, { person: shop.stranger, params, method: route.method, ...sent });
-    expect(response.status).toBe(404);
-    expect(await response.text()).not.toContain('Ina');
-  });
+  it.each(reachable.map((route) => [`${route.method} ${route.path}`, route] as const))(
+    '%s is not found',
+    async (key, route) => {
+      const endpoint = await endpointOf(route);
+      const upload = 'upload' in route;
+      const form = new FormData();
+      form.set('artwork', new File(['x'], 'x.png'));
+      const sent = upload
+        ? { raw: form }
+        : { body: route.method === 'GET' ? undefined : (BODIES[key] ?? {}) };
+      const response = await call(endpoint, { person: shop.stranger, params, method: route.method, ...sent });
+      expect(response.status).toBe(404);
+      expect(await response.text()).not.toContain('Ina');
+    },
+  );
 
-  it.each(['U-9999', 'u-1001', 'U-01001', 'U-1001%00', 'U-1001/', '../U-1001', '1', ''])('%j is not found by anybody', async (odd) => {
-    const endpoint = await endpointOf({ method: 'GET', path: '/api/orders/:number' });
-    for (const person of [shop.customer, shop.admin]) expect((await call(endpoint, { person, params: { number: odd } })).status).toBe(404);
-  });
+  it.each(['U-9999', 'u-1001', 'U-01001', 'U-1001%00', 'U-1001/', '../U-1001', '1', ''])(
+    '%j is not found by anybody',
+    async (odd) => {
+      const endpoint = await endpointOf({ method: 'GET', path: '/api/orders/:number' });
+      for (const person of [shop.customer, shop.admin])
+        expect((await call(endpoint, { person, params: { number: odd } })).status).toBe(404);
+    },
+  );
 
   it('is unchanged by all that', async () => {
-    expect(await read(shop.customer, number)).toMatchObject({ state: 'proof-sent', artworks: [{ version: 1 }] });
+    expect(await read(shop.customer, number)).toMatchObject({
+      state: 'proof-sent',
+      artworks: [{ version: 1 }],
+    });
   });
 });
 
@@ -64,7 +82,9 @@ describe('an order as each role sees it', () => {
   it('fits its schema, and offers what that role may do', async () => {
     const events = Object.fromEntries(
       await Promise.all(
-        [shop.customer, shop.designer, shop.operator, shop.admin].map(async (who) => [who.role, orderViewSchema.parse(await read(who, number)).events] as const),
+        [shop.customer, shop.designer, shop.operator, shop.admin].map(
+          async (who) => [who.role, orderViewSchema.parse(await read(who, number)).events] as const,
+        ),
       ),
     );
     expect(events).toEqual({
@@ -82,7 +102,10 @@ describe('an order as each role sees it', () => {
 
   it('shows the machine’s caution to staff alone', async () => {
     expect((await read(shop.customer, number)).cautions.map(({ id }) => id)).toEqual(['glued-board']);
-    expect((await read(shop.operator, number)).cautions.map(({ id }) => id)).toEqual(['machine-class', 'glued-board']);
+    expect((await read(shop.operator, number)).cautions.map(({ id }) => id)).toEqual([
+      'machine-class',
+      'glued-board',
+    ]);
   });
 });
 
@@ -91,7 +114,11 @@ describe('the list', () => {
     orderListSchema.parse(await jsonOf(await call(list, { person: who, path: `/api/orders?${query}` })));
 
   beforeAll(async () => {
-    for (const [title, dueOn] of [['Alder box', '2027-03-01'], ['100% cork', '2027-01-05'], ['Zebrano_lid', null]] as const) {
+    for (const [title, dueOn] of [
+      ['Alder box', '2027-03-01'],
+      ['100% cork', '2027-01-05'],
+      ['Zebrano_lid', null],
+    ] as const) {
       const order = await open(shop.stranger, { title });
       await change(shop.stranger, order.number, { dueOn });
     }
@@ -106,7 +133,17 @@ describe('the list', () => {
 
   it('tells of findings, picture and scanning time, the latter to staff only', async () => {
     expect((await rows(shop.designer, 'q=Bakery')).rows).toMatchObject([
-      { number, title: 'Bakery sign', state: 'proof-sent', customerName: 'Ina', machineName: 'Kiln', stockName: 'Birch plywood 4 mm', scanSeconds: 90, blockers: 0, pictureUrl: `/api/orders/${number}/artwork/1/picture` },
+      {
+        number,
+        title: 'Bakery sign',
+        state: 'proof-sent',
+        customerName: 'Ina',
+        machineName: 'Kiln',
+        stockName: 'Birch plywood 4 mm',
+        scanSeconds: 90,
+        blockers: 0,
+        pictureUrl: `/api/orders/${number}/artwork/1/picture`,
+      },
     ]);
     expect((await rows(shop.customer)).rows[0]).toMatchObject({ machineName: '', scanSeconds: null });
   });
@@ -117,7 +154,10 @@ describe('the list', () => {
     ['q=o_l', ['Zebrano_lid']],
     ['q=OLAF&sort=number', ['Alder box', '100% cork', 'Zebrano_lid']],
     ['state=proof-sent', ['Bakery sign']],
-    ['state=draft,proof-sent&sort=state&order=down', ['Bakery sign', 'Zebrano_lid', '100% cork', 'Alder box']],
+    [
+      'state=draft,proof-sent&sort=state&order=down',
+      ['Bakery sign', 'Zebrano_lid', '100% cork', 'Alder box'],
+    ],
     ['state=nonsense&sort=number&perPage=1', ['Bakery sign']],
     ['sort=due', ['100% cork', 'Alder box', 'Bakery sign', 'Zebrano_lid']],
     ['sort=due&order=down', ['Alder box', '100% cork', 'Zebrano_lid', 'Bakery sign']],
@@ -129,7 +169,8 @@ describe('the list', () => {
   });
 
   it('finds an order by its number, however it is written', async () => {
-    for (const q of [number, number.toLowerCase(), number.slice(2)]) expect((await rows(shop.designer, `q=${q}`)).rows).toHaveLength(1);
+    for (const q of [number, number.toLowerCase(), number.slice(2)])
+      expect((await rows(shop.designer, `q=${q}`)).rows).toHaveLength(1);
     expect((await rows(shop.stranger, `q=${number}`)).rows).toEqual([]);
   });
 

@@ -1,6 +1,23 @@
 import '../../setup/database';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
-import { bench, blankOf, cause, change, design, finding, open, openShop, orderAt, prepare, read, settled, startShopQueue, stopShopQueue, upload, type Shop } from './shop';
+import {
+  bench,
+  blankOf,
+  cause,
+  change,
+  design,
+  finding,
+  open,
+  openShop,
+  orderAt,
+  prepare,
+  read,
+  settled,
+  startShopQueue,
+  stopShopQueue,
+  upload,
+  type Shop,
+} from './shop';
 import { database } from '@/lib/server/db';
 
 let shop: Shop;
@@ -14,7 +31,9 @@ afterEach(() => {
 });
 
 const mailsAbout = async (number: string): Promise<{ kind: string; recipient: string }[]> =>
-  (await database()('mails').select('kind', 'recipient', 'subject').orderBy('id')).filter((mail) => mail.subject.includes(number));
+  (await database()('mails').select('kind', 'recipient', 'subject').orderBy('id')).filter((mail) =>
+    mail.subject.includes(number),
+  );
 
 describe('an order’s life', () => {
   it('goes from upload to handed over through the four roles', async () => {
@@ -36,7 +55,11 @@ describe('an order’s life', () => {
       'done: running → finished',
       'hand-over: finished → handed-over',
     ]);
-    expect(order.approved).toMatchObject({ by: 'Ina', how: 'on the order page', manifestSha256: order.passed?.manifestSha256 });
+    expect(order.approved).toMatchObject({
+      by: 'Ina',
+      how: 'on the order page',
+      manifestSha256: order.passed?.manifestSha256,
+    });
     expect(order.outcomes).toMatchObject([{ kind: 'done', by: 'Otto', words: 'even' }]);
     expect(await mailsAbout(number)).toMatchObject([
       { kind: 'proof-ready', recipient: shop.customer.email },
@@ -54,14 +77,43 @@ describe('an order’s life', () => {
   it.each([
     ['artwork', async (number: string) => void number, /no artwork/],
     ['size', async (number: string) => void (await upload(shop.customer, number)), /size is missing/],
-    ['blank', async (number: string) => void (await upload(shop.customer, number), await change(shop.customer, number, { widthMm: 60, heightMm: 40 })), /blank is missing/],
-    ['stock', async (number: string) => void (await upload(shop.customer, number), await change(shop.customer, number, { widthMm: 60, heightMm: 40, blank: blankOf(null) })), /stock is missing/],
-    ['a stock that is allowed', async (number: string) => void (await upload(shop.customer, number), await change(shop.customer, number, { widthMm: 60, heightMm: 40, blank: blankOf(shop.vinyl) })), /never engraved/],
+    [
+      'blank',
+      async (number: string) =>
+        void (
+          await upload(shop.customer, number),
+          await change(shop.customer, number, { widthMm: 60, heightMm: 40 })
+        ),
+      /blank is missing/,
+    ],
+    [
+      'stock',
+      async (number: string) =>
+        void (
+          await upload(shop.customer, number),
+          await change(shop.customer, number, { widthMm: 60, heightMm: 40, blank: blankOf(null) })
+        ),
+      /stock is missing/,
+    ],
+    [
+      'a stock that is allowed',
+      async (number: string) =>
+        void (
+          await upload(shop.customer, number),
+          await change(shop.customer, number, { widthMm: 60, heightMm: 40, blank: blankOf(shop.vinyl) })
+        ),
+      /never engraved/,
+    ],
   ])('is not submitted without %s', async (_, fill, words) => {
     const { number } = await open(shop.customer);
     await fill(number);
     await settled(shop.customer, number);
-    const refused = (await cause(shop.customer, number, { event: 'submit', rightsConfirmed: true }, 409)) as unknown;
+    const refused = (await cause(
+      shop.customer,
+      number,
+      { event: 'submit', rightsConfirmed: true },
+      409,
+    )) as unknown;
     expect(refused).toBeUndefined();
     const order = await read(shop.customer, number);
     expect(order).toMatchObject({ state: 'draft', rightsConfirmedAt: null });
@@ -82,7 +134,9 @@ describe('an order’s life', () => {
     await settled(shop.unconfirmed, mine.number);
     await cause(shop.unconfirmed, mine.number, { event: 'submit', rightsConfirmed: true }, 403);
     expect((await read(shop.unconfirmed, mine.number)).waitsFor.submit).toMatch(/not confirmed/);
-    expect((await cause(shop.designer, mine.number, { event: 'submit', rightsConfirmed: true })).state).toBe('submitted');
+    expect((await cause(shop.designer, mine.number, { event: 'submit', rightsConfirmed: true })).state).toBe(
+      'submitted',
+    );
   });
 
   it('puts a customer’s own unidentified blank on hold until the shop says what it is', async () => {
@@ -93,7 +147,10 @@ describe('an order’s life', () => {
     expect(await mailsAbout(number)).toMatchObject([{ kind: 'on-hold' }]);
     await cause(shop.designer, number, { event: 'resume' }, 409);
     await change(shop.designer, number, { blank: blankOf(shop.birch, { source: 'customer' }) });
-    expect(await cause(shop.designer, number, { event: 'resume' })).toMatchObject({ state: 'submitted', heldBecause: '' });
+    expect(await cause(shop.designer, number, { event: 'resume' })).toMatchObject({
+      state: 'submitted',
+      heldBecause: '',
+    });
   });
 
   it('is not passed with open blockers, and is when each is waived with a reason', async () => {
@@ -119,7 +176,10 @@ describe('an order’s life', () => {
     const { POST } = await import('@/pages/api/orders/[number]/waivers/index');
     const { at } = await import('./shop');
     const { version } = await read(shop.designer, number);
-    const refused = await at<{ detail: string }>(POST, shop.designer, number, { body: { version, findingId: 'outside', reason: 'let it be' }, status: 409 });
+    const refused = await at<{ detail: string }>(POST, shop.designer, number, {
+      body: { version, findingId: 'outside', reason: 'let it be' },
+      status: 409,
+    });
     expect(refused.detail).toMatch(/cannot be waived/);
   });
 
@@ -128,7 +188,9 @@ describe('an order’s life', () => {
     const { number } = await orderAt(shop, 'prepared');
     const { POST } = await import('@/pages/api/orders/[number]/waivers/index');
     const { at } = await import('./shop');
-    await at(POST, shop.designer, number, { body: { version: (await read(shop.designer, number)).version, findingId: 'hairline', reason: 'agreed' } });
+    await at(POST, shop.designer, number, {
+      body: { version: (await read(shop.designer, number)).version, findingId: 'hairline', reason: 'agreed' },
+    });
     await upload(shop.customer, number, 'another picture');
     await settled(shop.customer, number);
     const order = await prepare(shop, number);
@@ -159,7 +221,10 @@ describe('an order’s life', () => {
     const { number, passed } = await orderAt(shop, 'proof-sent');
     const approve = { event: 'approve', manifestSha256: passed?.manifestSha256 };
     await cause(shop.designer, number, approve, 422);
-    const order = await cause(shop.designer, number, { ...approve, inPerson: { who: 'Ina’s sister', how: 'at the counter' } });
+    const order = await cause(shop.designer, number, {
+      ...approve,
+      inPerson: { who: 'Ina’s sister', how: 'at the counter' },
+    });
     expect(order.approved).toMatchObject({ by: 'Ina’s sister', how: 'at the counter, recorded by Dora' });
   });
 
@@ -168,23 +233,41 @@ describe('an order’s life', () => {
     const without = { event: 'approve-without-proof', reason: 'as last time' };
     await cause(shop.designer, number, without, 409);
     const agreed = await orderAt(shop, 'passed', { withoutProof: true });
-    expect((await cause(shop.designer, agreed.number, without)).approved?.manifestSha256).toBe(agreed.passed?.manifestSha256);
+    expect((await cause(shop.designer, agreed.number, without)).approved?.manifestSha256).toBe(
+      agreed.passed?.manifestSha256,
+    );
   });
 
   it('voids the pass when the customer asks for changes, and tells whoever passed it', async () => {
     const { number } = await orderAt(shop, 'proof-sent');
-    const order = await cause(shop.customer, number, { event: 'ask-for-changes', words: 'A little larger, please.' });
+    const order = await cause(shop.customer, number, {
+      event: 'ask-for-changes',
+      words: 'A little larger, please.',
+    });
     expect(order).toMatchObject({ state: 'in-preparation', passed: null, approved: null, preparations: [] });
-    expect((await mailsAbout(number)).at(-1)).toMatchObject({ kind: 'changes-requested', recipient: shop.designer.email });
+    expect((await mailsAbout(number)).at(-1)).toMatchObject({
+      kind: 'changes-requested',
+      recipient: shop.designer.email,
+    });
   });
 
-  it.each(['passed', 'proof-sent', 'approved', 'released'] as const)('voids pass and approval when it is prepared again or gets new artwork once %s', async (state) => {
-    for (const again of [(number: string) => prepare(shop, number), (number: string) => upload(shop.customer, number, 'changed')]) {
-      const { number } = await orderAt(shop, state);
-      await again(number);
-      expect(await settled(shop.designer, number)).toMatchObject({ state: 'in-preparation', passed: null, approved: null });
-    }
-  });
+  it.each(['passed', 'proof-sent', 'approved', 'released'] as const)(
+    'voids pass and approval when it is prepared again or gets new artwork once %s',
+    async (state) => {
+      for (const again of [
+        (number: string) => prepare(shop, number),
+        (number: string) => upload(shop.customer, number, 'changed'),
+      ]) {
+        const { number } = await orderAt(shop, state);
+        await again(number);
+        expect(await settled(shop.designer, number)).toMatchObject({
+          state: 'in-preparation',
+          passed: null,
+          approved: null,
+        });
+      }
+    },
+  );
 
   it('takes no new artwork on the machine', async () => {
     const { number } = await orderAt(shop, 'running');
@@ -194,8 +277,16 @@ describe('an order’s life', () => {
   it('asks for the whole checklist before the machine, and takes a spoiled piece back to released', async () => {
     const { number } = await orderAt(shop, 'released');
     await cause(shop.operator, number, { event: 'on-the-machine', checklist: ['material'] }, 409);
-    await cause(shop.operator, number, { event: 'on-the-machine', checklist: ['material', 'focus', 'extraction', 'attended'] });
-    const order = await cause(shop.operator, number, { event: 'spoiled', reason: 'The board had a knot.', newBlank: 'second board', cost: '4 €' });
+    await cause(shop.operator, number, {
+      event: 'on-the-machine',
+      checklist: ['material', 'focus', 'extraction', 'attended'],
+    });
+    const order = await cause(shop.operator, number, {
+      event: 'spoiled',
+      reason: 'The board had a knot.',
+      newBlank: 'second board',
+      cost: '4 €',
+    });
     expect(order).toMatchObject({ state: 'released', outcomes: [{ kind: 'spoiled', cost: '4 €' }] });
   });
 
@@ -212,14 +303,22 @@ describe('an order’s life', () => {
 
   it('returns from hold to where it stood, and is cancelled with a reason', async () => {
     const { number } = await orderAt(shop, 'approved');
-    const held = await cause(shop.operator, number, { event: 'hold', reason: 'The machine is being cleaned.' });
+    const held = await cause(shop.operator, number, {
+      event: 'hold',
+      reason: 'The machine is being cleaned.',
+    });
     expect(held).toMatchObject({ state: 'on-hold', heldBecause: 'The machine is being cleaned.' });
     expect((await cause(shop.operator, number, { event: 'resume' })).state).toBe('approved');
     const other = await orderAt(shop, 'submitted');
     await cause(shop.designer, other.number, { event: 'hold', reason: 'No cork in the shop.' });
-    expect(await cause(shop.designer, other.number, { event: 'cancel', reason: 'agreed' })).toMatchObject({ state: 'cancelled', heldBecause: '' });
+    expect(await cause(shop.designer, other.number, { event: 'cancel', reason: 'agreed' })).toMatchObject({
+      state: 'cancelled',
+      heldBecause: '',
+    });
     await cause(shop.customer, number, { event: 'cancel', reason: 'changed my mind' }, 409);
-    expect((await cause(shop.designer, number, { event: 'cancel', reason: 'agreed with Ina' })).state).toBe('cancelled');
+    expect((await cause(shop.designer, number, { event: 'cancel', reason: 'agreed with Ina' })).state).toBe(
+      'cancelled',
+    );
   });
 
   it('lets exactly one of two people who press at once through', async () => {
@@ -228,9 +327,12 @@ describe('an order’s life', () => {
     const { POST } = await import('@/pages/api/orders/[number]/events');
     const { call } = await import('../../setup/call');
     void at;
-    const press = () => call(POST, { person: shop.designer, params: { number }, body: { event: 'take', version } });
+    const press = () =>
+      call(POST, { person: shop.designer, params: { number }, body: { event: 'take', version } });
     const statuses = (await Promise.all([press(), press(), press()])).map(({ status }) => status).sort();
     expect(statuses).toEqual([200, 409, 409]);
-    expect((await read(shop.designer, number)).history.filter(({ event }) => event === 'take')).toHaveLength(1);
+    expect((await read(shop.designer, number)).history.filter(({ event }) => event === 'take')).toHaveLength(
+      1,
+    );
   });
 });

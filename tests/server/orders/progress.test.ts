@@ -4,7 +4,17 @@ import { progressEventSchema, type ProgressEvent } from '@/lib/orders/views';
 import { eventStream, MOST_STREAMS_PER_PERSON, openStreams } from '@/lib/server/http/event-stream';
 import { GET } from '@/pages/api/orders/[number]/progress';
 import { call } from '../../setup/call';
-import { bench, change, open, openShop, settled, startShopQueue, stopShopQueue, upload, type Shop } from './shop';
+import {
+  bench,
+  change,
+  open,
+  openShop,
+  settled,
+  startShopQueue,
+  stopShopQueue,
+  upload,
+  type Shop,
+} from './shop';
 
 let shop: Shop;
 let number: string;
@@ -45,14 +55,16 @@ function reader(response: Response): Reader {
       for (;;) {
         const block = await next();
         const data = /^data: (.*)$/m.exec(block)?.[1];
-        if (data) return { ...progressEventSchema.parse(JSON.parse(data)), id: /^id: (.*)$/m.exec(block)?.[1] ?? '' };
+        if (data)
+          return { ...progressEventSchema.parse(JSON.parse(data)), id: /^id: (.*)$/m.exec(block)?.[1] ?? '' };
         if (block === 'the end') throw new Error('the stream ended');
       }
     },
     close: () => stream.cancel(),
   };
 }
-const watch = async (headers = {}): Promise<Reader> => reader(await call(GET, { person: shop.customer, params: { number }, headers }));
+const watch = async (headers = {}): Promise<Reader> =>
+  reader(await call(GET, { person: shop.customer, params: { number }, headers }));
 
 describe('progress', () => {
   it('tells how it stands at once, and then whenever it stands differently', async () => {
@@ -103,11 +115,21 @@ describe('progress', () => {
 
 describe('an event stream', () => {
   const stream = (over: Partial<Parameters<typeof eventStream>[0]> = {}, signal?: AbortSignal): Response =>
-    eventStream({ personId: 77, request: new Request('http://localhost/', { signal }), look: async () => ({ still: true }), times: { lookMs: 5, heartbeatMs: 40, slowMs: 60 }, ...over });
+    eventStream({
+      personId: 77,
+      request: new Request('http://localhost/', { signal }),
+      look: async () => ({ still: true }),
+      times: { lookMs: 5, heartbeatMs: 40, slowMs: 60 },
+      ...over,
+    });
 
   it('is text/event-stream that nothing on the way keeps back', () => {
     const response = stream();
-    expect(Object.fromEntries(response.headers)).toMatchObject({ 'content-type': 'text/event-stream', 'cache-control': 'no-cache, no-transform', 'x-accel-buffering': 'no' });
+    expect(Object.fromEntries(response.headers)).toMatchObject({
+      'content-type': 'text/event-stream',
+      'cache-control': 'no-cache, no-transform',
+      'x-accel-buffering': 'no',
+    });
     void response.body?.cancel();
   });
 
@@ -124,7 +146,9 @@ describe('an event stream', () => {
   it('makes many changes one event', async () => {
     let count = 0;
     const counting = setInterval(() => (count += 1), 1);
-    const read = reader(stream({ look: async () => ({ count }), times: { lookMs: 60, heartbeatMs: 1000, slowMs: 1000 } }));
+    const read = reader(
+      stream({ look: async () => ({ count }), times: { lookMs: 60, heartbeatMs: 1000, slowMs: 1000 } }),
+    );
     await read.next();
     const began = performance.now();
     for (let events = 0; events < 4; events += 1) await read.next();

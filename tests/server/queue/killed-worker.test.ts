@@ -8,7 +8,19 @@ import { database } from '@/lib/server/db';
 import { openDiskStorage } from '@/lib/server/storage/disk';
 import type { TaskRow } from '@/lib/server/tables/tasks';
 import { POST } from '@/pages/api/orders/[number]/preparations/index';
-import { at, design, openShop, orderAt, prepare, read, settled, sha256, startShopQueue, stopShopQueue, type Shop } from '../orders/shop';
+import {
+  at,
+  design,
+  openShop,
+  orderAt,
+  prepare,
+  read,
+  settled,
+  sha256,
+  startShopQueue,
+  stopShopQueue,
+  type Shop,
+} from '../orders/shop';
 
 let shop: Shop;
 beforeAll(async () => {
@@ -17,7 +29,10 @@ beforeAll(async () => {
 });
 afterAll(stopShopQueue);
 
-const taskOf = async (id: number): Promise<TaskRow> => database()('tasks').where({ subject: `preparation ${id}` }).first();
+const taskOf = async (id: number): Promise<TaskRow> =>
+  database()('tasks')
+    .where({ subject: `preparation ${id}` })
+    .first();
 
 describe('a worker killed half-way', () => {
   it('is followed by another that makes the same bytes under the same key', async () => {
@@ -42,7 +57,10 @@ describe('a worker killed half-way', () => {
     child.kill('SIGKILL');
     await once(child, 'exit');
     writeFileSync(path.join(dataDir, 'storage/arriving/left-by-the-dead'), 'half');
-    expect((await read(shop.designer, number)).preparations[0]).toMatchObject({ manifestSha256: null, task: { state: 'running' } });
+    expect((await read(shop.designer, number)).preparations[0]).toMatchObject({
+      manifestSha256: null,
+      task: { state: 'running' },
+    });
 
     await openDiskStorage(path.join(dataDir, 'storage'));
     expect(readdirSync(path.join(dataDir, 'storage/arriving'))).toEqual([]);

@@ -20,7 +20,10 @@ interface Done {
 }
 
 /** A queue whose checks are done by `work`; preparations do nothing. */
-function queueOf(work: (n: number, context: TaskContext, done: Done) => Promise<void>, timeLimitMs = 5_000): { handlers: TaskHandler[]; done: Done } {
+function queueOf(
+  work: (n: number, context: TaskContext, done: Done) => Promise<void>,
+  timeLimitMs = 5_000,
+): { handlers: TaskHandler[]; done: Done } {
   const done: Done = { committed: [], attempts: 0 };
   const check = taskHandler({
     name: 'check-artwork',
@@ -41,7 +44,8 @@ const newSubject = (): string => `artwork ${(subjects += 1)}`;
 async function ask(subject: string, n: unknown, how = askOnce): Promise<void> {
   await withWrite((trx) => how(trx, { name: 'check-artwork', subject, orderId: null, payload: { n } }));
 }
-const rowsOf = (subject: string): Promise<TaskRow[]> => database()<TaskRow>('tasks').where({ subject }).orderBy('id');
+const rowsOf = (subject: string): Promise<TaskRow[]> =>
+  database()<TaskRow>('tasks').where({ subject }).orderBy('id');
 async function until(subject: string, state: TaskRow['state']): Promise<TaskRow> {
   for (let tries = 0; tries < 600; tries += 1) {
     const row = (await rowsOf(subject)).at(-1);
@@ -63,7 +67,9 @@ describe('the queue', () => {
   it('refuses to start without exactly one handler per name', () => {
     const [check, prepare] = queueOf(nothing).handlers;
     expect(() => startQueue([check])).toThrow('exactly one handler for the task prepare-order, got 0');
-    expect(() => startQueue([check, prepare, check])).toThrow('exactly one handler for the task check-artwork, got 2');
+    expect(() => startQueue([check, prepare, check])).toThrow(
+      'exactly one handler for the task check-artwork, got 2',
+    );
     expect(queueRuns()).toBe(false);
   });
 
@@ -96,7 +102,8 @@ describe('the queue', () => {
     startQueue(handlers, QUICK);
     const subject = newSubject();
     await ask(subject, 1);
-    for (let tries = 0; tries < 200 && (await rowsOf(subject))[0].progress === 0; tries += 1) await new Promise((next) => setTimeout(next, 5));
+    for (let tries = 0; tries < 200 && (await rowsOf(subject))[0].progress === 0; tries += 1)
+      await new Promise((next) => setTimeout(next, 5));
     expect((await rowsOf(subject))[0]).toMatchObject({ state: 'running', stage: 'Measuring', progress: 0.5 });
     open();
     await until(subject, 'done');
@@ -127,7 +134,11 @@ describe('the queue', () => {
   });
 
   it.each([
-    ['trouble with the artwork', new ArtworkError('truncated', 'The file ends too early. Save it again.'), 'The file ends too early. Save it again.'],
+    [
+      'trouble with the artwork',
+      new ArtworkError('truncated', 'The file ends too early. Save it again.'),
+      'The file ends too early. Save it again.',
+    ],
     ['a refusal', new AppError('no-room'), 'The shop’s disk is nearly full.'],
   ])('does not try again after %s', async (_, error, words) => {
     const { handlers, done } = queueOf(async () => {
@@ -152,7 +163,8 @@ describe('the queue', () => {
   it('says that the disk is full, and can be started again when there is room', async () => {
     let full = true;
     const { handlers } = queueOf(async () => {
-      if (full) throw new Error('could not store', { cause: Object.assign(new Error('write'), { code: 'ENOSPC' }) });
+      if (full)
+        throw new Error('could not store', { cause: Object.assign(new Error('write'), { code: 'ENOSPC' }) });
     });
     startQueue(handlers, QUICK);
     const subject = newSubject();
@@ -216,7 +228,9 @@ describe('the queue', () => {
   it('rolls the end of a task back with a result that could not be written', async () => {
     let tries = 0;
     const check = taskHandler({
-      name: 'check-artwork', payload, timeLimitMs: 1000,
+      name: 'check-artwork',
+      payload,
+      timeLimitMs: 1000,
       run: async () => async (trx) => {
         tries += 1;
         await trx('mails').insert({ nonsense: true });
@@ -231,7 +245,8 @@ describe('the queue', () => {
 });
 
 describe('a claim', () => {
-  const claim = (now: number, leaseMs = 1000): Promise<TaskRow | null> => claimTask(database(), 'check-artwork', now, leaseMs, 3);
+  const claim = (now: number, leaseMs = 1000): Promise<TaskRow | null> =>
+    claimTask(database(), 'check-artwork', now, leaseMs, 3);
 
   it('is given to one worker only', async () => {
     await database()('tasks').delete();
@@ -276,7 +291,12 @@ describe('a claim', () => {
     await database()('tasks').delete();
     const subject = newSubject();
     await ask(subject, 1);
-    await database()('tasks').update({ state: 'running', failures: 2, attempt: 3, lease_until_ms: Date.now() - 1 });
+    await database()('tasks').update({
+      state: 'running',
+      failures: 2,
+      attempt: 3,
+      lease_until_ms: Date.now() - 1,
+    });
     expect(await claim(Date.now())).toBeNull();
     startQueue(queueOf(nothing).handlers, QUICK);
     expect((await until(subject, 'failed')).problem).toMatch(/broke off three times/);
@@ -288,8 +308,12 @@ describe('a claim', () => {
     await ask(later, 1);
     await ask(sooner, 2);
     const now = Date.now();
-    await database()('tasks').where({ subject: later }).update({ due_ms: now + 500 });
-    await database()('tasks').where({ subject: sooner }).update({ due_ms: now + 100 });
+    await database()('tasks')
+      .where({ subject: later })
+      .update({ due_ms: now + 500 });
+    await database()('tasks')
+      .where({ subject: sooner })
+      .update({ due_ms: now + 100 });
     expect(await claim(now + 99)).toBeNull();
     expect(await claim(now + 600)).toMatchObject({ subject: sooner });
     expect(await claim(now + 600)).toMatchObject({ subject: later });

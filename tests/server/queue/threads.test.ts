@@ -7,15 +7,33 @@ import { closeThreads, pipelineInThreads } from '@/lib/server/queue/threads';
 
 void dataDir;
 const sample = (name: string): Uint8Array => new Uint8Array(readFileSync(path.resolve('samples', name)));
-const quiet = () => ({ signal: new AbortController().signal, progress: (_stage: string, _progress: number): void => undefined });
+const quiet = () => ({
+  signal: new AbortController().signal,
+  progress: (_stage: string, _progress: number): void => undefined,
+});
 const settings = (over = {}) =>
   settingsSchema.parse({
-    widthMm: 30, heightMm: 30, spot: { widthMm: 0.12, heightMm: 0.12 }, treatment: 'solid', tone: {}, label: 'U-1001',
-    scan: { directionDeg: 0, linePitchMm: 0.12, alongPitchMm: 0.12 }, ...over,
+    widthMm: 30,
+    heightMm: 30,
+    spot: { widthMm: 0.12, heightMm: 0.12 },
+    treatment: 'solid',
+    tone: {},
+    label: 'U-1001',
+    scan: { directionDeg: 0, linePitchMm: 0.12, alongPitchMm: 0.12 },
+    ...over,
   });
 const checkSettings = {
-  widthMm: 30, heightMm: 30, quarterTurns: 0, spot: { widthMm: 0.12, heightMm: 0.12, shape: 'ellipse' }, firing: 'swept', directionDeg: 0,
-  linePitchMm: null, treatment: null, dividingLstar: 53.4, blank: null, machine: null,
+  widthMm: 30,
+  heightMm: 30,
+  quarterTurns: 0,
+  spot: { widthMm: 0.12, heightMm: 0.12, shape: 'ellipse' },
+  firing: 'swept',
+  directionDeg: 0,
+  linePitchMm: null,
+  treatment: null,
+  dividingLstar: 53.4,
+  blank: null,
+  machine: null,
 } as const;
 
 afterAll(closeThreads);
@@ -28,13 +46,22 @@ describe('the pipeline in threads', () => {
     expect(await pipeline.read(sample('bakery-mark.svg'))).toEqual({ format: 'svg' });
   });
 
-  it.each(['half-a-file.png', 'no-bytes.png', 'not-artwork.pdf'])('refuses %s in words that survive the thread', async (name) => {
-    await expect(pipeline.read(sample(name))).rejects.toMatchObject({ name: 'ArtworkError', message: expect.stringMatching(/\.$/) });
-  });
+  it.each(['half-a-file.png', 'no-bytes.png', 'not-artwork.pdf'])(
+    'refuses %s in words that survive the thread',
+    async (name) => {
+      await expect(pipeline.read(sample(name))).rejects.toMatchObject({
+        name: 'ArtworkError',
+        message: expect.stringMatching(/\.$/),
+      });
+    },
+  );
 
   it('checks, and says in words how far it is', async () => {
     const told: [string, number][] = [];
-    const context = { ...quiet(), progress: (stage: string, progress: number) => void told.push([stage, progress]) };
+    const context = {
+      ...quiet(),
+      progress: (stage: string, progress: number) => void told.push([stage, progress]),
+    };
     const { report, picture } = await pipeline.check(sample('bakery-mark.svg'), checkSettings, context);
     expect(report).toMatchObject({ widthMm: 30, artwork: { format: 'svg' } });
     expect([...picture.slice(1, 4)]).toEqual([0x50, 0x4e, 0x47]);
@@ -48,12 +75,17 @@ describe('the pipeline in threads', () => {
     const request = { settings: settings(), artworkVersion: 1 };
     const bytes = sample('stamp.png');
     const told: string[] = [];
-    const first = await pipeline.prepare(bytes, request, { ...quiet(), progress: (stage) => void told.push(stage) });
+    const first = await pipeline.prepare(bytes, request, {
+      ...quiet(),
+      progress: (stage) => void told.push(stage),
+    });
     for (const stage of told) expect(stage, 'a stage in words').toMatch(/^[A-Z]/);
     const second = await pipeline.prepare(bytes, request, quiet());
     expect(first.key).toBe(await pipeline.keyOf(first.manifest.artworkSha256, request));
     expect(second.manifestSha256).toBe(first.manifestSha256);
-    expect(second.files.map(({ bytes: file }) => Buffer.from(file).toString('base64'))).toEqual(first.files.map(({ bytes: file }) => Buffer.from(file).toString('base64')));
+    expect(second.files.map(({ bytes: file }) => Buffer.from(file).toString('base64'))).toEqual(
+      first.files.map(({ bytes: file }) => Buffer.from(file).toString('base64')),
+    );
   });
 
   it('gives another key to any other request', async () => {
@@ -69,10 +101,14 @@ describe('the pipeline in threads', () => {
 
   it('ends a thread that is told to stop, and works on', async () => {
     const abort = new AbortController();
-    const long = pipeline.prepare(sample('alpine-photograph.jpg'), { settings: settings({ widthMm: 300, heightMm: 225, treatment: 'halftone' }), artworkVersion: 1 }, {
-      signal: abort.signal,
-      progress: () => abort.abort(new Error('enough')),
-    });
+    const long = pipeline.prepare(
+      sample('alpine-photograph.jpg'),
+      { settings: settings({ widthMm: 300, heightMm: 225, treatment: 'halftone' }), artworkVersion: 1 },
+      {
+        signal: abort.signal,
+        progress: () => abort.abort(new Error('enough')),
+      },
+    );
     await expect(long).rejects.toThrow();
     expect(await pipeline.read(sample('stamp.png'))).toEqual({ format: 'png' });
   });

@@ -12,12 +12,22 @@ const coded = (code: string): Error => Object.assign(new Error('write'), { code 
 
 describe('why a task failed', () => {
   it.each<[string, unknown, RegExp, boolean]>([
-    ['artwork', new ArtworkError('truncated', 'The file ends too early.'), /^The file ends too early\.$/, false],
+    [
+      'artwork',
+      new ArtworkError('truncated', 'The file ends too early.'),
+      /^The file ends too early\.$/,
+      false,
+    ],
     ['a refusal', new AppError('no-room'), /disk is nearly full\. .*Tell the shop/, false],
     ['time, short', new TimeLimitError(30_000), /longer than 30 seconds/, false],
     ['time, long', new TimeLimitError(300_000), /longer than 5 minutes/, false],
     ['a full disk', coded('ENOSPC'), /disk is full/, true],
-    ['a full database', new Error('x', { cause: new Error('y', { cause: coded('SQLITE_FULL') }) }), /disk is full/, true],
+    [
+      'a full database',
+      new Error('x', { cause: new Error('y', { cause: coded('SQLITE_FULL') }) }),
+      /disk is full/,
+      true,
+    ],
     ['a missing file', new StorageError('missing', 'nothing'), /Send the artwork again/, false],
     ['data that do not fit', new z.ZodError([]), /broke on our side/, false],
     ['anything else', new Error('segfault in libfoo'), /Start it again/, true],
@@ -31,20 +41,29 @@ describe('why a task failed', () => {
 });
 
 describe('a full disk', () => {
-  it.each([null, undefined, 'ENOSPC', 28, new Error('ENOSPC'), coded('EACCES')])('is not seen in %s', (error) => {
-    expect(isDiskFull(error)).toBe(false);
-  });
+  it.each([null, undefined, 'ENOSPC', 28, new Error('ENOSPC'), coded('EACCES')])(
+    'is not seen in %s',
+    (error) => {
+      expect(isDiskFull(error)).toBe(false);
+    },
+  );
 });
 
 describe('progress', () => {
-  it.each(['check', 'prepare'] as const)('of a %s runs from 0 to 1 through its stages without a step back', (work) => {
-    const stages = work === 'check' ? ['ingest', 'measure', 'preflight', 'sound-width', 'picture'] : ['ingest', 'measure', 'preflight', 'sound-width', 'mark', 'trace', 'package', 'forecast'];
-    const seen = stages.flatMap((stage) => [0, 0.5, 1].map((share) => workProgress(work, stage, share)));
-    const shares = seen.map(({ progress }) => progress);
-    expect(shares).toEqual([...shares].sort((a, b) => a - b));
-    expect([shares[0], shares.at(-1)]).toEqual([0, 1]);
-    for (const { words } of seen) expect(words).toMatch(/^[A-Z][a-z ]+$/);
-  });
+  it.each(['check', 'prepare'] as const)(
+    'of a %s runs from 0 to 1 through its stages without a step back',
+    (work) => {
+      const stages =
+        work === 'check'
+          ? ['ingest', 'measure', 'preflight', 'sound-width', 'picture']
+          : ['ingest', 'measure', 'preflight', 'sound-width', 'mark', 'trace', 'package', 'forecast'];
+      const seen = stages.flatMap((stage) => [0, 0.5, 1].map((share) => workProgress(work, stage, share)));
+      const shares = seen.map(({ progress }) => progress);
+      expect(shares).toEqual([...shares].sort((a, b) => a - b));
+      expect([shares[0], shares.at(-1)]).toEqual([0, 1]);
+      for (const { words } of seen) expect(words).toMatch(/^[A-Z][a-z ]+$/);
+    },
+  );
 
   it('of an unknown stage is named as it is', () => {
     expect(workProgress('check', 'other', 1)).toEqual({ words: 'other', progress: 0 });

@@ -65,18 +65,36 @@ async function open(shop: DemoShop, demo: DemoOrder): Promise<OrderView> {
   const { number } = await openOrder(opener, { title: demo.title }, walkIn ? shop.walkIn.id : undefined);
   // Samples are part of the project, not of what the shop stores.
   const bytes = await readFile(path.resolve('samples', demo.artwork));
-  const incoming = await (await storage()).receive((async function* () {
-    yield bytes;
-  })());
+  const incoming = await (
+    await storage()
+  ).receive(
+    (async function* () {
+      yield bytes;
+    })(),
+  );
   await submitArtwork(opener, number, demo.artwork, incoming);
   const checked = await settled(opener, number);
   const check = checked.artworks.at(-1)?.check;
-  if (!check) throw new Error(`expected ${demo.artwork} to be checked, got ${checked.artworks.at(-1)?.task.problem}`);
+  if (!check)
+    throw new Error(`expected ${demo.artwork} to be checked, got ${checked.artworks.at(-1)?.task.problem}`);
   const heightMm = Math.round((demo.widthMm * check.heightMm * 100) / check.widthMm) / 100;
   const stock = shop.stocks.find(({ name }) => name === demo.stock) ?? null;
-  const dueOn = demo.dueInDays === null ? null : new Date(Date.now() + demo.dueInDays * DAY_MS).toISOString().slice(0, 10);
-  const fields = { widthMm: demo.widthMm, heightMm, treatment: demo.treatment, shadeLstar: 38, dueOn, ...demo.fields };
-  await changeOrderFields(opener, number, checked.version, { ...fields, blank: blankFor(demo, stock, demo.widthMm, heightMm) });
+  const dueOn =
+    demo.dueInDays === null
+      ? null
+      : new Date(Date.now() + demo.dueInDays * DAY_MS).toISOString().slice(0, 10);
+  const fields = {
+    widthMm: demo.widthMm,
+    heightMm,
+    treatment: demo.treatment,
+    shadeLstar: 38,
+    dueOn,
+    ...demo.fields,
+  };
+  await changeOrderFields(opener, number, checked.version, {
+    ...fields,
+    blank: blankFor(demo, stock, demo.widthMm, heightMm),
+  });
   return settled(opener, number);
 }
 
@@ -102,7 +120,12 @@ async function prepare(shop: DemoShop, demo: DemoOrder, number: string): Promise
 type Said = EventBody extends infer Body ? (Body extends EventBody ? Omit<Body, 'version'> : never) : never;
 
 /** The events that lead to a state from the one before it, and who causes them. */
-function stepTo(shop: DemoShop, demo: DemoOrder, state: OrderState, order: OrderView): { who: Person; said: Said } | null {
+function stepTo(
+  shop: DemoShop,
+  demo: DemoOrder,
+  state: OrderState,
+  order: OrderView,
+): { who: Person; said: Said } | null {
   const owner = demo.customer === 'walk-in' ? shop.designer : shop.registered;
   const manifestSha256 = order.passed?.manifestSha256 ?? '';
   switch (state) {
@@ -113,30 +136,62 @@ function stepTo(shop: DemoShop, demo: DemoOrder, state: OrderState, order: Order
     case 'passed':
       return { who: shop.designer, said: { event: 'pass', preparationId: order.preparations[0]?.id ?? 0 } };
     case 'proof-sent':
-      return demo.fields?.withoutProof ? null : { who: shop.designer, said: { event: 'send-proof', words: '' } };
+      return demo.fields?.withoutProof
+        ? null
+        : { who: shop.designer, said: { event: 'send-proof', words: '' } };
     case 'approved':
-      if (demo.fields?.withoutProof) return { who: shop.designer, said: { event: 'approve-without-proof', reason: 'Agreed at the counter: as it looks in the forecast.' } };
+      if (demo.fields?.withoutProof)
+        return {
+          who: shop.designer,
+          said: {
+            event: 'approve-without-proof',
+            reason: 'Agreed at the counter: as it looks in the forecast.',
+          },
+        };
       return { who: owner, said: { event: 'approve', manifestSha256, inPerson: null } };
     case 'released':
       return { who: shop.designer, said: { event: 'release' } };
     case 'running':
-      return { who: shop.operator, said: { event: 'on-the-machine', checklist: CHECKLIST.map(({ id }) => id) } };
+      return {
+        who: shop.operator,
+        said: { event: 'on-the-machine', checklist: CHECKLIST.map(({ id }) => id) },
+      };
     case 'finished':
-      return { who: shop.operator, said: { event: 'done', words: 'Even, as on the proof.', measuredLstar: null } };
+      return {
+        who: shop.operator,
+        said: { event: 'done', words: 'Even, as on the proof.', measuredLstar: null },
+      };
     case 'handed-over':
-      return { who: shop.operator, said: { event: 'hand-over', how: 'collected', byWhom: shop.registered.name } };
+      return {
+        who: shop.operator,
+        said: { event: 'hand-over', how: 'collected', byWhom: shop.registered.name },
+      };
     default:
       return null;
   }
 }
 
-const LIFE: readonly OrderState[] = ['submitted', 'in-preparation', 'passed', 'proof-sent', 'approved', 'released', 'running', 'finished', 'handed-over'];
+const LIFE: readonly OrderState[] = [
+  'submitted',
+  'in-preparation',
+  'passed',
+  'proof-sent',
+  'approved',
+  'released',
+  'running',
+  'finished',
+  'handed-over',
+];
 
 /** Brings one order of the demo shop as far as it is to come, through the same use cases as everybody's. */
 export async function carryDemoOrder(shop: DemoShop, demo: DemoOrder): Promise<void> {
   let order = await open(shop, demo);
   if (demo.state === 'cancelled') {
-    await causeEvent(shop.registered, order.number, { event: 'cancel', version: order.version, reason: 'Too long for the board; we order a smaller one.' });
+    await causeEvent(shop.registered, order.number, {
+      event: 'cancel',
+      version: order.version,
+      reason: 'Too long for the board; we order a smaller one.',
+    });
     return;
   }
   // A customer's own blank that nobody has identified goes on hold by itself when it is submitted.

@@ -12,7 +12,13 @@ import { enterWalkIn } from '../usecases/enter-walk-in';
 import { carryDemoOrder, type DemoShop } from './carry-demo-order';
 import { DEMO_ORDERS } from './demo-orders';
 
-const asPerson = ({ id, name, email, role, confirmed_at }: PersonRow): Person => ({ id, name, email, role, confirmed: confirmed_at !== null });
+const asPerson = ({ id, name, email, role, confirmed_at }: PersonRow): Person => ({
+  id,
+  name,
+  email,
+  role,
+  confirmed: confirmed_at !== null,
+});
 
 /** Somebody who came to the counter and has no account. */
 const WALK_IN = { name: 'Bram Adeyemi', email: 'bram.adeyemi@kettle-lane.example' };
@@ -58,5 +64,7 @@ export async function openDemoShop(): Promise<void> {
       log.warn({ err: error, title: demo.title }, 'an order of the demo shop was left half-way');
     }
   }
-  await withWrite((trx) => audit(trx, { by: null, event: 'fill-demo-shop', subject: 'shop', words: 'orders in every state' }));
+  await withWrite((trx) =>
+    audit(trx, { by: null, event: 'fill-demo-shop', subject: 'shop', words: 'orders in every state' }),
+  );
 }

@@ -96,6 +96,11 @@ export function eventStream({ personId, request, look, times = {} }: Options): R
     { highWaterMark: 8 },
   );
   return new Response(body, {
-    headers: { 'content-type': 'text/event-stream', 'cache-control': 'no-cache, no-transform', 'x-accel-buffering': 'no', 'x-content-type-options': 'nosniff' },
+    headers: {
+      'content-type': 'text/event-stream',
+      'cache-control': 'no-cache, no-transform',
+      'x-accel-buffering': 'no',
+      'x-content-type-options': 'nosniff',
+    },
   });
 }

@@ -7,7 +7,11 @@ import { artworkSubject } from './subjects';
 const SETTLE_MS = 400;
 
 /** Has an order's newest artwork checked, in place of any check that is under way. */
-export async function askForCheck(trx: Transaction, orderId: number, when: 'at-once' | 'settled'): Promise<void> {
+export async function askForCheck(
+  trx: Transaction,
+  orderId: number,
+  when: 'at-once' | 'settled',
+): Promise<void> {
   const artwork = await latestArtwork(trx, orderId);
   if (!artwork) return;
   await askAnew(trx, {

@@ -13,7 +13,12 @@ export async function findOrder(db: Db, person: Person, number: string): Promise
 }
 
 /** The same, for a change: refuses when another tab or person has changed it since. */
-export async function findUnchangedOrder(db: Db, person: Person, number: string, version: number): Promise<OrderRow> {
+export async function findUnchangedOrder(
+  db: Db,
+  person: Person,
+  number: string,
+  version: number,
+): Promise<OrderRow> {
   const row = await findOrder(db, person, number);
   if (row.version !== version) throw new AppError('conflict');
   return row;

@@ -63,7 +63,9 @@ export async function loadOrder(db: Db, row: OrderRow): Promise<LoadedOrder> {
 }
 
 /** Settings that a preparation would have now; null while size, design or machine are missing. */
-export function currentSettings(order: Pick<LoadedOrder, 'row' | 'number' | 'fields' | 'design' | 'machine' | 'stock'>): Settings | null {
+export function currentSettings(
+  order: Pick<LoadedOrder, 'row' | 'number' | 'fields' | 'design' | 'machine' | 'stock'>,
+): Settings | null {
   const { row, number, fields, design, machine, stock } = order;
   const spot = machine?.spotPresets.find(({ id }) => id === design?.spotPresetId);
   if (!design || !machine || !spot || fields.widthMm === null || fields.heightMm === null) return null;

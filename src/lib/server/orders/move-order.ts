@@ -39,7 +39,11 @@ export const VOIDED: OrderChange = {
 };
 
 /** Where the event leads from here for this person; throws when the life of an order does not have it. */
-export function requireNextState(order: Pick<LoadedOrder, 'row'>, event: OrderEvent, person: Person): OrderState {
+export function requireNextState(
+  order: Pick<LoadedOrder, 'row'>,
+  event: OrderEvent,
+  person: Person,
+): OrderState {
   const { state, former_state } = order.row;
   const next = nextState(state, event, person.role);
   if (next === null) throw new AppError('not-now', { detail: `The order is ${state.replaceAll('-', ' ')}.` });
@@ -81,7 +85,8 @@ export async function moveOrder(
     const state = change.state ?? next;
     const left: OrderChange = row.state === 'on-hold' ? { former_state: null, held_because: '' } : {};
     const voided = VOIDING_EVENTS.includes(event) ? VOIDED : {};
-    if (!(await changeOrder(trx, row, { ...left, ...voided, ...change, state }))) throw new AppError('conflict');
+    if (!(await changeOrder(trx, row, { ...left, ...voided, ...change, state })))
+      throw new AppError('conflict');
     await audit(trx, { by: person, event, subject: number, from: row.state, to: next, words });
     await also?.(trx, order);
     return viewAfter(trx, row.id, person);

@@ -57,7 +57,14 @@ export function preparationView(order: LoadedOrder, row: ListedPreparation): Pre
 }
 
 /** States in which the customer looks at what was passed. */
-const PROOF_STATES: readonly OrderState[] = ['proof-sent', 'approved', 'released', 'running', 'finished', 'handed-over'];
+const PROOF_STATES: readonly OrderState[] = [
+  'proof-sent',
+  'approved',
+  'released',
+  'running',
+  'finished',
+  'handed-over',
+];
 
 /** Whether a customer may look at a preparation: only at the one that was passed, and only once its proof is sent. */
 export function customerSeesPreparation(order: Pick<LoadedOrder, 'row'>, preparationId: number): boolean {
@@ -68,7 +75,8 @@ export function customerSeesPreparation(order: Pick<LoadedOrder, 'row'>, prepara
 /** What a customer sees of a preparation: the picture of the piece and its findings, none of the shop's settings. */
 export function preparationForCustomer(view: PreparationView): PreparationView {
   const { report } = view;
-  const passes = report?.passes.map((pass) => ({ ...pass, doseJPerMm2: null, scanSeconds: null, runOffMm: null })) ?? [];
+  const passes =
+    report?.passes.map((pass) => ({ ...pass, doseJPerMm2: null, scanSeconds: null, runOffMm: null })) ?? [];
   return {
     ...view,
     design: { ...view.design, recipe: null },
@@ -94,7 +102,19 @@ const historyEntry = (row: RecordRow): OrderView['history'][number] => ({
 });
 
 /** Happenings in the shop that a customer need not follow. */
-const SHOP_ONLY: readonly string[] = ['take', 'pass', 'release', 'recall', 'on-the-machine', 'spoiled', 'waive', 'unwaive', 'design', 'prepare', 'check-again'];
+const SHOP_ONLY: readonly string[] = [
+  'take',
+  'pass',
+  'release',
+  'recall',
+  'on-the-machine',
+  'spoiled',
+  'waive',
+  'unwaive',
+  'design',
+  'prepare',
+  'check-again',
+];
 
 function waits(order: LoadedOrder, role: Role, events: readonly OrderEvent[]): Record<string, string> {
   const facts = ruleFacts(order, role);
@@ -106,15 +126,27 @@ function waits(order: LoadedOrder, role: Role, events: readonly OrderEvent[]): R
   );
 }
 
-function signatures({ row }: LoadedOrder, namesById: ReadonlyMap<number, string>): Pick<OrderView, 'passed' | 'approved'> {
+function signatures(
+  { row }: LoadedOrder,
+  namesById: ReadonlyMap<number, string>,
+): Pick<OrderView, 'passed' | 'approved'> {
   return {
     passed:
       row.passed_at && row.passed_manifest_sha256
-        ? { by: namesById.get(row.passed_by ?? 0) ?? '', at: row.passed_at, manifestSha256: row.passed_manifest_sha256 }
+        ? {
+            by: namesById.get(row.passed_by ?? 0) ?? '',
+            at: row.passed_at,
+            manifestSha256: row.passed_manifest_sha256,
+          }
         : null,
     approved:
       row.approved_at && row.approved_manifest_sha256
-        ? { by: row.approved_by ?? '', at: row.approved_at, manifestSha256: row.approved_manifest_sha256, how: row.approved_how ?? '' }
+        ? {
+            by: row.approved_by ?? '',
+            at: row.approved_at,
+            manifestSha256: row.approved_manifest_sha256,
+            how: row.approved_how ?? '',
+          }
         : null,
   };
 }
@@ -123,7 +155,9 @@ function forCustomer(order: LoadedOrder, view: OrderView): OrderView {
   return {
     ...view,
     design: null,
-    preparations: view.preparations.filter(({ id }) => customerSeesPreparation(order, id)).map(preparationForCustomer),
+    preparations: view.preparations
+      .filter(({ id }) => customerSeesPreparation(order, id))
+      .map(preparationForCustomer),
     waivers: [],
     outcomes: [],
     history: view.history.filter(({ event }) => !SHOP_ONLY.includes(event)),
@@ -134,7 +168,9 @@ function forCustomer(order: LoadedOrder, view: OrderView): OrderView {
 export function orderView(order: LoadedOrder, role: Role): OrderView {
   const { row, customer } = order;
   const events = possibleEvents(row.state, role);
-  const passer = new Map(order.record.flatMap(({ person_id, by }) => (person_id === null ? [] : [[person_id, by] as const])));
+  const passer = new Map(
+    order.record.flatMap(({ person_id, by }) => (person_id === null ? [] : [[person_id, by] as const])),
+  );
   const view: OrderView = {
     number: order.number,
     state: row.state,
@@ -149,9 +185,22 @@ export function orderView(order: LoadedOrder, role: Role): OrderView {
     design: order.design,
     preparations: order.preparations.map((preparation) => preparationView(order, preparation)),
     ...signatures(order, passer),
-    waivers: order.waivers.map((w) => ({ findingId: w.finding_id, artworkVersion: w.artwork_version, reason: w.reason, by: w.waiver, at: w.waived_at })),
+    waivers: order.waivers.map((w) => ({
+      findingId: w.finding_id,
+      artworkVersion: w.artwork_version,
+      reason: w.reason,
+      by: w.waiver,
+      at: w.waived_at,
+    })),
     heldBecause: row.held_because,
-    outcomes: order.outcomes.map((o) => ({ at: o.at, by: o.recorder, kind: o.kind, words: o.words, measuredLstar: o.measured_lstar, cost: o.cost })),
+    outcomes: order.outcomes.map((o) => ({
+      at: o.at,
+      by: o.recorder,
+      kind: o.kind,
+      words: o.words,
+      measuredLstar: o.measured_lstar,
+      cost: o.cost,
+    })),
     history: order.record.map(historyEntry),
     events,
     waitsFor: waits(order, role, events),

@@ -8,5 +8,8 @@ export async function requireKnownStock(db: Db, fields: OrderFields, before?: Or
   const id = fields.blank?.stockId ?? null;
   if (id === null || id === before?.blank?.stockId) return;
   const stock = await stockById(db, id);
-  if (!stock || stock.retired) throw new AppError('malformed', { fields: { 'blank.stockId': 'The shop has no such stock. Choose another.' } });
+  if (!stock || stock.retired)
+    throw new AppError('malformed', {
+      fields: { 'blank.stockId': 'The shop has no such stock. Choose another.' },
+    });
 }

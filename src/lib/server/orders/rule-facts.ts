@@ -38,7 +38,8 @@ function preparationFacts(order: LoadedOrder, row: ListedPreparation): Preparati
 export function ruleFacts(order: LoadedOrder, role: Role, preparationId?: number): RuleFacts {
   const artwork = order.artworks.at(-1);
   const wanted = preparationId ?? order.row.passed_preparation_id;
-  const preparation = wanted === null ? order.preparations[0] : order.preparations.find(({ id }) => id === wanted);
+  const preparation =
+    wanted === null ? order.preparations[0] : order.preparations.find(({ id }) => id === wanted);
   return {
     fields: order.fields,
     stock: order.stock,

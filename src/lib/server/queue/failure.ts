@@ -27,7 +27,8 @@ export interface Failure {
 export const LOST_WORDS =
   'The work broke off three times without an answer, as it does when the machine is switched off or runs out of memory. Start it again; if it breaks off again, try a smaller size or a wider line pitch.';
 
-const minutes = (ms: number): string => (ms < 120_000 ? `${Math.max(1, Math.round(ms / 1000))} seconds` : `${Math.round(ms / 60_000)} minutes`);
+const minutes = (ms: number): string =>
+  ms < 120_000 ? `${Math.max(1, Math.round(ms / 1000))} seconds` : `${Math.round(ms / 60_000)} minutes`;
 
 /** What a person is told of an error that ended an attempt. */
 export function failureOf(error: unknown): Failure {
@@ -43,13 +44,21 @@ export function failureOf(error: unknown): Failure {
     };
   }
   if (isDiskFull(error)) {
-    return { words: 'The disk is full, so the result could not be kept. Make room on the shop’s machine, then start it again.', again: true };
+    return {
+      words:
+        'The disk is full, so the result could not be kept. Make room on the shop’s machine, then start it again.',
+      again: true,
+    };
   }
   if (error instanceof StorageError) {
-    return { words: 'A stored file is missing or damaged, so there is nothing to work from. Send the artwork again.', again: false };
+    return {
+      words: 'A stored file is missing or damaged, so there is nothing to work from. Send the artwork again.',
+      again: false,
+    };
   }
   return {
-    words: 'Something broke on our side while it was worked on; it has been written down. Start it again; if it fails again, tell the shop’s admin.',
+    words:
+      'Something broke on our side while it was worked on; it has been written down. Start it again; if it fails again, tell the shop’s admin.',
     // Data that does not fit its schema will not fit it the next time either.
     again: !(error instanceof z.ZodError),
   };

@@ -30,7 +30,11 @@ export function taskHandler<S extends z.ZodType>(kind: {
   run(payload: z.output<S>, context: TaskContext): Promise<Commit>;
 }): TaskHandler {
   const { name, timeLimitMs } = kind;
-  return { name, timeLimitMs, run: async (payload, context) => kind.run(kind.payload.parse(payload), context) };
+  return {
+    name,
+    timeLimitMs,
+    run: async (payload, context) => kind.run(kind.payload.parse(payload), context),
+  };
 }
 
 /** Refuses a set of handlers in which a name has none or two: a task that nobody takes would wait for ever. */

@@ -1,6 +1,15 @@
 import { database, withWrite } from '../db';
 import { log } from '../log';
-import { claimTask, endTask, extendLease, failLostTasks, noteProgress, returnTask, type Claim, type TaskRow } from '../tables/tasks';
+import {
+  claimTask,
+  endTask,
+  extendLease,
+  failLostTasks,
+  noteProgress,
+  returnTask,
+  type Claim,
+  type TaskRow,
+} from '../tables/tasks';
 import { failureOf, LetGoError, LOST_WORDS, TimeLimitError } from './failure';
 import type { Commit, TaskContext, TaskHandler } from './handler';
 
@@ -97,7 +106,10 @@ export class Lane {
     this.#running = { claim, abort };
     const { timeLimitMs } = this.#handler;
     const limit = setTimeout(() => abort.abort(new TimeLimitError(timeLimitMs)), timeLimitMs);
-    const beat = setInterval(() => void this.#beat().catch((error: unknown) => log.warn({ err: error }, 'a lease was not extended')), this.#times.leaseMs / 3);
+    const beat = setInterval(
+      () => void this.#beat().catch((error: unknown) => log.warn({ err: error }, 'a lease was not extended')),
+      this.#times.leaseMs / 3,
+    );
     const progress = this.#progressOf(claim);
     try {
       const commit = await this.#attempt(task, { signal: abort.signal, progress: progress.note });
@@ -131,7 +143,10 @@ export class Lane {
   async #settle(task: TaskRow, claim: Claim, error: unknown): Promise<void> {
     if (error instanceof LetGoError) return returnTask(database(), claim, Date.now(), false);
     const { words, again } = failureOf(error);
-    log.warn({ err: error, task: task.name, subject: task.subject, failures: task.failures + 1 }, 'a task failed');
+    log.warn(
+      { err: error, task: task.name, subject: task.subject, failures: task.failures + 1 },
+      'a task failed',
+    );
     if (again && task.failures + 1 < MOST_FAILURES) {
       return returnTask(database(), claim, Date.now() + this.#times.retryMs * (task.failures + 1), true);
     }
@@ -148,9 +163,11 @@ export class Lane {
       if (!latest) return;
       const [stage, progress] = latest;
       latest = null;
-      writing = noteProgress(database(), claim, stage, Math.min(1, Math.max(0, progress))).catch((error: unknown) => {
-        log.warn({ err: error }, 'progress was not written');
-      });
+      writing = noteProgress(database(), claim, stage, Math.min(1, Math.max(0, progress))).catch(
+        (error: unknown) => {
+          log.warn({ err: error }, 'progress was not written');
+        },
+      );
     };
     return {
       note: (stage, progress) => {

@@ -15,7 +15,11 @@ export interface Pipeline {
   /** @throws ArtworkError */
   check(bytes: Uint8Array, settings: CheckSettings, context: TaskContext): Promise<Checked>;
   /** @throws ArtworkError */
-  prepare(bytes: Uint8Array, request: { settings: Settings; artworkVersion: number }, context: TaskContext): Promise<Prepared>;
+  prepare(
+    bytes: Uint8Array,
+    request: { settings: Settings; artworkVersion: number },
+    context: TaskContext,
+  ): Promise<Prepared>;
   /** Key of the preparation that such a request gives: the same request, the same key. */
   keyOf(artworkSha256: string, request: { settings: Settings; artworkVersion: number }): Promise<string>;
 }
@@ -24,7 +28,9 @@ const slot = globalThis as typeof globalThis & { umberlinePipeline?: Promise<Pip
 
 /** The shop's pipeline, started on first use. */
 export function pipeline(): Promise<Pipeline> {
-  return (slot.umberlinePipeline ??= import('./threads').then(({ pipelineInThreads }) => pipelineInThreads()));
+  return (slot.umberlinePipeline ??= import('./threads').then(({ pipelineInThreads }) =>
+    pipelineInThreads(),
+  ));
 }
 
 /** Puts another pipeline in its place; for tests. */

@@ -28,7 +28,11 @@ const PREPARE: Record<string, StageShare> = {
  * How far a whole piece of work is when one of its stages is.
  * @param progress of the stage, 0–1
  */
-export function workProgress(work: 'check' | 'prepare', stage: string, progress: number): { words: string; progress: number } {
+export function workProgress(
+  work: 'check' | 'prepare',
+  stage: string,
+  progress: number,
+): { words: string; progress: number } {
   const share = (work === 'check' ? CHECK : PREPARE)[stage] ?? { words: stage, from: 0, to: 0 };
   return { words: share.words, progress: share.from + (share.to - share.from) * progress };
 }

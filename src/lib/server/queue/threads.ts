@@ -35,7 +35,10 @@ function moved({ buffer, byteLength }: Uint8Array): ArrayBuffer[] {
   return whole && byteLength >= MOVED_FROM_BYTES ? [buffer] : [];
 }
 
-async function inThread<T>(work: Work, { signal, port }: { signal?: AbortSignal; port?: MessagePort }): Promise<T> {
+async function inThread<T>(
+  work: Work,
+  { signal, port }: { signal?: AbortSignal; port?: MessagePort },
+): Promise<T> {
   const transferList = [...(port ? [port] : []), ...moved(work.bytes)];
   const answer = (await threads().run(work, { signal, transferList })) as Answer<T>;
   if (!answer.ok) throw new ArtworkError(answer.code, answer.message);
@@ -44,7 +47,11 @@ async function inThread<T>(work: Work, { signal, port }: { signal?: AbortSignal;
 
 type Long = Exclude<Work, { kind: 'read' }>;
 
-async function withProgress<T>(kind: Long['kind'], context: TaskContext, workOf: (port: MessagePort) => Long): Promise<T> {
+async function withProgress<T>(
+  kind: Long['kind'],
+  context: TaskContext,
+  workOf: (port: MessagePort) => Long,
+): Promise<T> {
   const { port1, port2 } = new MessageChannel();
   port1.on('message', ([stage, share]: [string, number]) => {
     const { words, progress } = workProgress(kind, stage, share);
@@ -68,7 +75,8 @@ async function readInTime(bytes: Uint8Array): Promise<{ format: ArtworkFormat }>
     return await inThread<{ format: ArtworkFormat }>({ kind: 'read', bytes }, { signal });
   } catch (error) {
     if (!signal.aborted) throw error;
-    const words = 'This file takes too long to read. Export it with fewer details or at a smaller size, and send that.';
+    const words =
+      'This file takes too long to read. Export it with fewer details or at a smaller size, and send that.';
     throw new ArtworkError('too-slow', words, { cause: error });
   }
 }
@@ -77,8 +85,10 @@ async function readInTime(bytes: Uint8Array): Promise<{ format: ArtworkFormat }>
 export function pipelineInThreads(): Pipeline {
   return {
     read: readInTime,
-    check: (bytes, settings, context) => withProgress<Checked>('check', context, (port) => ({ kind: 'check', bytes, settings, port })),
-    prepare: (bytes, request, context) => withProgress<Prepared>('prepare', context, (port) => ({ kind: 'prepare', bytes, ...request, port })),
+    check: (bytes, settings, context) =>
+      withProgress<Checked>('check', context, (port) => ({ kind: 'check', bytes, settings, port })),
+    prepare: (bytes, request, context) =>
+      withProgress<Prepared>('prepare', context, (port) => ({ kind: 'prepare', bytes, ...request, port })),
     keyOf: async (artworkSha256, request) => preparationKey({ artworkSha256, ...request }, { sha256 }),
   };
 }

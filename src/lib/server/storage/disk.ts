@@ -31,7 +31,8 @@ class DiskStorage implements Storage {
   async open(): Promise<this> {
     await mkdir(this.#stored, { recursive: true });
     await mkdir(this.#arriving, { recursive: true });
-    for (const name of await readdir(this.#arriving)) await rm(path.join(this.#arriving, name), { force: true });
+    for (const name of await readdir(this.#arriving))
+      await rm(path.join(this.#arriving, name), { force: true });
     return this;
   }
 

@@ -11,7 +11,13 @@ export function memoryStorage(freeBytes = 1e12): Storage {
       stored.set(key, bytes);
       return key;
     };
-    return { key, bytes: bytes.byteLength, read: async () => bytes.slice(), keep, discard: async () => undefined };
+    return {
+      key,
+      bytes: bytes.byteLength,
+      read: async () => bytes.slice(),
+      keep,
+      discard: async () => undefined,
+    };
   }
   function found(key: StorageKey): Uint8Array {
     assertKey(key);

@@ -41,7 +41,8 @@ const KEY = /^[0-9a-f]{64}$/;
 
 /** A key is checked before it becomes part of a path. */
 export function assertKey(key: StorageKey): void {
-  if (!KEY.test(key)) throw new StorageError('bad-key', `expected 64 hexadecimal digits, got ${JSON.stringify(key)}`);
+  if (!KEY.test(key))
+    throw new StorageError('bad-key', `expected 64 hexadecimal digits, got ${JSON.stringify(key)}`);
 }
 
 export const missing = (key: StorageKey): StorageError =>

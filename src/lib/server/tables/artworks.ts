@@ -22,7 +22,10 @@ export const checkOf = (row: Pick<ArtworkRow, 'check_report'>): CheckReport | nu
 
 export async function insertArtwork(
   db: Db,
-  artwork: Pick<ArtworkRow, 'order_id' | 'version' | 'file_name' | 'media_type' | 'bytes' | 'sha256' | 'uploaded_by'>,
+  artwork: Pick<
+    ArtworkRow,
+    'order_id' | 'version' | 'file_name' | 'media_type' | 'bytes' | 'sha256' | 'uploaded_by'
+  >,
 ): Promise<number> {
   const [row] = await db('artworks')
     .insert({ ...artwork, uploaded_at: new Date().toISOString() })
@@ -34,12 +37,19 @@ export async function artworkById(db: Db, id: number): Promise<ArtworkRow | unde
   return db<ArtworkRow>('artworks').where({ id }).first();
 }
 
-export async function artworkByVersion(db: Db, orderId: number, version: number): Promise<ArtworkRow | undefined> {
+export async function artworkByVersion(
+  db: Db,
+  orderId: number,
+  version: number,
+): Promise<ArtworkRow | undefined> {
   return db<ArtworkRow>('artworks').where({ order_id: orderId, version }).first();
 }
 
 /** Versions of an order's artwork with the name of whoever sent them, oldest first. */
-export async function artworksOfOrder(db: Db, orderId: number): Promise<(ArtworkRow & { uploader: string })[]> {
+export async function artworksOfOrder(
+  db: Db,
+  orderId: number,
+): Promise<(ArtworkRow & { uploader: string })[]> {
   return db('artworks as a')
     .join('people as p', 'p.id', 'a.uploaded_by')
     .where('a.order_id', orderId)
@@ -51,12 +61,20 @@ export async function latestArtwork(db: Db, orderId: number): Promise<ArtworkRow
   return db<ArtworkRow>('artworks').where({ order_id: orderId }).orderBy('version', 'desc').first();
 }
 
-export async function keepCheck(db: Db, id: number, report: CheckReport, pictureSha256: string): Promise<void> {
-  const ids = (severity: string): string[] => report.findings.filter((f) => f.severity === severity).map((f) => f.id);
-  await db('artworks').where({ id }).update({
-    check_report: JSON.stringify(report),
-    blocker_ids: JSON.stringify(ids('blocker')),
-    warnings: ids('warning').length,
-    picture_sha256: pictureSha256,
-  });
+export async function keepCheck(
+  db: Db,
+  id: number,
+  report: CheckReport,
+  pictureSha256: string,
+): Promise<void> {
+  const ids = (severity: string): string[] =>
+    report.findings.filter((f) => f.severity === severity).map((f) => f.id);
+  await db('artworks')
+    .where({ id })
+    .update({
+      check_report: JSON.stringify(report),
+      blocker_ids: JSON.stringify(ids('blocker')),
+      warnings: ids('warning').length,
+      picture_sha256: pictureSha256,
+    });
 }

@@ -46,12 +46,26 @@ export interface OrderRow {
 }
 
 /** What a change of an order writes; version and time are written by `changeOrder`. */
-export type OrderChange = Partial<Omit<OrderRow, 'id' | 'version' | 'updated_at' | 'created_at' | 'customer_id' | 'opened_by'>>;
+export type OrderChange = Partial<
+  Omit<OrderRow, 'id' | 'version' | 'updated_at' | 'created_at' | 'customer_id' | 'opened_by'>
+>;
 
 type FieldColumns = Pick<
   OrderRow,
-  | 'title' | 'quantity' | 'due_on' | 'width_mm' | 'height_mm' | 'blank' | 'stock_id' | 'placement' | 'treatment'
-  | 'shade_lstar' | 'route' | 'use' | 'notes' | 'without_proof'
+  | 'title'
+  | 'quantity'
+  | 'due_on'
+  | 'width_mm'
+  | 'height_mm'
+  | 'blank'
+  | 'stock_id'
+  | 'placement'
+  | 'treatment'
+  | 'shade_lstar'
+  | 'route'
+  | 'use'
+  | 'notes'
+  | 'without_proof'
 >;
 
 /** The stock has a column of its own, so that the database keeps it from vanishing. */
@@ -96,10 +110,22 @@ export function fieldsOf(row: OrderRow): OrderFields {
 export const designOf = (row: Pick<OrderRow, 'design'>): Design | null =>
   row.design === null ? null : designSchema.parse(JSON.parse(row.design));
 
-export async function insertOrder(db: Db, customerId: number, openedBy: number, fields: OrderFields): Promise<number> {
+export async function insertOrder(
+  db: Db,
+  customerId: number,
+  openedBy: number,
+  fields: OrderFields,
+): Promise<number> {
   const at = new Date().toISOString();
   const [row] = await db('orders')
-    .insert({ customer_id: customerId, opened_by: openedBy, state: 'draft', created_at: at, updated_at: at, ...fieldColumns(fields) })
+    .insert({
+      customer_id: customerId,
+      opened_by: openedBy,
+      state: 'draft',
+      created_at: at,
+      updated_at: at,
+      ...fieldColumns(fields),
+    })
     .returning<{ id: number }[]>('id');
   return row.id;
 }
@@ -109,7 +135,11 @@ export async function orderById(db: Db, id: number): Promise<OrderRow | undefine
 }
 
 /** The one guarded update: nothing is written unless the order is still in the state and version that the caller saw. */
-export async function changeOrder(db: Db, seen: Pick<OrderRow, 'id' | 'state' | 'version'>, change: OrderChange): Promise<boolean> {
+export async function changeOrder(
+  db: Db,
+  seen: Pick<OrderRow, 'id' | 'state' | 'version'>,
+  change: OrderChange,
+): Promise<boolean> {
   const changed = await db('orders')
     .where({ id: seen.id, state: seen.state, version: seen.version })
     .update({ ...change, version: seen.version + 1, updated_at: new Date().toISOString() });

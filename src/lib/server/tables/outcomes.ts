@@ -16,7 +16,10 @@ export async function insertOutcome(db: Db, outcome: Omit<OutcomeRow, 'at'>): Pr
 }
 
 /** How an order came out, oldest first. */
-export async function outcomesOfOrder(db: Db, orderId: number): Promise<(OutcomeRow & { recorder: string })[]> {
+export async function outcomesOfOrder(
+  db: Db,
+  orderId: number,
+): Promise<(OutcomeRow & { recorder: string })[]> {
   return db('outcomes as o')
     .join('people as p', 'p.id', 'o.recorded_by')
     .where('o.order_id', orderId)

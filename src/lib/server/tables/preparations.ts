@@ -33,7 +33,14 @@ export interface PreparedFileRow {
 
 export async function insertPreparation(
   db: Db,
-  made: { orderId: number; artworkId: number; key: string; design: Design; settings: Settings; startedBy: number },
+  made: {
+    orderId: number;
+    artworkId: number;
+    key: string;
+    design: Design;
+    settings: Settings;
+    startedBy: number;
+  },
 ): Promise<number> {
   const [row] = await db('preparations')
     .insert({
@@ -49,7 +56,11 @@ export async function insertPreparation(
   return row.id;
 }
 
-export async function preparationByKey(db: Db, orderId: number, key: string): Promise<PreparationRow | undefined> {
+export async function preparationByKey(
+  db: Db,
+  orderId: number,
+  key: string,
+): Promise<PreparationRow | undefined> {
   return db<PreparationRow>('preparations').where({ order_id: orderId, key }).first();
 }
 
@@ -80,7 +91,11 @@ export async function preparedFilesOfOrder(db: Db, orderId: number): Promise<Pre
     .select('f.*');
 }
 
-export async function preparedFile(db: Db, preparationId: number, name: string): Promise<PreparedFileRow | undefined> {
+export async function preparedFile(
+  db: Db,
+  preparationId: number,
+  name: string,
+): Promise<PreparedFileRow | undefined> {
   return db<PreparedFileRow>('prepared_files').where({ preparation_id: preparationId, name }).first();
 }
 

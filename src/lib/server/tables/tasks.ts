@@ -27,7 +27,8 @@ export interface Claim {
 }
 
 const now = (): string => new Date().toISOString();
-const held = (db: Db, { id, attempt }: Claim) => db<TaskRow>('tasks').where({ id, attempt, state: 'running' });
+const held = (db: Db, { id, attempt }: Claim) =>
+  db<TaskRow>('tasks').where({ id, attempt, state: 'running' });
 
 export async function insertTask(
   db: Db,
@@ -43,14 +44,23 @@ export async function openTask(db: Db, name: string, subject: string): Promise<T
 
 /** Ends an open task that a newer one replaces; whoever runs it cannot complete it any more. */
 export async function supersedeTask(db: Db, name: string, subject: string): Promise<void> {
-  await db('tasks').where({ name, subject }).whereIn('state', ['waiting', 'running']).update({ state: 'superseded', finished_at: now() });
+  await db('tasks')
+    .where({ name, subject })
+    .whereIn('state', ['waiting', 'running'])
+    .update({ state: 'superseded', finished_at: now() });
 }
 
 /**
  * Takes the next due task of a name, or one whose lease ran out, in a single guarded statement.
  * A lease that ran out counts as a failure of the attempt that held it.
  */
-export async function claimTask(db: Db, name: string, nowMs: number, leaseMs: number, mostFailures: number): Promise<TaskRow | null> {
+export async function claimTask(
+  db: Db,
+  name: string,
+  nowMs: number,
+  leaseMs: number,
+  mostFailures: number,
+): Promise<TaskRow | null> {
   const rows: TaskRow[] = await db.raw(
     `update tasks
      set failures = failures + (state = 'running'), state = 'running', attempt = attempt + 1,
@@ -68,7 +78,13 @@ export async function claimTask(db: Db, name: string, nowMs: number, leaseMs: nu
 }
 
 /** Ends tasks whose last allowed attempt was lost with its worker. */
-export async function failLostTasks(db: Db, name: string, nowMs: number, mostFailures: number, problem: string): Promise<number> {
+export async function failLostTasks(
+  db: Db,
+  name: string,
+  nowMs: number,
+  mostFailures: number,
+  problem: string,
+): Promise<number> {
   return db('tasks')
     .where({ name, state: 'running' })
     .where('lease_until_ms', '<=', nowMs)
@@ -86,7 +102,12 @@ export async function noteProgress(db: Db, claim: Claim, stage: string, progress
 }
 
 /** Ends a task, and says whether the claim was still good for it. */
-export async function endTask(db: Db, claim: Claim, state: 'done' | 'failed', problem = ''): Promise<boolean> {
+export async function endTask(
+  db: Db,
+  claim: Claim,
+  state: 'done' | 'failed',
+  problem = '',
+): Promise<boolean> {
   const ended = { state, problem, lease_until_ms: null, finished_at: now() };
   return (await held(db, claim).update(state === 'done' ? { ...ended, progress: 1 } : ended)) === 1;
 }
@@ -110,6 +131,8 @@ export async function tasksOfOrder(db: Db, orderId: number): Promise<TaskRow[]> 
 
 /** Whether the queue's table can be read. */
 export async function countOpenTasks(db: Db): Promise<number> {
-  const rows = await db('tasks').whereIn('state', ['waiting', 'running']).count<{ count: number }[]>({ count: '*' });
+  const rows = await db('tasks')
+    .whereIn('state', ['waiting', 'running'])
+    .count<{ count: number }[]>({ count: '*' });
   return rows[0].count;
 }

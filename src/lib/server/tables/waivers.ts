@@ -17,8 +17,17 @@ export async function keepWaiver(db: Db, waiver: Omit<WaiverRow, 'waived_at'>): 
     .merge();
 }
 
-export async function deleteWaiver(db: Db, orderId: number, artworkVersion: number, findingId: string): Promise<boolean> {
-  return (await db('waivers').where({ order_id: orderId, artwork_version: artworkVersion, finding_id: findingId }).delete()) === 1;
+export async function deleteWaiver(
+  db: Db,
+  orderId: number,
+  artworkVersion: number,
+  findingId: string,
+): Promise<boolean> {
+  return (
+    (await db('waivers')
+      .where({ order_id: orderId, artwork_version: artworkVersion, finding_id: findingId })
+      .delete()) === 1
+  );
 }
 
 export async function waiversOfOrder(db: Db, orderId: number): Promise<(WaiverRow & { waiver: string })[]> {

@@ -21,7 +21,10 @@ async function settingsOf(db: Db, artwork: ArtworkRow): Promise<CheckSettings> {
   const machines = await allMachines(db);
   const ready = machines.filter(({ retired, spotPresets }) => !retired && spotPresets.length > 0);
   const machine = machines.find(({ id }) => id === design?.machineId) ?? ready[0] ?? null;
-  const spot = machine?.spotPresets.find(({ id }) => id === design?.spotPresetId) ?? machine?.spotPresets[0] ?? FIRST_SPOT;
+  const spot =
+    machine?.spotPresets.find(({ id }) => id === design?.spotPresetId) ??
+    machine?.spotPresets[0] ??
+    FIRST_SPOT;
   return checkSettingsFor(fieldsOf(row), design, machine, spot);
 }
 

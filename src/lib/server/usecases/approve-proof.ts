@@ -17,17 +17,31 @@ function signatureOf(person: Person, { inPerson }: Approval): { by: string; how:
 }
 
 /** Approves the very manifest that was looked at. */
-export async function approveProof(person: Person, number: string, version: number, approval: Approval): Promise<OrderView> {
+export async function approveProof(
+  person: Person,
+  number: string,
+  version: number,
+  approval: Approval,
+): Promise<OrderView> {
   const { by, how } = signatureOf(person, approval);
   return moveOrder(person, number, { event: 'approve', version }, (_, facts) => {
     const { manifestSha256 } = approval;
     const refusal = approvalRefusal(manifestSha256, facts.passedManifestSha256);
     if (refusal !== null) throw new AppError('conflict', { detail: refusal });
     return {
-      change: { approved_at: new Date().toISOString(), approved_by: by, approved_how: how, approved_manifest_sha256: manifestSha256 },
+      change: {
+        approved_at: new Date().toISOString(),
+        approved_by: by,
+        approved_how: how,
+        approved_manifest_sha256: manifestSha256,
+      },
       words: `${by}, ${how}; manifest ${manifestSha256}`,
       also: (trx, order) =>
-        queueMail(trx, order.customer.email, approvedMail({ ...aboutOrder(order, order.customer), approvedBy: by, how, manifestSha256 })),
+        queueMail(
+          trx,
+          order.customer.email,
+          approvedMail({ ...aboutOrder(order, order.customer), approvedBy: by, how, manifestSha256 }),
+        ),
     };
   });
 }

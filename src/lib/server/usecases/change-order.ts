@@ -12,7 +12,12 @@ import type { Person } from '../person';
 import { changeOrder, fieldColumns, fieldsOf } from '../tables/orders';
 
 /** Changes what an order says; a new size, blank, placement or treatment has the artwork checked again. */
-export async function changeOrderFields(person: Person, number: string, version: number, patch: OrderPatch): Promise<OrderView> {
+export async function changeOrderFields(
+  person: Person,
+  number: string,
+  version: number,
+  patch: OrderPatch,
+): Promise<OrderView> {
   return withWrite(async (trx) => {
     const row = await findUnchangedOrder(trx, person, number, version);
     const refusal = changeRefusal(patch, row.state, row.former_state, person.role);
@@ -22,7 +27,9 @@ export async function changeOrderFields(person: Person, number: string, version:
     await requireKnownStock(trx, after, before);
     if (!(await changeOrder(trx, row, fieldColumns(after)))) throw new AppError('conflict');
     if (row.state !== 'draft') {
-      const changed = (Object.keys(patch) as (keyof OrderPatch)[]).filter((key) => JSON.stringify(before[key]) !== JSON.stringify(after[key]));
+      const changed = (Object.keys(patch) as (keyof OrderPatch)[]).filter(
+        (key) => JSON.stringify(before[key]) !== JSON.stringify(after[key]),
+      );
       await audit(trx, { by: person, event: 'change', subject: number, words: changed.join(', ') });
     }
     if (asksForCheck(before, after)) await askForCheck(trx, row.id, 'settled');

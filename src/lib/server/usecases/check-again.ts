@@ -13,7 +13,8 @@ export async function checkAgain(person: Person, number: string, artworkVersion:
     const row = await findOrder(trx, person, number);
     const newest = await latestArtwork(trx, row.id);
     if (!newest || artworkVersion > newest.version) throw new AppError('not-found');
-    if (artworkVersion < newest.version) throw new AppError('not-now', { detail: 'There is newer artwork; only that is checked.' });
+    if (artworkVersion < newest.version)
+      throw new AppError('not-now', { detail: 'There is newer artwork; only that is checked.' });
     await askForCheck(trx, row.id, 'at-once');
     return viewAfter(trx, row.id, person);
   });

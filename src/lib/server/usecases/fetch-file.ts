@@ -25,7 +25,11 @@ export async function fetchOriginal(person: Person, number: string, version: num
   return { key: artwork.sha256, fileName: artwork.file_name };
 }
 
-export async function fetchArtworkPicture(person: Person, number: string, version: number): Promise<StoredFile> {
+export async function fetchArtworkPicture(
+  person: Person,
+  number: string,
+  version: number,
+): Promise<StoredFile> {
   const artwork = await findArtwork(person, number, version);
   if (!artwork.picture_sha256) throw new AppError('not-found');
   return { key: artwork.picture_sha256, fileName: `${number}-artwork-${version}.png` };
@@ -40,14 +44,24 @@ export async function findPreparation(person: Person, number: string, id: number
   return preparation;
 }
 
-export async function fetchPreparedFile(person: Person, number: string, id: number, name: string): Promise<StoredFile> {
+export async function fetchPreparedFile(
+  person: Person,
+  number: string,
+  id: number,
+  name: string,
+): Promise<StoredFile> {
   const preparation = await findPreparation(person, number, id);
   const file = await preparedFile(database(), preparation.id, name);
   if (!file) throw new AppError('not-found');
   return { key: file.sha256, fileName: file.name };
 }
 
-export async function fetchPassagePicture(person: Person, number: string, id: number, name: string): Promise<StoredFile> {
+export async function fetchPassagePicture(
+  person: Person,
+  number: string,
+  id: number,
+  name: string,
+): Promise<StoredFile> {
   const preparation = await findPreparation(person, number, id);
   const pictures = JSON.parse(preparation.pictures) as Record<string, string>;
   const key = Object.hasOwn(pictures, name) ? pictures[name] : undefined;

@@ -17,8 +17,20 @@ export async function finishOrder(
     words: outcome.words,
     also: async (trx, order) => {
       const { words, measuredLstar } = outcome;
-      await insertOutcome(trx, { order_id: order.row.id, recorded_by: person.id, kind: 'done', words, measured_lstar: measuredLstar, new_blank: '', cost: '' });
-      await queueMail(trx, order.customer.email, finishedMail({ ...aboutOrder(order, order.customer), quantity: order.fields.quantity }));
+      await insertOutcome(trx, {
+        order_id: order.row.id,
+        recorded_by: person.id,
+        kind: 'done',
+        words,
+        measured_lstar: measuredLstar,
+        new_blank: '',
+        cost: '',
+      });
+      await queueMail(
+        trx,
+        order.customer.email,
+        finishedMail({ ...aboutOrder(order, order.customer), quantity: order.fields.quantity }),
+      );
     },
   }));
 }

@@ -9,5 +9,7 @@ export async function handOverOrder(
   version: number,
   leaving: { how: 'collected' | 'sent'; byWhom: string },
 ): Promise<OrderView> {
-  return moveOrder(person, number, { event: 'hand-over', version }, () => ({ words: `${leaving.how} by ${leaving.byWhom}` }));
+  return moveOrder(person, number, { event: 'hand-over', version }, () => ({
+    words: `${leaving.how} by ${leaving.byWhom}`,
+  }));
 }

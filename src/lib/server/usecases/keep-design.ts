@@ -23,19 +23,23 @@ function refuseUnfit(design: Design, machine: MachineView): void {
   if (recipe && design.perpendicular && !recipe.perpendicular) {
     fields['recipe.perpendicular'] = 'The perpendicular pass has power and speed of its own.';
   }
-  if (design.tone.blackPoint >= design.tone.whitePoint) fields['tone.blackPoint'] = 'The black point lies below the white point.';
+  if (design.tone.blackPoint >= design.tone.whitePoint)
+    fields['tone.blackPoint'] = 'The black point lies below the white point.';
   if (Object.keys(fields).length > 0) throw new AppError('malformed', { fields });
 }
 
 async function requireMachine(trx: Transaction, design: Design): Promise<MachineView> {
   const machine = await machineById(trx, design.machineId);
-  if (!machine || machine.retired) throw new AppError('malformed', { fields: { machineId: 'The shop has no such machine.' } });
+  if (!machine || machine.retired)
+    throw new AppError('malformed', { fields: { machineId: 'The shop has no such machine.' } });
   return machine;
 }
 
 /** What a check depends on: another spot or scan gives other limits. */
 const checked = (design: Design | null): string =>
-  JSON.stringify(design && [design.machineId, design.spotPresetId, design.scan, design.treatment, design.dividingLstar]);
+  JSON.stringify(
+    design && [design.machineId, design.spotPresetId, design.scan, design.treatment, design.dividingLstar],
+  );
 
 const keys = (design: Design): (keyof Design)[] => Object.keys(design) as (keyof Design)[];
 
@@ -61,7 +65,12 @@ const changedWords = (before: Design | null, after: Design): string =>
     .join(', ');
 
 /** Keeps the designer’s choices; a pass holds for what was prepared until it is prepared again. */
-export async function keepDesign(person: Person, number: string, version: number, design: Design): Promise<OrderView> {
+export async function keepDesign(
+  person: Person,
+  number: string,
+  version: number,
+  design: Design,
+): Promise<OrderView> {
   return withWrite(async (trx) => {
     const row = await findUnchangedOrder(trx, person, number, version);
     const open = row.state === 'submitted' || nextState(row.state, 'prepare-again', person.role) !== null;

@@ -34,11 +34,18 @@ export async function openOrder(person: Person, patch: OrderPatch, customerId?: 
   const forId = isStaff(person) ? (customerId as number) : person.id;
   return withWrite(async (trx) => {
     const customer = await personById(trx, forId);
-    if (customer?.role !== 'customer') throw new AppError('malformed', { fields: { customerId: 'There is no such customer.' } });
+    if (customer?.role !== 'customer')
+      throw new AppError('malformed', { fields: { customerId: 'There is no such customer.' } });
     const fields = orderFieldsSchema.parse({ ...EMPTY, ...patch });
     await requireKnownStock(trx, fields);
     const id = await insertOrder(trx, customer.id, person.id, fields);
-    await audit(trx, { by: person, event: 'open', subject: orderNumber(id), to: 'draft', words: isStaff(person) ? `for ${customer.name}` : '' });
+    await audit(trx, {
+      by: person,
+      event: 'open',
+      subject: orderNumber(id),
+      to: 'draft',
+      words: isStaff(person) ? `for ${customer.name}` : '',
+    });
     return viewAfter(trx, id, person);
   });
 }

@@ -3,7 +3,12 @@ import { moveOrder } from '../orders/move-order';
 import type { Person } from '../person';
 
 /** A designer signs a preparation off: name, time and manifest are kept. */
-export async function passOrder(person: Person, number: string, version: number, preparationId: number): Promise<OrderView> {
+export async function passOrder(
+  person: Person,
+  number: string,
+  version: number,
+  preparationId: number,
+): Promise<OrderView> {
   return moveOrder(person, number, { event: 'pass', version, preparationId }, (_, { preparation }) => ({
     change: {
       passed_at: new Date().toISOString(),

@@ -23,19 +23,35 @@ async function wantedNow(row: OrderRow): Promise<Wanted> {
   const order = await loadOrder(database(), row);
   const artwork = order.artworks.at(-1);
   if (!artwork) throw new AppError('order-waits', { detail: 'There is no artwork yet.' });
-  if (!order.design) throw new AppError('order-waits', { detail: 'Nothing is chosen yet. Choose machine, spot and treatment first.' });
+  if (!order.design)
+    throw new AppError('order-waits', {
+      detail: 'Nothing is chosen yet. Choose machine, spot and treatment first.',
+    });
   const settings = currentSettings(order);
-  if (!settings) throw new AppError('order-waits', { detail: 'The size is missing. Say how wide the engraving shall be.' });
+  if (!settings)
+    throw new AppError('order-waits', {
+      detail: 'The size is missing. Say how wide the engraving shall be.',
+    });
   const key = await (await pipeline()).keyOf(artwork.sha256, { settings, artworkVersion: artwork.version });
   return { order, artworkId: artwork.id, settings, key };
 }
 
 /** Asks for the files of a preparation that has none yet: a first time, or again after a failure. */
 async function askForFiles(trx: Transaction, orderId: number, preparationId: number): Promise<void> {
-  await askOnce(trx, { name: 'prepare-order', subject: preparationSubject(preparationId), orderId, payload: { preparationId } });
+  await askOnce(trx, {
+    name: 'prepare-order',
+    subject: preparationSubject(preparationId),
+    orderId,
+    payload: { preparationId },
+  });
 }
 
-async function start(trx: Transaction, person: Person, row: OrderRow, { order, artworkId, settings, key }: Wanted): Promise<number> {
+async function start(
+  trx: Transaction,
+  person: Person,
+  row: OrderRow,
+  { order, artworkId, settings, key }: Wanted,
+): Promise<number> {
   const known = await preparationByKey(trx, row.id, key);
   const next = requireNextState({ row }, 'prepare-again', person);
   if (known && row.state === next) {
@@ -44,10 +60,26 @@ async function start(trx: Transaction, person: Person, row: OrderRow, { order, a
   }
   const { design } = order;
   if (!design) throw new Error('expected an order with a design');
-  const id = known?.id ?? (await insertPreparation(trx, { orderId: row.id, artworkId, key, design, settings, startedBy: person.id }));
+  const id =
+    known?.id ??
+    (await insertPreparation(trx, {
+      orderId: row.id,
+      artworkId,
+      key,
+      design,
+      settings,
+      startedBy: person.id,
+    }));
   if (!(await changeOrder(trx, row, { ...VOIDED, state: next }))) throw new AppError('conflict');
   const words = row.state === next ? '' : 'The pass no longer holds.';
-  await audit(trx, { by: person, event: row.state === next ? 'prepare' : 'prepare-again', subject: order.number, from: row.state, to: next, words });
+  await audit(trx, {
+    by: person,
+    event: row.state === next ? 'prepare' : 'prepare-again',
+    subject: order.number,
+    from: row.state,
+    to: next,
+    words,
+  });
   if (!known?.finished_at) await askForFiles(trx, row.id, id);
   return id;
 }
@@ -56,7 +88,11 @@ async function start(trx: Transaction, person: Person, row: OrderRow, { order, a
  * Prepares an order's artwork with the kept choices. The same request gives the same preparation, however often and from
  * however many tabs it is asked for; from a passed order on, pass and approval are void.
  */
-export async function prepareOrder(person: Person, number: string, version: number): Promise<{ order: OrderView; preparation: PreparationView }> {
+export async function prepareOrder(
+  person: Person,
+  number: string,
+  version: number,
+): Promise<{ order: OrderView; preparation: PreparationView }> {
   const seen = await findOrder(database(), person, number);
   requireNextState({ row: seen }, 'prepare-again', person);
   const wanted = await wantedNow(seen);

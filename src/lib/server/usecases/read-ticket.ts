@@ -19,7 +19,8 @@ export async function readTicket(person: Person, number: string): Promise<Ticket
   const order = orderView(loaded, person.role);
   const finished = order.preparations.filter(({ manifestSha256 }) => manifestSha256 !== null);
   const preparation = finished.find(({ id }) => id === row.passed_preparation_id) ?? finished[0];
-  if (!preparation) throw new AppError('order-waits', { detail: 'Nothing is prepared yet, so there is no ticket.' });
+  if (!preparation)
+    throw new AppError('order-waits', { detail: 'Nothing is prepared yet, so there is no ticket.' });
   const machine = await machineById(database(), preparation.design.machineId);
   const spot = preparation.report?.settings.spot;
   if (!machine || !spot) throw new AppError('not-found');
@@ -30,5 +31,12 @@ export async function readTicket(person: Person, number: string): Promise<Ticket
     speedUnit: machine.speedUnit,
   });
   const { fields } = order;
-  return { order, preparation, sentence, placementWords: placementWords(fields), blank: fields.blank, fields };
+  return {
+    order,
+    preparation,
+    sentence,
+    placementWords: placementWords(fields),
+    blank: fields.blank,
+    fields,
+  };
 }

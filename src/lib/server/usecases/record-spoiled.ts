@@ -14,6 +14,14 @@ export async function recordSpoiled(
   return moveOrder(person, number, { event: 'spoiled', version }, () => ({
     words: `${reason} New blank: ${newBlank}`,
     also: (trx, order) =>
-      insertOutcome(trx, { order_id: order.row.id, recorded_by: person.id, kind: 'spoiled', words: reason, measured_lstar: null, new_blank: newBlank, cost }),
+      insertOutcome(trx, {
+        order_id: order.row.id,
+        recorded_by: person.id,
+        kind: 'spoiled',
+        words: reason,
+        measured_lstar: null,
+        new_blank: newBlank,
+        cost,
+      }),
   }));
 }

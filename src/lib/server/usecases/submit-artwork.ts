@@ -28,7 +28,13 @@ export async function requireTakesArtwork(person: Person, number: string): Promi
   requireNextState({ row }, 'new-artwork', person);
 }
 
-async function keepVersion(person: Person, number: string, fileName: string, mediaType: string, incoming: Incoming): Promise<OrderView> {
+async function keepVersion(
+  person: Person,
+  number: string,
+  fileName: string,
+  mediaType: string,
+  incoming: Incoming,
+): Promise<OrderView> {
   return withWrite(async (trx) => {
     const row = await findOrder(trx, person, number);
     const next = requireNextState({ row }, 'new-artwork', person);
@@ -37,9 +43,24 @@ async function keepVersion(person: Person, number: string, fileName: string, med
     if (newest?.sha256 === incoming.key) return viewAfter(trx, row.id, person);
     const version = (newest?.version ?? 0) + 1;
     const { key: sha256, bytes } = incoming;
-    await insertArtwork(trx, { order_id: row.id, version, file_name: fileName, media_type: mediaType, bytes, sha256, uploaded_by: person.id });
+    await insertArtwork(trx, {
+      order_id: row.id,
+      version,
+      file_name: fileName,
+      media_type: mediaType,
+      bytes,
+      sha256,
+      uploaded_by: person.id,
+    });
     if (!(await changeOrder(trx, row, { ...VOIDED, state: next }))) throw new AppError('conflict');
-    await audit(trx, { by: person, event: 'new-artwork', subject: number, from: row.state, to: next, words: `version ${version}, ${fileName}` });
+    await audit(trx, {
+      by: person,
+      event: 'new-artwork',
+      subject: number,
+      from: row.state,
+      to: next,
+      words: `version ${version}, ${fileName}`,
+    });
     await askForCheck(trx, row.id, 'at-once');
     return viewAfter(trx, row.id, person);
   });
@@ -49,7 +70,12 @@ async function keepVersion(person: Person, number: string, fileName: string, med
  * Takes what has arrived as the order's newest artwork and has it checked; what cannot be read is refused at once and
  * nothing of it stays. A pass and an approval are void with it.
  */
-export async function submitArtwork(person: Person, number: string, fileName: string, incoming: Incoming): Promise<OrderView> {
+export async function submitArtwork(
+  person: Person,
+  number: string,
+  fileName: string,
+  incoming: Incoming,
+): Promise<OrderView> {
   try {
     const { format } = await (await pipeline()).read(await incoming.read());
     await incoming.keep();

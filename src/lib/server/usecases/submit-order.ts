@@ -12,14 +12,28 @@ export async function submitOrder(person: Person, number: string, version: numbe
   return moveOrder(person, number, { event: 'submit', version }, (_, facts) => {
     const now = new Date().toISOString();
     const held = holdOnSubmit(facts);
-    const hold = held === null ? {} : { state: 'on-hold' as const, former_state: 'submitted' as const, held_because: held };
+    const hold =
+      held === null
+        ? {}
+        : { state: 'on-hold' as const, former_state: 'submitted' as const, held_because: held };
     return {
       change: { submitted_at: now, rights_confirmed_at: now, rights_confirmed_by: person.id, ...hold },
       words: 'The rights statement is confirmed.',
       also: async (trx, order) => {
         if (held === null) return;
-        await audit(trx, { by: null, event: 'hold', subject: number, from: 'submitted', to: 'on-hold', words: held });
-        await queueMail(trx, order.customer.email, onHoldMail({ ...aboutOrder(order, order.customer), reason: held }));
+        await audit(trx, {
+          by: null,
+          event: 'hold',
+          subject: number,
+          from: 'submitted',
+          to: 'on-hold',
+          words: held,
+        });
+        await queueMail(
+          trx,
+          order.customer.email,
+          onHoldMail({ ...aboutOrder(order, order.customer), reason: held }),
+        );
       },
     };
   });

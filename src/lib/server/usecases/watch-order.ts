@@ -9,7 +9,10 @@ import { tasksOfOrder } from '../tables/tasks';
 const KINDS = { 'check-artwork': 'check', 'prepare-order': 'prepare' } as const;
 
 /** A way to look, again and again, at how an order's work stands; undefined once it may not be seen any more. */
-export async function watchOrder(person: Person, number: string): Promise<() => Promise<ProgressEvent | undefined>> {
+export async function watchOrder(
+  person: Person,
+  number: string,
+): Promise<() => Promise<ProgressEvent | undefined>> {
   const { id } = await findOrder(database(), person, number);
   return async () => {
     const row = await orderById(database(), id);
@@ -19,7 +22,18 @@ export async function watchOrder(person: Person, number: string): Promise<() => 
     return {
       version: row.version,
       tasks: shown.flatMap(({ name, subject, state, stage, progress, problem }) =>
-        state === 'superseded' ? [] : [{ kind: KINDS[name as keyof typeof KINDS], subject, state, stage, progress: Math.round(progress * 100) / 100, problem }],
+        state === 'superseded'
+          ? []
+          : [
+              {
+                kind: KINDS[name as keyof typeof KINDS],
+                subject,
+                state,
+                stage,
+                progress: Math.round(progress * 100) / 100,
+                problem,
+              },
+            ],
       ),
     };
   };

@@ -16,9 +16,15 @@ export async function withdrawWaiver(person: Person, number: string, findingId: 
     const row = await findOrder(trx, person, number);
     requireWaiverState(row.state);
     const artwork = await latestArtwork(trx, row.id);
-    if (!artwork || !(await deleteWaiver(trx, row.id, artwork.version, findingId))) throw new AppError('not-found');
+    if (!artwork || !(await deleteWaiver(trx, row.id, artwork.version, findingId)))
+      throw new AppError('not-found');
     if (!(await changeOrder(trx, row, {}))) throw new AppError('conflict');
-    await audit(trx, { by: person, event: 'unwaive', subject: number, words: `${findingId} of artwork version ${artwork.version}` });
+    await audit(trx, {
+      by: person,
+      event: 'unwaive',
+      subject: number,
+      words: `${findingId} of artwork version ${artwork.version}`,
+    });
     return viewAfter(trx, row.id, person);
   });
 }
