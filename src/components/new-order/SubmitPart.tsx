@@ -1,4 +1,4 @@
-import { useMutation } from '@tanstack/react-query';
+import { useMutation, useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useFormContext, useWatch } from 'react-hook-form';
 import type { OrderView } from '@/lib/orders/views';
@@ -20,7 +20,8 @@ interface Props {
 }
 
 /** Cautions, rights, and the one filled button of the page. */
-export function SubmitPart({ draft, unconfirmedEmail }: Props) {
+export function SubmitPart({ draft, unconfirmedEmail: unconfirmedAtFirst }: Props) {
+  const unconfirmedEmail = useUnconfirmed(unconfirmedAtFirst);
   const [rights, setRights] = useState(false);
   const [asked, setAsked] = useState(false);
   const form = useWatch({ control: useFormContext<DraftForm>().control }) as DraftForm;
@@ -107,4 +108,16 @@ async function submitOrder(draft: Draft): Promise<OrderView> {
     body: { event: 'submit', version, rightsConfirmed: true },
   });
   return answer.order;
+}
+
+/** The address while it is not confirmed; coming back from the mail's link in another tab, it is asked again. */
+function useUnconfirmed(email: string | null): string | null {
+  const account = useQuery({
+    queryKey: ['account'],
+    queryFn: ({ signal }) => call('GET /api/account', { signal }),
+    enabled: email !== null,
+    staleTime: 0,
+    refetchOnWindowFocus: true,
+  });
+  return account.data?.person?.confirmed ? null : email;
 }

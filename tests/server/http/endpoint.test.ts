@@ -245,6 +245,11 @@ describe('what a handler throws', () => {
   });
 
   it('tells of artwork in its own words', async () => {
+    const twoSentences = 'The file stops half-way. Export it again and send that.';
+    expect(await jsonOf(await throwing(new ArtworkError('truncated', twoSentences)), 422)).toMatchObject({
+      detail: 'The file stops half-way.',
+      action: 'Export it again and send that.',
+    });
     expect(
       await jsonOf(await throwing(new ArtworkError('truncated', 'This file stops half-way.')), 422),
     ).toMatchObject({ code: 'artwork-refused', detail: 'This file stops half-way.' });

@@ -12,12 +12,18 @@ export function json(value: unknown, status = 200, mediaType = 'application/json
   });
 }
 
+/** Why and what to do: a message about artwork says the one in its first sentence and the other after it. */
+function artworkWords(message: string): { detail: string; action?: string } {
+  const [, detail, action] = /^(.+?\.) (\S.*)$/s.exec(message) ?? [];
+  return action === undefined ? { detail: message } : { detail, action };
+}
+
 function refusalFor(error: unknown): AppError {
   if (error instanceof AppError) return error;
   if (error instanceof ArtworkError) {
     return new AppError(
       error.code === 'too-large' ? 'artwork-too-large' : 'artwork-refused',
-      { detail: error.message },
+      artworkWords(error.message),
       { cause: error },
     );
   }
