@@ -7,7 +7,11 @@ import { Pages } from '../list/Pages';
 import { ProblemNotice } from '../Notice';
 import { SkeletonTable } from '../SkeletonTable';
 import { TextField } from '../TextField';
+import { EVENT_WORDS } from '../order/event-words';
 import { momentWords } from '../time-words';
+
+const eventWords = (event: string): string =>
+  (EVENT_WORDS[event] ?? event.replace(/[-.]/g, ' ')).toLowerCase();
 
 function Subject({ subject }: { subject: string }) {
   if (!/^U-\d{4,8}$/.test(subject)) return <>{subject}</>;
@@ -52,12 +56,12 @@ function Entries() {
             <span className="figure text-quiet">{momentWords(entry.at)}</span>
             <span className="break-words font-semibold">{entry.by}</span>
             <span className="min-w-0 break-words">
-              {entry.event.replace(/[-.]/g, ' ')}
               {entry.subject && (
                 <>
-                  : <Subject subject={entry.subject} />
+                  <Subject subject={entry.subject} />:{' '}
                 </>
               )}
+              {eventWords(entry.event)}
               {entry.words && <span className="block text-quiet">{entry.words}</span>}
             </span>
           </li>

@@ -16,11 +16,12 @@ export function SpotLines({ preset, pxPerMm = 160 }: Props) {
   const extents = { flat: lineExtent(preset, 0) * pxPerMm, upright: lineExtent(preset, 90) * pxPerMm };
   const height = Math.max(h, extents.flat * 4, 4 * extents.upright, 40) + 4;
   const left = Math.max(w, 24) + 24;
+  const width = left + WIDTH + 24 + 4 * extents.upright + 2;
   return (
     <svg
-      width={left + 2 * WIDTH + 24}
+      width={width}
       height={height}
-      viewBox={`0 0 ${left + 2 * WIDTH + 24} ${height}`}
+      viewBox={`0 0 ${width} ${height}`}
       role="img"
       aria-label={`Spot of ${spotWords(preset)}, with four lines at 0 degrees, ${pitchWords(sizeAcross(preset, 0))} apart, and at 90 degrees, ${pitchWords(sizeAcross(preset, 90))} apart`}
       className="max-w-full text-ink"
