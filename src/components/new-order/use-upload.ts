@@ -25,7 +25,10 @@ export function useUpload(draft: Draft): UploadState {
   const running = useRef<{ cancel: () => void } | null>(null);
 
   const send = async (file: File) => {
+    let stopped = false;
+    running.current = { cancel: () => (stopped = true) };
     const order = await draft.open();
+    if (stopped) throw new UploadCancelled();
     const upload = uploadArtwork(order.number, file, setProgress);
     running.current = upload;
     draft.take(await upload.done);
