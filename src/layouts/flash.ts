@@ -1,7 +1,7 @@
 /** Sentences that a page may be opened with, by their name in `?said=`; nothing from the address is ever printed. */
 const SAID = {
   'signed-out': 'You are signed out.',
-  registered: 'Your account is open. We have sent you a mail: open its link to confirm your address.',
+  registered: 'We have sent you a mail: open its link to confirm your address. Sign in to begin meanwhile.',
   confirmed: 'Your address is confirmed.',
   'new-password': 'Your new password is set. Sign in with it.',
   joined: 'Welcome to the shop. Sign in with your new password.',

@@ -79,8 +79,13 @@ export async function signIn(page: Page, role: string): Promise<void> {
   const person = demoPeople().find((item) => item.role === role);
   if (!person) throw new Error(`no demo person is ${role}`);
   await page.goto('/sign-in');
-  await page.getByLabel('E-mail').fill(person.email);
-  await page.getByLabel('Password').fill(person.password);
+  await signInWith(page, person);
+}
+
+/** Fills in the sign-in page that is open and waits until it has led on. */
+export async function signInWith(page: Page, { email, password }: { email: string; password: string }): Promise<void> {
+  await page.getByLabel('E-mail').fill(email);
+  await page.getByLabel('Password').fill(password);
   await page.getByRole('main').getByRole('button', { name: 'Sign in' }).click();
   await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
 }
