@@ -72,7 +72,6 @@ function majority(bits, x, y) {
 /** Border of the region whose first pixel is given, turning at doubtful corners so that the rarer colour stays joined. */
 function follow(bits, column, row) {
   const path = new Path();
-  path.sign = bits.at(column, row) ? '+' : '-';
   let [x, y, dx, dy] = [column, row, 0, 1];
   for (;;) {
     path.pt.push(new Point(x, y));
@@ -120,6 +119,8 @@ export function* decompose(grey, width, height, threshold, smallest) {
         continue;
       }
       const path = follow(bits, word * 32 + Math.clz32(value) - 1, row);
+      // Holes are turned the other way by the next stage; the packed picture no longer knows them from islands.
+      path.sign = grey[path.pt[0].y * width + path.pt[0].x] <= threshold ? '+' : '-';
       remove(bits, path);
       if (path.area > smallest) yield path;
     }

@@ -7,7 +7,7 @@ import type { TraceSettings } from './linework';
 /** Pixels that a mask may have; tracing takes memory and time for each. */
 const MAX_MASK_PX = 12_000_000;
 /** The spot's smaller side in mask pixels, where the artwork is fine enough for it. */
-const PX_PER_SPOT = 8;
+const PX_PER_SPOT = 6;
 /** A coarse artwork's edges are smooth greys: so many mask pixels a side find where they pass the dividing level. */
 const MAX_ENLARGEMENT = 4;
 

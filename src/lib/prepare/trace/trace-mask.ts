@@ -5,14 +5,14 @@ import { boundaryDistance } from './boundary-distance';
 import { flatten, readPathData, transformCurve, type Matrix } from './curve';
 import { dropIslands } from './drop-islands';
 import type { TraceSettings } from './linework';
-import { regionOf, type Region } from './region';
+import type { Region } from './region';
 
 /** White pixels round the mask, so that no outline runs along the picture's edge. */
 const MARGIN_PX = 1;
 /** Corner threshold, potrace's alphamax: its own default keeps corners; eased rounds all but the sharpest. */
 const CORNER_THRESHOLD = { kept: 1, eased: 1.2 } as const;
 const CURVE_TOLERANCE_PX = 0.2;
-const CHORD_TOLERANCE_PX = 0.05;
+const CHORD_TOLERANCE_PX = 0.1;
 /** A mask that turns over more often than this along its rows is made of dots, not of shapes. */
 const MAX_TURNS_SHARE = 0.2;
 const DOTS_FROM_PX = 250_000;
@@ -83,10 +83,8 @@ export async function traceMask(
   const distance = boundaryDistance(outlinesPx, data, width, height);
   const pitch = Math.max(pitchXMm, pitchYMm);
   return {
-    region: regionOf(
-      outlinesPx.map((outline) => outline.map(([x, y]) => [x * pitchXMm, y * pitchYMm] as const)),
-      'evenodd',
-    ),
+    // The tracer's outlines do not cross, and holes turn the other way: they are an area as they stand.
+    region: outlinesPx.map((outline) => outline.map(([x, y]) => [x * pitchXMm, y * pitchYMm] as const)),
     islandsDropped: islands,
     meanBoundaryMm: distance && distance.meanPx * pitch,
     hausdorffMm: distance && distance.hausdorffPx * pitch,

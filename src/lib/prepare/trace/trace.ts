@@ -9,7 +9,7 @@ import { insetOutlines } from './inset';
 import type { Linework, TraceSettings } from './linework';
 import { rasterMask } from './raster-mask';
 import { readDrawing } from './read-drawing';
-import type { Region } from './region';
+import { simplify, type Region } from './region';
 import { traceMask, type TracedMask } from './trace-mask';
 
 type Tools = Pick<PipelineTools, 'renderSvg' | 'traceGrey'>;
@@ -61,7 +61,9 @@ export async function trace(artwork: Artwork, settings: TraceSettings, tools: To
   const toleranceMm = Math.min(spot.widthMm, spot.heightMm) * CHORD_SHARE;
   const turned = turnArtwork(artwork, settings.quarterTurns);
   const { method, lines, areas, traced } = await find(turned, settings, toleranceMm, tools);
-  const outlines = insetOutlines(areas, spot).map((outline) => fitOutline(outline, toleranceMm));
+  const outlines = insetOutlines(simplify(areas, toleranceMm), spot).map((outline) =>
+    fitOutline(outline, toleranceMm),
+  );
   const curves = [...lines, ...outlines];
   return {
     widthMm,
