@@ -44,7 +44,13 @@ export function ChoicePopover({ word, title, children, isDisabled }: Props) {
           <Modal className="raised sheet">{content}</Modal>
         </ModalOverlay>
       ) : (
-        <Popover className="raised w-[360px] max-w-[92vw] overflow-auto" placement="bottom start" offset={6}>
+        <Popover
+          // Inside the page's main part, so that what it holds belongs to a landmark.
+          UNSTABLE_portalContainer={globalThis.document?.querySelector('main') ?? undefined}
+          className="raised w-[360px] max-w-[92vw] overflow-auto"
+          placement="bottom start"
+          offset={6}
+        >
           {content}
         </Popover>
       )}
