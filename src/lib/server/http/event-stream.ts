@@ -2,6 +2,12 @@ import { createHash } from 'node:crypto';
 import { AppError } from '../errors';
 import { log } from '../log';
 
+const HEADERS = {
+  'content-type': 'text/event-stream',
+  'cache-control': 'no-cache, no-transform',
+  'x-accel-buffering': 'no',
+  'x-content-type-options': 'nosniff',
+};
 const LOOK_MS = 400;
 const HEARTBEAT_MS = 20_000;
 /** A reader that takes nothing for this long is cut off; its browser comes back by itself. */
@@ -95,12 +101,5 @@ export function eventStream({ personId, request, look, times = {} }: Options): R
     },
     { highWaterMark: 8 },
   );
-  return new Response(body, {
-    headers: {
-      'content-type': 'text/event-stream',
-      'cache-control': 'no-cache, no-transform',
-      'x-accel-buffering': 'no',
-      'x-content-type-options': 'nosniff',
-    },
-  });
+  return new Response(body, { headers: HEADERS });
 }
