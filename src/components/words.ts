@@ -46,6 +46,12 @@ const TIME = new Intl.DateTimeFormat('en-GB', {
   minute: '2-digit',
   timeZone: 'UTC',
 });
+const SHORT_DATE = new Intl.DateTimeFormat('en-GB', {
+  day: 'numeric',
+  month: 'short',
+  year: 'numeric',
+  timeZone: 'UTC',
+});
 const SHORT_TIME = new Intl.DateTimeFormat('en-GB', {
   day: 'numeric',
   month: 'short',
@@ -59,6 +65,8 @@ export const dateWords = (isoDate: string): string => DATE.format(new Date(isoDa
 /** 1 Dec 2026, 15:20 UTC: the same on server and client. */
 export const timeWords = (isoTime: string): string => `${TIME.format(new Date(isoTime))} UTC`;
 
+/** 1 Dec 2026, where room is short. */
+export const shortDateWords = (isoDate: string): string => SHORT_DATE.format(new Date(isoDate));
 /** 1 Dec, 15:20. */
 export const shortTimeWords = (isoTime: string): string => SHORT_TIME.format(new Date(isoTime));
 

@@ -6,6 +6,8 @@ import {
   fieldPairs,
   placementWords,
   shadeWords,
+  shortDateWords,
+  shortTimeWords,
   sizeWords,
   timeWords,
 } from '@/components/words';
@@ -15,6 +17,8 @@ const blank = { ...EMPTY_FORM.blank, widthMm: 120, heightMm: 90, thicknessMm: 4,
 
 test('dates and times read the same on server and client', () => {
   expect(dateWords('2026-12-01')).toBe('1 December 2026');
+  expect(shortDateWords('2026-12-01')).toBe('1 Dec 2026');
+  expect(shortTimeWords('2026-12-01T15:20:33.000Z')).toBe('1 Dec, 15:20');
   expect(timeWords('2026-12-01T15:20:33.000Z')).toBe('1 Dec 2026, 15:20 UTC');
 });
 
