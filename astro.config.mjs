@@ -27,8 +27,6 @@ export default defineConfig({
   devToolbar: { enabled: false },
   // The build names every script of a page by its hash; the middleware makes the policy from them.
   experimental: { csp: true },
-  // Hashes of the islands' inline scripts; the middleware builds the page's policy from them.
-  experimental: { csp: true },
   vite: {
     plugins: [nodeWorker()],
     // Small fonts would otherwise become data: addresses, which the policy refuses.

@@ -1,4 +1,3 @@
-/// <reference types="vitest/config" />
 import { defineConfig } from 'vitest/config';
 
 /** Browser tests: against the built site, in Debian's Chromium, one file after the other. */

@@ -12,7 +12,6 @@ const PACKAGES = [
   'clipper2-ts',
   'css-tree',
   'jimp',
-  'opentype.js',
   'pdfkit',
   'potrace',
   'saxes',
