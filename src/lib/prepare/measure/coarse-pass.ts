@@ -31,6 +31,7 @@ export function suspectPlaces(
   for (const side of [0, 1] as const) {
     const fine = fineLines(field, side, faintest);
     for (let n = 0; n < fine.count; n++) mark(fine.x[n], fine.y[n]);
+    faintDots(field, side, faintest, mark);
   }
   const division = divide(field, level);
   if (!division.edgeBlocks.includes(1)) return;
@@ -48,6 +49,30 @@ export function suspectPlaces(
   }
   for (const loop of closedLoops(contour, Math.ceil(10 * extents.largestPx + 12))) {
     if (Math.abs(loop.areaPx2) < 2 * extents.spotAreaPx2 + 4) mark((loop.left + loop.right) / 2, (loop.top + loop.bottom) / 2);
+  }
+}
+
+/** Marks dots that a few pixels share, so that none of them need reach the level. */
+function faintDots(
+  { width, height, data }: Field,
+  side: 0 | 1,
+  faintest: number,
+  mark: (x: number, y: number) => void,
+): void {
+  const flip = side === 1 ? 0 : 255;
+  for (let y = 2; y < height - 2; y++) {
+    for (let x = 2; x < width - 2; x++) {
+      const i = y * width + x;
+      const v = data[i] ^ flip;
+      if (v < faintest || v > 255 - faintest) continue;
+      const low = v / 3;
+      const alone =
+        (data[i - 2] ^ flip) < low &&
+        (data[i + 2] ^ flip) < low &&
+        (data[i - 2 * width] ^ flip) < low &&
+        (data[i + 2 * width] ^ flip) < low;
+      if (alone) mark(x + 0.5, y + 0.5);
+    }
   }
 }
 

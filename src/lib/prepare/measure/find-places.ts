@@ -35,6 +35,8 @@ export interface SearchFrame {
 export interface FoundPlaces extends Inspection {
   /** whether all of the artwork was looked at closely, and not only what the coarse pass marked */
   whole: boolean;
+  /** whether it was read at the artwork's own pixels, so that what they do not resolve cannot be known */
+  ownPixels: boolean;
   /** scale that was measured at */
   pxPerMm: number;
   artWidthPx: number;
@@ -68,15 +70,24 @@ function addShifted(to: SideFindings, from: SideFindings, dx: number, dy: number
   }
 }
 
+/** What is too thin on one side: also what was too fine to see where the artwork itself would resolve it. */
+export const tooThin = ({ thin, unresolved }: SideFindings, ownPixels: boolean): FoundPlace[] =>
+  ownPixels ? thin : [...thin, ...unresolved];
+
 /**
  * Everything in an artwork that is too thin or too small for a spot.
  * A coarse pass over all of it finds where a width lies under 1.5 line extents; there, window by window, the close look.
  * @param source coverage of the artwork
  * @param frame size, spot and level; unchanged
+ * @param untilFirst stop at the first window in which anything is too thin
  * @returns places in px at the scale that it names
  * @throws what the source throws
  */
-export async function findPlaces(source: CoverageSource, frame: SearchFrame): Promise<FoundPlaces> {
+export async function findPlaces(
+  source: CoverageSource,
+  frame: SearchFrame,
+  untilFirst = false,
+): Promise<FoundPlaces> {
   const scale = closeScale(source, frame);
   const native = source.nativePx;
   const own = native !== null && scale === nativeScale(native, frame);
@@ -86,7 +97,7 @@ export async function findPlaces(source: CoverageSource, frame: SearchFrame): Pr
   const extents = lineExtents(frame.spot, pxPerMm);
   const margin = marginPx(extents);
   const faintest = native ? FAINTEST.pixels : FAINTEST.drawn;
-  const found: FoundPlaces = { ink: nothing(), gaps: nothing(), burnedPx: 0, whole: true, pxPerMm, artWidthPx, artHeightPx };
+  const found: FoundPlaces = { ink: nothing(), gaps: nothing(), burnedPx: 0, whole: true, ownPixels: own, pxPerMm, artWidthPx, artHeightPx };
   const large = artWidthPx * artHeightPx > WHOLE_PX;
   const cells = (large ? await coarseMap(source, frame, pxPerMm, faintest) : null) ?? frame.drawn;
   found.whole = cells === null;
@@ -102,6 +113,7 @@ export async function findPlaces(source: CoverageSource, frame: SearchFrame): Pr
     addShifted(found.ink, inspection.ink, left, top);
     addShifted(found.gaps, inspection.gaps, left, top);
     found.burnedPx += inspection.burnedPx;
+    if (untilFirst && [found.ink, found.gaps].some((side) => tooThin(side, own).length > 0)) break;
   }
   for (const side of [found.ink, found.gaps]) {
     side.thin = mergeSeams(side.thin);

@@ -7,7 +7,7 @@ import type { Place } from '../../preflight/finding';
 import type { Artwork } from '../artwork';
 import type { PipelineTools } from '../tools';
 import { wholeWindow, type CoverageSource } from './coverage-source';
-import { findPlaces, type FoundPlaces } from './find-places';
+import { findPlaces, tooThin, type FoundPlaces } from './find-places';
 import type { FoundPlace } from './inspect-window';
 import type { MeasureSettings } from './measure-settings';
 import { placementFacts, turned } from './placement';
@@ -121,15 +121,13 @@ export async function measure(
     drawn: drawnCells(survey),
   };
   const found = await findPlaces(source, frame);
-  const raster = artwork.kind === 'raster';
   const place = placer(found, settings);
-  const thin = ({ thin, unresolved }: FoundPlaces['ink']): FoundPlace[] => (raster ? thin : [...thin, ...unresolved]);
-  const unresolved = raster ? [...found.ink.unresolved, ...found.gaps.unresolved] : [];
+  const unresolved = found.ownPixels ? [...found.ink.unresolved, ...found.gaps.unresolved] : [];
   return {
     placement: placementFacts(settings, field, level),
     linePitchMm: settings.linePitchMm,
-    hairlines: widthFacts(thin(found.ink), place),
-    fillIns: widthFacts(thin(found.gaps), place),
+    hairlines: widthFacts(tooThin(found.ink, found.ownPixels), place),
+    fillIns: widthFacts(tooThin(found.gaps, found.ownPixels), place),
     specks: areaFacts(found.ink.small, spot, place),
     pinholes: areaFacts(found.gaps.small, spot, place),
     sharpTips: { count: found.ink.tips.length, places: found.ink.tips.slice(0, MAX_PLACES).map(place).map(withoutLimit) },

@@ -1,7 +1,7 @@
 import type { Artwork } from '../artwork';
 import type { PipelineTools } from '../tools';
 import type { CoverageSource } from './coverage-source';
-import { closeScale, findPlaces, type FoundPlaces, type SearchFrame } from './find-places';
+import { closeScale, findPlaces, tooThin, type FoundPlaces, type SearchFrame } from './find-places';
 import type { MeasureSettings } from './measure-settings';
 import { coverageOfArtwork, levelOf, overview, ownSpot } from './measure';
 import { PHOTOGRAPH_SHARE } from './suggest-treatment';
@@ -11,6 +11,7 @@ import { drawnCells, isTonalAt, surveyTones } from './tone-survey';
 const FIRST_EXTENTS = 6;
 /** Widths under this many pixels tell only roughly how much larger the artwork must be. */
 const ROUGH_PX = 2.5;
+const ROUGH_SHARE = 0.85;
 const ROUGH_GROWTH = 6;
 const MOST_GROWTH = 30;
 /** Share of the burned area that may lie in islands smaller than the spot before the picture counts as not yet resolved. */
@@ -33,8 +34,8 @@ interface Verdict {
   fading: boolean;
 }
 
-function verdictOf(found: FoundPlaces, vector: boolean, burnedShare: number): Verdict {
-  const thin = [found.ink, found.gaps].flatMap(({ thin, unresolved }) => (vector ? [...thin, ...unresolved] : thin));
+function verdictOf(found: FoundPlaces, burnedShare: number): Verdict {
+  const thin = [found.ink, found.gaps].flatMap((side) => tooThin(side, found.ownPixels));
   const smallPx2 = [...found.ink.small, ...found.gaps.small].reduce(
     (sum, { smallestPx }) => sum + (Math.PI / 4) * smallestPx * smallestPx,
     0,
@@ -42,7 +43,7 @@ function verdictOf(found: FoundPlaces, vector: boolean, burnedShare: number): Ve
   const burnedPx = burnedShare * found.artWidthPx * found.artHeightPx;
   let growth = 1;
   for (const { soundScale, smallestPx } of thin) {
-    growth = Math.max(growth, smallestPx < ROUGH_PX ? Math.min(soundScale, ROUGH_GROWTH) : soundScale);
+    growth = Math.max(growth, smallestPx < ROUGH_PX ? Math.min(ROUGH_SHARE * soundScale, ROUGH_GROWTH) : soundScale);
   }
   return {
     sound: thin.length === 0,
@@ -86,7 +87,7 @@ export async function smallestSoundWidth(
     leaveOut: (fx, fy) => isTonalAt(survey, fx, fy),
     drawn: drawnCells(survey),
   };
-  const scale = await closeIn(source, frame, artwork.kind === 'vector', burned);
+  const scale = await closeIn(source, frame, burned);
   return scale === null ? null : Math.ceil(scale * settings.widthMm * 1000) / 1000;
 }
 
@@ -94,13 +95,12 @@ export async function smallestSoundWidth(
 async function closeIn(
   source: CoverageSource,
   frame: SearchFrame,
-  vector: boolean,
   burnedShare: number,
 ): Promise<number | null> {
   const longest = Math.max(frame.widthMm, frame.heightMm);
   const at = (scale: number): SearchFrame => ({ ...frame, widthMm: scale * frame.widthMm, heightMm: scale * frame.heightMm });
-  const look = async (scale: number): Promise<Verdict> =>
-    verdictOf(await findPlaces(source, at(scale)), vector, burnedShare);
+  const look = async (scale: number, untilFirst = false): Promise<Verdict> =>
+    verdictOf(await findPlaces(source, at(scale), untilFirst), burnedShare);
   const tooLarge = (scale: number): boolean => {
     const pxPerMm = closeScale(source, at(scale));
     return frame.widthMm * frame.heightMm * (scale * pxPerMm) ** 2 > MOST_PX || scale * longest > LONGEST_MM;
@@ -121,18 +121,23 @@ async function closeIn(
   return below === null ? null : tighten(look, below, scale);
 }
 
-/** Narrows the bracket between a width that is not sound and one that is. */
-async function tighten(look: (scale: number) => Promise<Verdict>, below: number, sound: number): Promise<number> {
-  let [low, high] = [below, sound];
-  let next = high * TIGHT;
+/** Narrows the bracket between a width that is not sound and one that is: in growing steps down, then by halves. */
+async function tighten(
+  look: (scale: number, untilFirst: boolean) => Promise<Verdict>,
+  below: number,
+  sound: number,
+): Promise<number> {
+  let [low, high, step] = [below, sound, TIGHT];
+  let met = false;
   while (low < high * 0.97) {
-    if (next <= low) next = Math.sqrt(low * high);
-    if ((await look(next)).sound) {
+    const stepped = high * step;
+    const next = met || stepped <= low ? Math.sqrt(low * high) : stepped;
+    if ((await look(next, true)).sound) {
       high = next;
-      next = Math.sqrt(low * high);
+      step *= step;
     } else {
       low = next;
-      next = Math.sqrt(low * high);
+      met = true;
     }
   }
   return high;
