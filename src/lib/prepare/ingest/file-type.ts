@@ -4,13 +4,13 @@ export type ReadableType = 'png' | 'jpeg' | 'webp' | 'tiff' | 'gif' | 'avif' | '
 /** Kinds that are known by their bytes and refused with a word on what to export. */
 export type RefusedType =
   | 'pdf'
-  | 'illustrator'
+  | 'ai'
   | 'eps'
   | 'heic'
-  | 'photoshop'
+  | 'psd'
   | 'dxf'
   | 'dwg'
-  | 'coreldraw'
+  | 'cdr'
   | 'jpeg-xl'
   | 'jpeg-2000'
   | 'camera-raw'
@@ -46,7 +46,7 @@ function mediaType(bytes: Uint8Array): FileType {
 function riffType(bytes: Uint8Array): FileType {
   const form = ascii(bytes, 8, 4);
   if (form === 'WEBP') return 'webp';
-  return form.startsWith('CDR') ? 'coreldraw' : 'unknown';
+  return form.startsWith('CDR') ? 'cdr' : 'unknown';
 }
 
 /** The first words of a file as Latin-1 text, a byte order mark and white space taken off. */
@@ -64,7 +64,7 @@ function textType(bytes: Uint8Array): FileType {
   }
   if (/^<(!DOCTYPE\s+html|html|head|body)/i.test(words)) return 'web-page';
   if (/%PDF-\d/.test(words.slice(0, 1024))) return 'pdf';
-  if (words.startsWith('%!PS')) return /%%Creator: *Adobe Illustrator/i.test(words) ? 'illustrator' : 'eps';
+  if (words.startsWith('%!PS')) return /%%Creator: *Adobe Illustrator/i.test(words) ? 'ai' : 'eps';
   if (/^(0\s+SECTION\b|999\s)/.test(words) || words.startsWith('AutoCAD Binary DXF')) return 'dxf';
   return 'unknown';
 }
@@ -76,7 +76,7 @@ const MAGIC: readonly { type: FileType; head: readonly number[] }[] = [
   { type: 'bmp', head: [0x42, 0x4d] },
   { type: 'svgz', head: [0x1f, 0x8b] },
   { type: 'eps', head: [0xc5, 0xd0, 0xd3, 0xc6] },
-  { type: 'photoshop', head: [0x38, 0x42, 0x50, 0x53] },
+  { type: 'psd', head: [0x38, 0x42, 0x50, 0x53] },
   { type: 'dwg', head: [0x41, 0x43, 0x31, 0x30] },
   { type: 'jpeg-xl', head: [0xff, 0x0a] },
   { type: 'jpeg-xl', head: [0, 0, 0, 0x0c, 0x4a, 0x58, 0x4c, 0x20] },
