@@ -54,7 +54,8 @@ function install() {
   const stamp = digest([at('package-lock.json')]).update(process.versions.modules).digest('hex');
   if (readStamp(stampFile) === stamp) return;
   say('installing packages (a few minutes the first time)');
-  if (!run('npm', ['ci', '--no-audit', '--no-fund'])) {
+  // Also in production: what only tests need stays, so that one clone can do both.
+  if (!run('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'])) {
     if (!has('c++') && !has('g++') && !has('clang++')) {
       stop(
         'The packages could not be installed. better-sqlite3 may have found no ready-made binary for this machine, and ' +
@@ -68,9 +69,11 @@ function install() {
 }
 
 function developmentSecret() {
-  if (process.env.SESSION_SECRET || existsSync(at('.env'))) return;
+  if (process.env.SESSION_SECRET) return;
   // The prefix lets the server refuse it in production.
-  writeFileSync(at('.env'), `SESSION_SECRET=development-${randomBytes(32).toString('base64url')}\n`, { mode: 0o600 });
+  const line = `SESSION_SECRET=development-${randomBytes(32).toString('base64url')}\n`;
+  const own = existsSync(at('.env')) ? readFileSync(at('.env'), 'utf8').replace(/\n?$/, '\n') : '';
+  writeFileSync(at('.env'), `${own}${line}`, { mode: 0o600 });
   say('wrote a development secret into .env (ignored by git)');
 }
 
@@ -115,6 +118,9 @@ function testTools() {
     stop('The programs that the tests call could not be installed; the reason stands above.');
   }
 }
+
+// The public address is baked in when building, so the build must see what the server will be started with.
+if (existsSync(at('.env'))) process.loadEnvFile(at('.env'));
 
 const wants = (flag) => process.argv.includes(flag);
 install();
