@@ -7,6 +7,7 @@ import type { MeasureSettings } from '../../../src/lib/prepare/measure/measure-s
 import { placementFacts, turned } from '../../../src/lib/prepare/measure/placement';
 import { suggestTreatment } from '../../../src/lib/prepare/measure/suggest-treatment';
 import { bar, disc, hole, type Polygon } from '../../drawn/coverage';
+import type { MachineRun } from '../../../src/lib/prepare/settings';
 import { drawingOf, pictureOf, pictureOfPolygons } from '../../drawn/drawing';
 
 const spot: Spot = { widthMm: 0.1, heightMm: 0.1, shape: 'ellipse' };
@@ -156,7 +157,7 @@ test('sides must be above 0', async () => {
 describe('placementFacts', () => {
   const field = { width: 10, height: 10, data: new Uint8Array(100).fill(255) };
   const blank = { outline: 'rectangle', widthMm: 50, heightMm: 40, leftMm: 5, topMm: 10 } as const;
-  const machine = {
+  const machine: MachineRun = {
     name: 'Bench',
     bedWidthMm: 300,
     bedHeightMm: 200,
@@ -165,7 +166,7 @@ describe('placementFacts', () => {
     powerCurve: [],
     scanning: 'two-way',
     maxSpeedMmPerS: 400,
-  } as const;
+  };
 
   test('inside a blank, beyond it', () => {
     const at = (change: Partial<typeof settings>): ReturnType<typeof placementFacts> => placementFacts({ ...settings, blank, ...change }, field, 127.5);
