@@ -13,11 +13,7 @@ if (publicAddress) allowedDomains.push({ hostname: publicAddress.hostname });
 export default defineConfig({
   output: 'server',
   adapter: node({ mode: 'standalone' }),
-  integrations: [
-    react(),
-    tailwind({ applyBaseStyles: false }),
-    auth({ configFile: './src/auth.config.ts' }),
-  ],
+  integrations: [react(), tailwind({ applyBaseStyles: false }), auth({ configFile: './src/auth.config.ts' })],
   security: { checkOrigin: true, allowedDomains },
   env: {
     schema: {

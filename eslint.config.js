@@ -44,12 +44,24 @@ const importRule = ORDER.flatMap((layer, index) => {
       ],
       ...(PURE.includes(folder)
         ? {
-            'no-restricted-globals': ['error', { name: 'process', message: 'Only server/config.ts reads the environment.' }],
+            'no-restricted-globals': [
+              'error',
+              { name: 'process', message: 'Only server/config.ts reads the environment.' },
+            ],
             'no-restricted-syntax': [
               'error',
-              { selector: "CallExpression[callee.object.name='Math'][callee.property.name='random']", message: 'Pure code has no random source.' },
-              { selector: "CallExpression[callee.object.name='Date'][callee.property.name='now']", message: 'Pure code has no clock.' },
-              { selector: "NewExpression[callee.name='Date'][arguments.length=0]", message: 'Pure code has no clock.' },
+              {
+                selector: "CallExpression[callee.object.name='Math'][callee.property.name='random']",
+                message: 'Pure code has no random source.',
+              },
+              {
+                selector: "CallExpression[callee.object.name='Date'][callee.property.name='now']",
+                message: 'Pure code has no clock.',
+              },
+              {
+                selector: "NewExpression[callee.name='Date'][arguments.length=0]",
+                message: 'Pure code has no clock.',
+              },
               { selector: 'TSEnumDeclaration', message: 'Use a union of strings.' },
             ],
           }
@@ -77,6 +89,10 @@ export default defineConfig(
       'max-lines-per-function': ['warn', { max: 60, skipBlankLines: true, skipComments: true }],
     },
   },
-  { files: ['src/**/*.tsx'], plugins: { 'react-hooks': hooks }, rules: { ...hooks.configs.recommended.rules, 'max-lines-per-function': 'off' } },
+  {
+    files: ['src/**/*.tsx'],
+    plugins: { 'react-hooks': hooks },
+    rules: { ...hooks.configs.recommended.rules, 'max-lines-per-function': 'off' },
+  },
   ...importRule,
 );

@@ -35,7 +35,8 @@ const has = (command) => spawnSync('sh', ['-c', `command -v ${command}`], { stdi
 
 function digest(files) {
   const hash = createHash('sha256');
-  for (const file of files) hash.update(path.relative(root, file)).update('\0').update(readFileSync(file)).update('\0');
+  for (const file of files)
+    hash.update(path.relative(root, file)).update('\0').update(readFileSync(file)).update('\0');
   return hash;
 }
 
@@ -51,7 +52,9 @@ const readStamp = (file) => (existsSync(file) ? readFileSync(file, 'utf8').trim(
 
 function install() {
   const stampFile = at('node_modules/.umberline-lock');
-  const stamp = digest([at('package-lock.json')]).update(process.versions.modules).digest('hex');
+  const stamp = digest([at('package-lock.json')])
+    .update(process.versions.modules)
+    .digest('hex');
   if (readStamp(stampFile) === stamp) return;
   say('installing packages (a few minutes the first time)');
   // Also in production: what only tests need stays, so that one clone can do both.
@@ -63,7 +66,9 @@ function install() {
           'run the same command again.',
       );
     }
-    stop('The packages could not be installed; the reason stands above. Check the network and run the same command again.');
+    stop(
+      'The packages could not be installed; the reason stands above. Check the network and run the same command again.',
+    );
   }
   writeFileSync(stampFile, stamp);
 }
@@ -81,7 +86,9 @@ function build() {
   const sources = [
     ...filesBelow(at('src')),
     ...filesBelow(at('public')),
-    ...['astro.config.mjs', 'tailwind.config.js', 'tsconfig.json', 'knexfile.mjs', 'package-lock.json'].map((name) => at(name)),
+    ...['astro.config.mjs', 'tailwind.config.js', 'tsconfig.json', 'knexfile.mjs', 'package-lock.json'].map(
+      (name) => at(name),
+    ),
   ].filter((file) => existsSync(file));
   const stamp = digest(sources)
     .update(process.env.PUBLIC_ADDRESS ?? '')
@@ -91,7 +98,8 @@ function build() {
   const stampFile = at('dist/.umberline-build');
   if (readStamp(stampFile) === stamp) return;
   say('building');
-  if (!run(process.execPath, [at('node_modules/astro/astro.js'), 'build'])) stop('The build failed; the reason stands above.');
+  if (!run(process.execPath, [at('node_modules/astro/astro.js'), 'build']))
+    stop('The build failed; the reason stands above.');
   mkdirSync(at('dist'), { recursive: true });
   writeFileSync(stampFile, stamp);
 }
@@ -103,7 +111,9 @@ function testTools() {
   }
   const missing = TEST_PACKAGES.filter(
     (name) =>
-      !spawnSync('dpkg-query', ['-W', '-f', '${Status}', name], { encoding: 'utf8' }).stdout?.includes('install ok installed'),
+      !spawnSync('dpkg-query', ['-W', '-f', '${Status}', name], { encoding: 'utf8' }).stdout?.includes(
+        'install ok installed',
+      ),
   );
   if (missing.length === 0) return;
   if (process.getuid?.() !== 0) {
@@ -112,7 +122,8 @@ function testTools() {
   }
   say(`installing for the tests: ${missing.join(' ')}`);
   const env = { DEBIAN_FRONTEND: 'noninteractive' };
-  if (!run('apt-get', ['update', '-qq'], env)) say('the package lists could not be refreshed; trying with those at hand');
+  if (!run('apt-get', ['update', '-qq'], env))
+    say('the package lists could not be refreshed; trying with those at hand');
   const args = ['install', '-y', '-qq', '--no-install-recommends', ...missing];
   if (!run('apt-get', args, env)) {
     stop('The programs that the tests call could not be installed; the reason stands above.');

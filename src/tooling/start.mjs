@@ -14,14 +14,19 @@ const refuse = (line) => {
 const production = process.env.NODE_ENV === 'production';
 const publicAddress = process.env.PUBLIC_ADDRESS ?? '';
 if (production) {
-  if (!publicAddress) refuse('In production PUBLIC_ADDRESS must say where the site is reached, such as https://shop.example.');
+  if (!publicAddress)
+    refuse('In production PUBLIC_ADDRESS must say where the site is reached, such as https://shop.example.');
   const secret = process.env.SESSION_SECRET ?? '';
   if (secret === '' || secret.startsWith('development-')) {
-    refuse('In production SESSION_SECRET must be your own, not the generated one. Set it to 32 or more random characters.');
+    refuse(
+      'In production SESSION_SECRET must be your own, not the generated one. Set it to 32 or more random characters.',
+    );
   }
   if (secret.length < 32) refuse(`SESSION_SECRET has ${secret.length} characters; 32 or more are needed.`);
   if (!process.env.SMTP_URL || !process.env.MAIL_FROM) {
-    refuse('In production SMTP_URL and MAIL_FROM must name the mail server and the address that mails come from.');
+    refuse(
+      'In production SMTP_URL and MAIL_FROM must name the mail server and the address that mails come from.',
+    );
   }
 }
 
@@ -34,7 +39,8 @@ const started = performance.now();
 const { startServer } = await import(new URL('../../dist/server/entry.mjs', import.meta.url).href);
 const originalLog = console.log;
 // The adapter announces itself on its own; the lines below say the same in ours.
-console.log = (...words) => (String(words[0]).includes('[@astrojs/node]') ? undefined : originalLog(...words));
+console.log = (...words) =>
+  String(words[0]).includes('[@astrojs/node]') ? undefined : originalLog(...words);
 const { server } = startServer();
 const http = server.server;
 // Node's five minutes would cut slow uploads of large artwork.
@@ -42,7 +48,9 @@ http.requestTimeout = 30 * 60_000;
 http.headersTimeout = 30_000;
 http.on('error', (error) => {
   if (error.code === 'EADDRINUSE') {
-    refuse(`Port ${process.env.PORT} is taken by another program. Stop it, or start with another: PORT=4381 npm start`);
+    refuse(
+      `Port ${process.env.PORT} is taken by another program. Stop it, or start with another: PORT=4381 npm start`,
+    );
   }
   refuse(error.message);
 });
@@ -85,7 +93,9 @@ async function waitUntilHealthy() {
 
 await waitUntilHealthy();
 console.log = originalLog;
-console.log(`\nUmberline serves at ${production ? publicAddress : address} (ready in ${((performance.now() - started) / 1000).toFixed(1)} s)`);
+console.log(
+  `\nUmberline serves at ${production ? publicAddress : address} (ready in ${((performance.now() - started) / 1000).toFixed(1)} s)`,
+);
 if (!production) {
   const demo = path.join(root, 'db/seeds/demo-people.json');
   if (existsSync(demo)) {

@@ -35,7 +35,9 @@ for (const [name, args] of steps) {
 const counts = { passed: 0, failed: 0, skipped: 0 };
 const lines = existsSync(tally) ? readFileSync(tally, 'utf8').trim().split('\n').filter(Boolean) : [];
 for (const line of lines) for (const [key, value] of Object.entries(JSON.parse(line))) counts[key] += value;
-const absentTools = existsSync(absent) ? [...new Set(readFileSync(absent, 'utf8').trim().split('\n').filter(Boolean))].sort() : [];
+const absentTools = existsSync(absent)
+  ? [...new Set(readFileSync(absent, 'utf8').trim().split('\n').filter(Boolean))].sort()
+  : [];
 rmSync(scratch, { recursive: true, force: true });
 
 console.log('\nSummary');
@@ -46,6 +48,7 @@ for (const { name, ok, seconds } of outcome) {
 }
 const brokenSuites = outcome.filter((step) => !step.ok && step.name.includes('tests')).length;
 if (brokenSuites > 0 && counts.failed === 0) counts.failed = brokenSuites;
-if (absentTools.length > 0) console.log(`  absent reference programs, their checks not run: ${absentTools.join(', ')}`);
+if (absentTools.length > 0)
+  console.log(`  absent reference programs, their checks not run: ${absentTools.join(', ')}`);
 console.log(`\n${counts.passed} passed, ${counts.failed} failed, ${counts.skipped} skipped`);
 process.exit(counts.failed > 0 || outcome.some((step) => !step.ok) ? 1 : 0);

@@ -38,7 +38,11 @@ const FLAGS = [
 
 export async function openStage(): Promise<Stage> {
   const server = await serve();
-  const browser: Browser = await chromium.launch({ executablePath: '/usr/bin/chromium', headless: true, args: FLAGS });
+  const browser: Browser = await chromium.launch({
+    executablePath: '/usr/bin/chromium',
+    headless: true,
+    args: FLAGS,
+  });
   const contexts: BrowserContext[] = [];
   return {
     base: server.base,
@@ -55,7 +59,8 @@ export async function openStage(): Promise<Stage> {
       // Nothing is fetched from anywhere but the site itself.
       context.on('request', (request) => {
         const url = request.url();
-        if (!url.startsWith(server.base) && !/^(data|blob):/.test(url)) throw new Error(`a page asked for ${url}`);
+        if (!url.startsWith(server.base) && !/^(data|blob):/.test(url))
+          throw new Error(`a page asked for ${url}`);
       });
       const page = await context.newPage();
       onTestFailed(async ({ task }) => {
@@ -83,7 +88,10 @@ export async function signIn(page: Page, role: string): Promise<void> {
 }
 
 /** Fills in the sign-in page that is open and waits until it has led on. */
-export async function signInWith(page: Page, { email, password }: { email: string; password: string }): Promise<void> {
+export async function signInWith(
+  page: Page,
+  { email, password }: { email: string; password: string },
+): Promise<void> {
   await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password').fill(password);
   await page.getByRole('main').getByRole('button', { name: 'Sign in' }).click();
@@ -93,13 +101,18 @@ export async function signInWith(page: Page, { email, password }: { email: strin
 /** Fails with the rule, the element and the reason of every violation that axe finds. */
 export async function expectAccessible(page: Page): Promise<void> {
   const { violations } = await new AxeBuilder({ page }).analyze();
-  const words = violations.flatMap((rule) => rule.nodes.map((node) => `${rule.id}: ${node.target.join(' ')} ${node.failureSummary ?? ''}`));
+  const words = violations.flatMap((rule) =>
+    rule.nodes.map((node) => `${rule.id}: ${node.target.join(' ')} ${node.failureSummary ?? ''}`),
+  );
   expect(words, page.url()).toEqual([]);
 }
 
 /** Fails where a page is wider than its window: nobody should have to scroll sideways. */
 export async function expectNoSidewaysScroll(page: Page): Promise<void> {
-  const [content, window] = await page.evaluate(() => [document.documentElement.scrollWidth, document.documentElement.clientWidth]);
+  const [content, window] = await page.evaluate(() => [
+    document.documentElement.scrollWidth,
+    document.documentElement.clientWidth,
+  ]);
   expect(content, `${page.url()} at ${window} px`).toBeLessThanOrEqual(window);
 }
 

@@ -1,6 +1,13 @@
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { carryOneOrder } from '../setup/one-order.mjs';
-import { demoPeople, expectAccessible, expectNoSidewaysScroll, needsTool, openStage, type Stage } from './harness';
+import {
+  demoPeople,
+  expectAccessible,
+  expectNoSidewaysScroll,
+  needsTool,
+  openStage,
+  type Stage,
+} from './harness';
 
 const MARK =
   '<svg xmlns="http://www.w3.org/2000/svg" width="60mm" height="30mm" viewBox="0 0 60 30"><path d="M6 24 30 4l24 20z"/><path d="M4 27h52" stroke="#000" stroke-width=".05"/></svg>';
@@ -10,7 +17,13 @@ let number: string;
 
 beforeAll(async () => {
   stage = await openStage();
-  const artwork = { name: 'gable.svg', mediaType: 'image/svg+xml', widthMm: 60, heightMm: 30, bytes: Buffer.from(MARK) };
+  const artwork = {
+    name: 'gable.svg',
+    mediaType: 'image/svg+xml',
+    widthMm: 60,
+    heightMm: 30,
+    bytes: Buffer.from(MARK),
+  };
   const told = await carryOneOrder({ base: stage.base, people: demoPeople(), artwork, treatment: 'solid' });
   number = told.order.number;
 });

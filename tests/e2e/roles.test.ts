@@ -14,7 +14,13 @@ let pictureUrl: string;
 
 beforeAll(async () => {
   stage = await openStage();
-  const artwork = { name: 'ring.svg', mediaType: 'image/svg+xml', widthMm: 40, heightMm: 40, bytes: Buffer.from(MARK) };
+  const artwork = {
+    name: 'ring.svg',
+    mediaType: 'image/svg+xml',
+    widthMm: 40,
+    heightMm: 40,
+    bytes: Buffer.from(MARK),
+  };
   const told = await carryOneOrder({ base: stage.base, people: demoPeople(), artwork, treatment: 'solid' });
   number = told.order.number;
   fileUrl = told.preparation.files[0].url;
@@ -24,12 +30,14 @@ afterAll(async () => {
   await stage?.close();
 });
 
-const status = (page: Page, url: string): Promise<number> => page.evaluate(async (address) => (await fetch(address)).status, url);
+const status = (page: Page, url: string): Promise<number> =>
+  page.evaluate(async (address) => (await fetch(address)).status, url);
 
 const post = (page: Page, url: string, body: unknown): Promise<number> =>
   page.evaluate(
     async ([address, text]) =>
-      (await fetch(address, { method: 'POST', headers: { 'content-type': 'application/json' }, body: text })).status,
+      (await fetch(address, { method: 'POST', headers: { 'content-type': 'application/json' }, body: text }))
+        .status,
     [url, JSON.stringify(body)] as const,
   );
 
@@ -61,7 +69,12 @@ test('a customer cannot see another customer’s order by any address, nor any s
   await page.getByRole('button', { name: 'Open account' }).click();
   await page.waitForURL(/\/sign-in/);
   await signInWith(page, { email: 'mira@ostrand.example', password: 'rings-and-years' });
-  for (const url of [`/api/orders/${number}`, `/api/orders/${number}/progress`, pictureUrl, `/api/orders/${number}/artwork/1/original`]) {
+  for (const url of [
+    `/api/orders/${number}`,
+    `/api/orders/${number}/progress`,
+    pictureUrl,
+    `/api/orders/${number}/artwork/1/original`,
+  ]) {
     expect(await status(page, url), url).toBe(404);
   }
   expect((await visit(page, `/orders/${number}`)).status).toBe(404);
@@ -74,13 +87,23 @@ test('a customer cannot see another customer’s order by any address, nor any s
 test('a designer cannot release what has not been approved, nor change people or machines', async () => {
   needsTool('chromium');
   const page = await stage.as('designer');
-  const { orders } = await page.evaluate(async () => ({ orders: (await (await fetch('/api/orders?perPage=100')).json()).rows }));
+  const { orders } = await page.evaluate(async () => ({
+    orders: (await (await fetch('/api/orders?perPage=100')).json()).rows,
+  }));
   for (const row of orders as { number: string; state: string }[]) {
     if (row.state === 'approved') continue;
-    const { order } = await page.evaluate(async (url) => (await fetch(url)).json(), `/api/orders/${row.number}`);
-    expect(await post(page, `/api/orders/${row.number}/events`, { event: 'release', version: order.version }), row.state).toBe(409);
+    const { order } = await page.evaluate(
+      async (url) => (await fetch(url)).json(),
+      `/api/orders/${row.number}`,
+    );
+    expect(
+      await post(page, `/api/orders/${row.number}/events`, { event: 'release', version: order.version }),
+      row.state,
+    ).toBe(409);
   }
-  expect(await post(page, '/api/people/invitations', { email: 'more@staff.example', role: 'admin' })).toBe(403);
+  expect(await post(page, '/api/people/invitations', { email: 'more@staff.example', role: 'admin' })).toBe(
+    403,
+  );
   expect((await visit(page, '/people')).status).not.toBe(200);
 });
 
@@ -89,7 +112,13 @@ test('an operator cannot prepare, pass or change what is to be run', async () =>
   const page = await stage.as('operator');
   expect(await post(page, `/api/orders/${number}/preparations`, { version: 1 })).toBe(403);
   const { order } = await page.evaluate(async (url) => (await fetch(url)).json(), `/api/orders/${number}`);
-  expect(await post(page, `/api/orders/${number}/events`, { event: 'pass', version: order.version, preparationId: 1 })).toBe(409);
+  expect(
+    await post(page, `/api/orders/${number}/events`, {
+      event: 'pass',
+      version: order.version,
+      preparationId: 1,
+    }),
+  ).toBe(409);
   expect((await visit(page, `/queue/${number}`)).status).not.toBe(200);
 });
 
@@ -100,7 +129,13 @@ test('the last admin can neither step down nor be disabled', async () => {
   const change = (body: unknown): Promise<number> =>
     page.evaluate(
       async ([id, text]) =>
-        (await fetch(`/api/people/${id}`, { method: 'PATCH', headers: { 'content-type': 'application/json' }, body: text })).status,
+        (
+          await fetch(`/api/people/${id}`, {
+            method: 'PATCH',
+            headers: { 'content-type': 'application/json' },
+            body: text,
+          })
+        ).status,
       [person.id, JSON.stringify(body)] as const,
     );
   expect(await change({ role: 'designer' })).toBe(409);

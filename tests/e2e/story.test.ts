@@ -17,7 +17,8 @@ afterAll(async () => {
 });
 
 const part = (page: Page, name: string): Locator => page.getByRole('region', { name, exact: true });
-const press = async (scope: Page | Locator, name: string): Promise<void> => scope.getByRole('button', { name, exact: true }).click();
+const press = async (scope: Page | Locator, name: string): Promise<void> =>
+  scope.getByRole('button', { name, exact: true }).click();
 
 async function choose(page: Page, scope: Locator, label: string, option: RegExp): Promise<void> {
   await scope.getByRole('button', { name: new RegExp(label) }).click();
@@ -79,7 +80,10 @@ async function prepareAndSendProof(page: Page, number: string): Promise<void> {
   await press(page, 'Pass the prepared file');
   await press(page.getByRole('dialog'), 'Pass the prepared file');
   await press(page, 'Send proof');
-  await page.getByRole('dialog').getByLabel(/Words to the customer/).fill('Here is how it will look.');
+  await page
+    .getByRole('dialog')
+    .getByLabel(/Words to the customer/)
+    .fill('Here is how it will look.');
   await press(page.getByRole('dialog'), 'Send proof');
   await page.getByText('Record an approval in person').waitFor();
 }
@@ -87,29 +91,61 @@ async function prepareAndSendProof(page: Page, number: string): Promise<void> {
 /** The operator's part: downloads every file, ticks the list, runs it, records how it came out. */
 async function run(page: Page, number: string): Promise<{ name: string; bytes: Buffer; sha256: string }[]> {
   await page.goto('/today');
-  await page.getByRole('link', { name: new RegExp(number) }).first().click();
+  await page
+    .getByRole('link', { name: new RegExp(number) })
+    .first()
+    .click();
   await page.waitForURL(new RegExp(`/tickets/${number}`));
   await expectAccessible(page);
   const files = [];
   for (const link of await page.getByRole('link', { name: new RegExp(`^${number}-pass`) }).all()) {
     const [download] = await Promise.all([page.waitForEvent('download'), link.click()]);
     const bytes = readFileSync(await download.path());
-    files.push({ name: download.suggestedFilename(), bytes, sha256: createHash('sha256').update(bytes).digest('hex') });
+    files.push({
+      name: download.suggestedFilename(),
+      bytes,
+      sha256: createHash('sha256').update(bytes).digest('hex'),
+    });
   }
   await press(page, 'On the machine');
-  for (const box of await page.getByRole('dialog').getByRole('checkbox').all()) await box.check({ force: true });
+  for (const box of await page.getByRole('dialog').getByRole('checkbox').all())
+    await box.check({ force: true });
   await press(page.getByRole('dialog'), 'On the machine');
   await press(page, 'Done');
-  await page.getByRole('dialog').getByLabel(/What you saw/).fill('Even all over.');
+  await page
+    .getByRole('dialog')
+    .getByLabel(/What you saw/)
+    .fill('Even all over.');
   await press(page.getByRole('dialog'), 'Done');
   await page.getByText('Hand over', { exact: true }).first().waitFor();
   return files;
 }
 
 const stories: (Story & { formats: string[] })[] = [
-  { file: 'bakery-mark.svg', title: 'Mark for the lids', widthMm: '96', treatment: /^Solid/, stock: /[Bb]irch/, formats: ['bmp', 'png', 'tiff'] },
-  { file: 'bakery-mark.svg', title: 'Mark in lines', widthMm: '96', treatment: /^Linework/, stock: /[Cc]herry/, formats: ['pdf', 'svg'] },
-  { file: 'alpine-photograph.jpg', title: 'The ridge', widthMm: '120', treatment: /^Halftone/, stock: /[Bb]irch/, formats: ['bmp', 'png', 'tiff'] },
+  {
+    file: 'bakery-mark.svg',
+    title: 'Mark for the lids',
+    widthMm: '96',
+    treatment: /^Solid/,
+    stock: /[Bb]irch/,
+    formats: ['bmp', 'png', 'tiff'],
+  },
+  {
+    file: 'bakery-mark.svg',
+    title: 'Mark in lines',
+    widthMm: '96',
+    treatment: /^Linework/,
+    stock: /[Cc]herry/,
+    formats: ['pdf', 'svg'],
+  },
+  {
+    file: 'alpine-photograph.jpg',
+    title: 'The ridge',
+    widthMm: '120',
+    treatment: /^Halftone/,
+    stock: /[Bb]irch/,
+    formats: ['bmp', 'png', 'tiff'],
+  },
 ];
 
 test.each(stories)('$title goes from upload to handed over through four roles', async (story) => {

@@ -53,6 +53,10 @@ describe.each([
     expect(find(id, { [key]: widths(width) })?.severity).toBe(severity);
   });
 
+  test('advises the smallest sound width where it was found', () => {
+    expect(find(id, { [key]: widths(0.06) }, { smallestSoundWidthMm: 137 })?.advice).toContain('about 137 mm wide');
+  });
+
   test('gives smallest width, limit, count and places', () => {
     const found = find(id, { [key]: widths(0.06, 0.08) });
     expect(found).toMatchObject({ count: 2, minMm: 0.06, limitMm: 0.1, waivable: true });

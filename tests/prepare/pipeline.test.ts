@@ -148,8 +148,8 @@ describe('a preparation', () => {
     expect(names).toEqual([
       'ingest',
       'measure',
-      'preflight',
       'sound-width',
+      'preflight',
       'mark',
       'trace',
       'package',

@@ -12,7 +12,8 @@ export class ApiClient {
   async #fetch(path, init = {}) {
     const headers = new Headers(init.headers);
     headers.set('origin', this.base);
-    if (this.#cookies.size > 0) headers.set('cookie', [...this.#cookies].map(([name, value]) => `${name}=${value}`).join('; '));
+    if (this.#cookies.size > 0)
+      headers.set('cookie', [...this.#cookies].map(([name, value]) => `${name}=${value}`).join('; '));
     const response = await fetch(new URL(path, this.base), { ...init, headers, redirect: 'manual' });
     for (const line of response.headers.getSetCookie()) {
       const [pair] = line.split(';');
@@ -53,7 +54,10 @@ export class ApiClient {
 
   async send(method, path, body) {
     const headers = { 'content-type': 'application/json' };
-    return this.#json(await this.#fetch(path, { method, headers, body: JSON.stringify(body) }), `${method} ${path}`);
+    return this.#json(
+      await this.#fetch(path, { method, headers, body: JSON.stringify(body) }),
+      `${method} ${path}`,
+    );
   }
 
   async upload(path, fileName, bytes, mediaType) {
@@ -75,7 +79,9 @@ export class ApiClient {
       const { order } = await this.get(`/api/orders/${number}`);
       if (condition(order)) return order;
       if (Date.now() > until) {
-        throw new Error(`${what} did not happen within ${seconds} s; the order is ${order.state}: ${JSON.stringify(order.artworks.at(-1)?.task)}`);
+        throw new Error(
+          `${what} did not happen within ${seconds} s; the order is ${order.state}: ${JSON.stringify(order.artworks.at(-1)?.task)}`,
+        );
       }
       await new Promise((done) => setTimeout(done, 200));
     }

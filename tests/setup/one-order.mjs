@@ -2,13 +2,20 @@
 import { createHash } from 'node:crypto';
 import { ApiClient } from './api-client.mjs';
 
-const latest = (order) => order.artworks.reduce((best, item) => (item.version > (best?.version ?? 0) ? item : best), null);
+const latest = (order) =>
+  order.artworks.reduce((best, item) => (item.version > (best?.version ?? 0) ? item : best), null);
 
 /**
  * @param {{base: string, people: {role: string, email: string, password: string}[], artwork: {name: string, bytes: Uint8Array, mediaType: string, widthMm: number, heightMm: number}, treatment: string, screen?: string}} story
  * @returns what was delivered: the order, the preparation and the bytes of every file, their hashes checked
  */
-export async function carryOneOrder({ base, people, artwork, treatment, screen = 'published:floyd-steinberg-1976' }) {
+export async function carryOneOrder({
+  base,
+  people,
+  artwork,
+  treatment,
+  screen = 'published:floyd-steinberg-1976',
+}) {
   const as = {};
   for (const role of ['customer', 'designer', 'operator']) {
     const person = people.find((item) => item.role === role);
@@ -46,7 +53,9 @@ export async function carryOneOrder({ base, people, artwork, treatment, screen =
   });
   await as.customer.orderWhen(
     order.number,
-    (item) => latest(item)?.task.state === 'done' && Math.abs((latest(item).check?.widthMm ?? 0) - artwork.widthMm) < 0.01,
+    (item) =>
+      latest(item)?.task.state === 'done' &&
+      Math.abs((latest(item).check?.widthMm ?? 0) - artwork.widthMm) < 0.01,
     'the check of the artwork',
   );
   const cause = async (who, body) => {
@@ -74,17 +83,33 @@ export async function carryOneOrder({ base, people, artwork, treatment, screen =
       dividingLstar: 53.4,
       corners: 'kept',
       mirror: false,
-      recipe: { powerPercent: 30, speedMmPerS: Math.min(100, machine.maxSpeedMmPerS), perpendicular: null, focusOffsetMm: 0 },
+      recipe: {
+        powerPercent: 30,
+        speedMmPerS: Math.min(100, machine.maxSpeedMmPerS),
+        perpendicular: null,
+        focusOffsetMm: 0,
+      },
     },
   });
   ({ order } = await as.designer.get(path));
   await as.designer.send('POST', `${path}/preparations`, { version: order.version });
-  order = await as.designer.orderWhen(order.number, (item) => ['done', 'failed'].includes(item.preparations[0]?.task.state), 'the preparation');
+  order = await as.designer.orderWhen(
+    order.number,
+    (item) => ['done', 'failed'].includes(item.preparations[0]?.task.state),
+    'the preparation',
+  );
   const [preparation] = order.preparations;
-  if (preparation.task.state !== 'done') throw new Error(`the preparation failed: ${preparation.task.problem}`);
-  for (const finding of preparation.report.findings.filter((item) => item.severity === 'blocker' && item.waivable)) {
+  if (preparation.task.state !== 'done')
+    throw new Error(`the preparation failed: ${preparation.task.problem}`);
+  for (const finding of preparation.report.findings.filter(
+    (item) => item.severity === 'blocker' && item.waivable,
+  )) {
     const { order: now } = await as.designer.get(path);
-    await as.designer.send('POST', `${path}/waivers`, { version: now.version, findingId: finding.id, reason: 'agreed with the customer' });
+    await as.designer.send('POST', `${path}/waivers`, {
+      version: now.version,
+      findingId: finding.id,
+      reason: 'agreed with the customer',
+    });
   }
   await cause('designer', { event: 'pass', preparationId: preparation.id });
   await cause('designer', { event: 'send-proof' });
@@ -101,7 +126,10 @@ export async function carryOneOrder({ base, people, artwork, treatment, screen =
     files.push({ ...file, data: bytes });
   }
   if (files.length === 0) throw new Error('no file was delivered');
-  await cause('operator', { event: 'on-the-machine', checklist: ['material', 'focus', 'extraction', 'attended'] });
+  await cause('operator', {
+    event: 'on-the-machine',
+    checklist: ['material', 'focus', 'extraction', 'attended'],
+  });
   await cause('operator', { event: 'done', words: 'Even, as on the proof', measuredLstar: null });
   order = await cause('operator', { event: 'hand-over', how: 'collected', byWhom: 'the customer' });
   if (order.state !== 'handed-over') throw new Error(`the order ended ${order.state}`);

@@ -45,7 +45,9 @@ try {
     ),
   };
   const { order, files } = await carryOneOrder({ base, people, artwork, treatment: 'solid' });
-  console.log(`order ${order.number} went from upload to handed over; ${files.length} files arrived with the passed hashes`);
+  console.log(
+    `order ${order.number} went from upload to handed over; ${files.length} files arrived with the passed hashes`,
+  );
   await stop();
   const seconds = await start(60);
   console.log(`second start: ${seconds.toFixed(1)} s`);

@@ -22,7 +22,10 @@ export function waitForLine(child, pattern, seconds) {
       clearTimeout(timer);
       settle(value);
     };
-    const timer = setTimeout(() => finish(reject, new Error(`no ${pattern} within ${seconds} s:\n${said}`)), seconds * 1000);
+    const timer = setTimeout(
+      () => finish(reject, new Error(`no ${pattern} within ${seconds} s:\n${said}`)),
+      seconds * 1000,
+    );
     const read = (chunk) => {
       said += chunk;
       const found = pattern.exec(said);
@@ -48,9 +51,17 @@ export async function serve(env = {}) {
     PORT: String(port),
     DATA_DIR: dataDir,
   };
-  const migrated = spawnSync(process.execPath, ['src/tooling/migrate.mjs'], { cwd: root, env: childEnv, encoding: 'utf8' });
+  const migrated = spawnSync(process.execPath, ['src/tooling/migrate.mjs'], {
+    cwd: root,
+    env: childEnv,
+    encoding: 'utf8',
+  });
   if (migrated.status !== 0) throw new Error(`the database could not be made: ${migrated.stderr}`);
-  const child = spawn(process.execPath, ['src/tooling/start.mjs'], { cwd: root, env: childEnv, stdio: ['ignore', 'pipe', 'pipe'] });
+  const child = spawn(process.execPath, ['src/tooling/start.mjs'], {
+    cwd: root,
+    env: childEnv,
+    stdio: ['ignore', 'pipe', 'pipe'],
+  });
   await waitForLine(child, /serves at \S+/, 60);
   return {
     base: `http://localhost:${port}`,

@@ -7,7 +7,10 @@ export interface Limits {
   treatment: 'linework' | 'solid' | 'halftone' | 'continuous';
   /** whether the artwork is a photograph or shaded over most of its area */
   photograph: boolean;
+  /** smallest width without hairline and fill-in, mm, where it was looked for and found */
+  smallestSoundWidthMm?: number | null;
 }
 
 /** Whether greys are burned as greys. */
-export const burnsTones = ({ treatment }: Limits): boolean => treatment === 'halftone' || treatment === 'continuous';
+export const burnsTones = ({ treatment }: Limits): boolean =>
+  treatment === 'halftone' || treatment === 'continuous';

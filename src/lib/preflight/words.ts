@@ -11,7 +11,8 @@ export function roundUpMm(value: number): string {
 }
 
 /** A count with its noun: "1 place", "12 places". */
-export const counted = (count: number, one: string, many = `${one}s`): string => `${count} ${count === 1 ? one : many}`;
+export const counted = (count: number, one: string, many = `${one}s`): string =>
+  `${count} ${count === 1 ? one : many}`;
 
 /** Names in a row: "A", "A and B", "A, B and C". */
 export const listed = (names: readonly string[]): string =>

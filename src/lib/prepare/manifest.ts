@@ -36,7 +36,12 @@ export const requestSchema = z.object({
   /** version of the recipe; null while it is typed */
   recipeVersion: z.string().nullable(),
   /** mends in the order in which they are applied */
-  mends: z.array(z.object({ id: z.string(), parameters: z.record(z.string(), z.union([z.string(), z.number(), z.boolean()])) })),
+  mends: z.array(
+    z.object({
+      id: z.string(),
+      parameters: z.record(z.string(), z.union([z.string(), z.number(), z.boolean()])),
+    }),
+  ),
   /** name → version of the pipeline and of every library whose code decides bytes */
   versions: z.record(z.string(), z.string()),
 });

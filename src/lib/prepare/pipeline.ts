@@ -24,16 +24,16 @@ export type { Checked, CheckSettings, Prepared } from './work';
 const CHECK: readonly Stage<CheckWork>[] = [
   ingestStage,
   measureStage,
-  preflightStage,
   soundWidthStage,
+  preflightStage,
   pictureStage,
 ];
 
 const PREPARE: readonly Stage<PrepareWork>[] = [
   ingestStage,
   measureStage,
-  preflightStage,
   soundWidthStage,
+  preflightStage,
   markStage,
   traceStage,
   packageStage,

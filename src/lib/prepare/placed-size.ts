@@ -19,7 +19,9 @@ export interface PlacedSize {
 function ownAspect(artwork: Artwork): number {
   if (artwork.kind === 'vector') return artwork.aspect;
   const { ownWidthMm, ownHeightMm } = artwork.facts;
-  return ownWidthMm !== null && ownHeightMm !== null ? ownWidthMm / ownHeightMm : artwork.widthPx / artwork.heightPx;
+  return ownWidthMm !== null && ownHeightMm !== null
+    ? ownWidthMm / ownHeightMm
+    : artwork.widthPx / artwork.heightPx;
 }
 
 /**

@@ -100,7 +100,10 @@ export const settingsSchema = z.object({
   corners: z.enum(['kept', 'eased']).default('kept'),
   mirror: z.boolean().default(false),
   /** raster files asked for; linework is always written as SVG and PDF */
-  formats: z.array(z.enum(['png', 'tiff', 'bmp'])).min(1).default(['png', 'tiff', 'bmp']),
+  formats: z
+    .array(z.enum(['png', 'tiff', 'bmp']))
+    .min(1)
+    .default(['png', 'tiff', 'bmp']),
   /** blank that the artwork must fit, and where it lies on it, or null */
   blank: z
     .object({

@@ -39,7 +39,12 @@ export const preflightStage: Stage<CheckWork> = {
   async run(work) {
     const photograph = work.facts.tone.tonalShare >= PHOTOGRAPH_SHARE;
     const treatment = work.placed.treatment ?? work.suggestion.treatment;
-    work.findings = judge(work.facts, { spot: work.placed.spot, treatment, photograph });
+    work.findings = judge(work.facts, {
+      spot: work.placed.spot,
+      treatment,
+      photograph,
+      smallestSoundWidthMm: work.smallestSoundWidthMm,
+    });
   },
 };
 

@@ -55,8 +55,8 @@ describe('progress', () => {
     (work) => {
       const stages =
         work === 'check'
-          ? ['ingest', 'measure', 'preflight', 'sound-width', 'picture']
-          : ['ingest', 'measure', 'preflight', 'sound-width', 'mark', 'trace', 'package', 'forecast'];
+          ? ['ingest', 'measure', 'sound-width', 'preflight', 'picture']
+          : ['ingest', 'measure', 'sound-width', 'preflight', 'mark', 'trace', 'package', 'forecast'];
       const seen = stages.flatMap((stage) => [0, 0.5, 1].map((share) => workProgress(work, stage, share)));
       const shares = seen.map(({ progress }) => progress);
       expect(shares).toEqual([...shares].sort((a, b) => a - b));

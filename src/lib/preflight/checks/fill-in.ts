@@ -5,8 +5,8 @@ import { judgeThin } from './thin';
 export const fillIn: Check = {
   id: 'fill-in',
   title: 'Gaps that fill in',
-  check: (facts) =>
-    judgeThin(facts.fillIns, facts, {
+  check: (facts, limits) =>
+    judgeThin(facts.fillIns, facts, limits, {
       one: 'gap',
       many: 'gaps',
       fate: 'the burn on both sides closes it',

@@ -6,6 +6,12 @@ export const firstFrame: Check = {
   title: 'First picture used',
   check: ({ severalFrames }) =>
     severalFrames
-      ? { severity: 'note', count: 1, places: [], advice: 'The file holds several pictures; the first one is used. If you meant another, send it as a file of its own.' }
+      ? {
+          severity: 'note',
+          count: 1,
+          places: [],
+          advice:
+            'The file holds several pictures; the first one is used. If you meant another, send it as a file of its own.',
+        }
       : null,
 };

@@ -5,8 +5,8 @@ import { judgeThin } from './thin';
 export const hairline: Check = {
   id: 'hairline',
   title: 'Hairlines',
-  check: (facts) =>
-    judgeThin(facts.hairlines, facts, {
+  check: (facts, limits) =>
+    judgeThin(facts.hairlines, facts, limits, {
       one: 'stroke',
       many: 'strokes',
       fate: 'the spot cannot draw a line that fine, it comes out thicker or breaks up',

@@ -7,7 +7,9 @@ const TOUCHING_MM = 0.005;
 
 function overBlank({ beyondBlank, beyondRoundMm }: PlacementFacts): string[] {
   if (beyondRoundMm !== null) {
-    return beyondRoundMm > TOUCHING_MM ? [`reaches ${mm(beyondRoundMm)} beyond the round edge of the blank`] : [];
+    return beyondRoundMm > TOUCHING_MM
+      ? [`reaches ${mm(beyondRoundMm)} beyond the round edge of the blank`]
+      : [];
   }
   if (!beyondBlank) return [];
   const sides = [

@@ -1,5 +1,6 @@
 import type { Facts, WidthFacts } from '../facts';
 import type { CheckResult } from '../check';
+import type { Limits } from '../limits';
 import { counted, mm, roundUpMm } from '../words';
 
 /** Share of the line extent below which a stroke or gap is lost for certain. */
@@ -17,17 +18,28 @@ interface Wording {
 }
 
 /** Result of a check on strokes or gaps that are thinner than the line extent. */
-export function judgeThin(found: WidthFacts, facts: Facts, wording: Wording): CheckResult | null {
+export function judgeThin(
+  found: WidthFacts,
+  facts: Facts,
+  { smallestSoundWidthMm }: Limits,
+  wording: Wording,
+): CheckResult | null {
   const [first] = found.places;
   if (found.count === 0 || !first || found.worstRatio === null) return null;
   const severity = found.worstRatio < LOST_SHARE ? 'blocker' : 'warning';
   const short = first.limitMm - first.minMm;
-  const width = (facts.placement.widthMm * SOUND_SHARE) / found.worstRatio;
+  const width = smallestSoundWidthMm ?? (facts.placement.widthMm * SOUND_SHARE) / found.worstRatio;
   const enough = found.places.reduce((most, { limitMm }) => Math.max(most, limitMm), 0);
   return {
     severity,
     count: found.count,
-    places: found.places.map(({ xMm, yMm, widthMm, heightMm, minMm }) => ({ xMm, yMm, widthMm, heightMm, minMm })),
+    places: found.places.map(({ xMm, yMm, widthMm, heightMm, minMm }) => ({
+      xMm,
+      yMm,
+      widthMm,
+      heightMm,
+      minMm,
+    })),
     minMm: first.minMm,
     limitMm: first.limitMm,
     advice:

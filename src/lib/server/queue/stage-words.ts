@@ -8,16 +8,16 @@ interface StageShare {
 const CHECK: Record<string, StageShare> = {
   ingest: { words: 'Reading', from: 0, to: 0.1 },
   measure: { words: 'Measuring', from: 0.1, to: 0.5 },
-  preflight: { words: 'Judging', from: 0.5, to: 0.52 },
-  'sound-width': { words: 'Looking for the smallest sound width', from: 0.52, to: 0.95 },
+  'sound-width': { words: 'Looking for the smallest sound width', from: 0.5, to: 0.93 },
+  preflight: { words: 'Judging', from: 0.93, to: 0.95 },
   picture: { words: 'Drawing the picture', from: 0.95, to: 1 },
 };
 
 const PREPARE: Record<string, StageShare> = {
   ingest: { words: 'Reading', from: 0, to: 0.05 },
   measure: { words: 'Measuring', from: 0.05, to: 0.25 },
-  preflight: { words: 'Judging', from: 0.25, to: 0.26 },
-  'sound-width': { words: 'Looking for the smallest sound width', from: 0.26, to: 0.4 },
+  'sound-width': { words: 'Looking for the smallest sound width', from: 0.25, to: 0.39 },
+  preflight: { words: 'Judging', from: 0.39, to: 0.4 },
   mark: { words: 'Laying out the lines', from: 0.4, to: 0.55 },
   trace: { words: 'Following the outlines', from: 0.55, to: 0.65 },
   package: { words: 'Writing the files', from: 0.65, to: 0.8 },
