@@ -146,11 +146,6 @@ export async function changeOrder(
   return changed === 1;
 }
 
-export async function orderVersion(db: Db, id: number): Promise<number | null> {
-  const row = await db<OrderRow>('orders').where({ id }).first('version');
-  return row?.version ?? null;
-}
-
 export async function orderTitles(db: Db): Promise<string[]> {
   return db('orders').pluck('title');
 }

@@ -128,11 +128,3 @@ export async function tasksOfOrder(db: Db, orderId: number): Promise<TaskRow[]> 
     [orderId],
   );
 }
-
-/** Whether the queue's table can be read. */
-export async function countOpenTasks(db: Db): Promise<number> {
-  const rows = await db('tasks')
-    .whereIn('state', ['waiting', 'running'])
-    .count<{ count: number }[]>({ count: '*' });
-  return rows[0].count;
-}
