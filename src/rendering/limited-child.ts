@@ -84,7 +84,7 @@ export class LimitedChild {
     env: Record<string, string> = {},
     nodeFlags: readonly string[] = [],
   ): Promise<LimitedChild> {
-    const folder = await mkdtemp(join(tmpdir(), 'umberline-child-'));
+    const folder = await mkdtemp(join(tmpdir(), `umberline-child-${process.pid}-`));
     return new LimitedChild(program, ceilings, env, nodeFlags, folder);
   }
 

@@ -95,11 +95,13 @@ export async function signInWith(
   await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password').fill(password);
   await page.getByRole('main').getByRole('button', { name: 'Sign in' }).click();
-  await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
+  await page.waitForURL((url) => !/^\/(sign-in|start)/.test(url.pathname));
+  await page.waitForLoadState('networkidle');
 }
 
 /** Fails with the rule, the element and the reason of every violation that axe finds. */
 export async function expectAccessible(page: Page): Promise<void> {
+  await page.getByRole('heading', { level: 1 }).first().waitFor();
   const { violations } = await new AxeBuilder({ page }).analyze();
   const words = violations.flatMap((rule) =>
     rule.nodes.map((node) => `${rule.id}: ${node.target.join(' ')} ${node.failureSummary ?? ''}`),

@@ -37,6 +37,18 @@ const DIRECTIONS = Array.from({ length: 8 }, (_, k) => (k * Math.PI) / 8);
 const COSINES = DIRECTIONS.map(Math.cos);
 const SINES = DIRECTIONS.map(Math.sin);
 
+/**
+ * Area, px², by which a level line of samples falls short of the outline that was sampled: it cuts every turn a little,
+ * and a closed line turns once. Discs drawn by exact area: 0.92 at 4 px across, 0.93 at 6, 0.87 at 9, 0.92 at 14.
+ */
+const TURN_PX2 = 0.92;
+/** Below this, px², a line is no outline but the trace of a few samples. */
+const OUTLINE_PX2 = 4;
+
+/** Area that was sampled, for the area that a level line encloses; both under 0 for a hole. */
+const sampledArea = (enclosed: number): number =>
+  Math.abs(enclosed) < OUTLINE_PX2 ? enclosed : enclosed + Math.sign(enclosed) * TURN_PX2;
+
 function describe(contour: Contour, members: Int32Array, count: number): ClosedLoop {
   const { points } = contour;
   const low = new Float64Array(8).fill(Infinity);
@@ -56,7 +68,7 @@ function describe(contour: Contour, members: Int32Array, count: number): ClosedL
   let longest = 0;
   for (let d = 1; d < 8; d++) if (high[d] - low[d] > high[longest] - low[longest]) longest = d;
   return {
-    areaPx2: -twice / 2,
+    areaPx2: sampledArea(-twice / 2),
     left: ox + low[0],
     right: ox + high[0],
     top: oy + low[4],

@@ -61,9 +61,9 @@ describe('writeListAddress', () => {
       perPage: fc.integer({ min: 1, max: 100 }),
     });
     fc.assert(
-      fc.property(query, (asked) =>
-        expect(readListAddress(writeListAddress(asked, OWN), OWN)).toEqual(asked),
-      ),
+      fc.property(query, (asked) => {
+        expect(readListAddress(writeListAddress(asked, OWN), OWN)).toEqual(asked);
+      }),
     );
   });
 });

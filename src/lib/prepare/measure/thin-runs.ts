@@ -6,6 +6,8 @@ import { extentAlong, type LineExtents } from './line-extents';
 export const FLAGGED_SHARE = 0.98;
 /** Steepest taper of a stroke that stays thin for three extents of length: width gained for each unit of length. */
 const GENTLE_TAPER = 1 / 3;
+/** An even stretch shorter than so many pixels is not a stroke but the stairs of a corner: at 6 px an extent, half of one. */
+const STAIRS_PX = 3;
 /** Length, in line extents, that a steeper taper must stay thin for. */
 const TAPER_EXTENTS = 3;
 
@@ -138,7 +140,7 @@ class Stretch {
     // The middle line of a stroke ends half its width before the stroke does; that of a tip ends where pixels fail.
     const reached = taper > GENTLE_TAPER ? length + smallest / taper : length + meanPx;
     const even = this.widest - this.narrowest <= GENTLE_TAPER * gentle;
-    const plain = even && scale * (gentle + Math.min(meanPx, gentle)) >= limit;
+    const plain = even && scale * gentle >= STAIRS_PX && scale * (gentle + Math.min(meanPx, gentle)) >= limit;
     return plain || scale * reached >= TAPER_EXTENTS * share * limit;
   }
 }
