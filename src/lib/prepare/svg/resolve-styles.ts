@@ -28,7 +28,7 @@ interface Rule {
 
 const MAX_RULES = 5_000;
 /** Selectors are tried on elements at most so often; more is a drawing made to stall its reader. */
-const MAX_TRIALS = 20_000_000;
+const MAX_TRIALS = 2_000_000;
 
 function declarationsOf(nodes: readonly CssNodePlain[]): Declaration[] {
   return nodes.flatMap((node) => {
