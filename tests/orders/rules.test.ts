@@ -197,6 +197,16 @@ describe('rules', () => {
       { ...prepared({ findings: [outside] }), waivers: [{ findingId: 'outside', artworkVersion: 1 }] },
       /open/,
     ],
+    ['stock forbidden since', { stock: { ...stock, forbidden: true } }, /never engraved.*cannot be waived/],
+    [
+      'forbidden stock and a finding waived',
+      {
+        ...prepared({ findings: [hairline] }),
+        stock: { ...stock, forbidden: true },
+        waivers: [{ findingId: 'hairline', artworkVersion: 1 }],
+      },
+      /never engraved/,
+    ],
     ['a warning', prepared({ findings: [{ ...hairline, severity: 'warning' }] }), null],
   ])('pass with %s', (_, over, words) => {
     const said = waitsFor('pass', ready(over));
@@ -225,6 +235,15 @@ describe('rules', () => {
     if (words === null) expect(said).toBeNull();
     else expect(said).toMatch(words);
   });
+
+  it.each(['send-proof', 'approve-without-proof'] as const)(
+    'holds %s back while the stock is forbidden',
+    (event) => {
+      expect(waitsFor(event, ready({ stock: { ...stock, forbidden: true } }))).toMatch(
+        /^Birch plywood is never engraved here, and that cannot be waived\. Choose another stock\.$/,
+      );
+    },
+  );
 
   it('goes without a proof only where the customer agreed', () => {
     expect(waitsFor('approve-without-proof', ready({ fields: fields({ withoutProof: false }) }))).toMatch(

@@ -71,8 +71,15 @@ export function holdOnSubmit(facts: RuleFacts): string | null {
     : null;
 }
 
-function stockRefusal({ fields, stock, washOffered }: RuleFacts): string | null {
-  if (stock?.forbidden) return `${stock.name} is never engraved here. Choose another stock.`;
+const forbiddenRefusal = ({ stock }: RuleFacts): string | null =>
+  stock?.forbidden
+    ? `${stock.name} is never engraved here, and that cannot be waived. Choose another stock.`
+    : null;
+
+function stockRefusal(facts: RuleFacts): string | null {
+  const { fields, stock, washOffered } = facts;
+  const forbidden = forbiddenRefusal(facts);
+  if (forbidden !== null) return forbidden;
   if (fields.route === 'darkening-wash' && !washOffered) {
     return 'The shop offers no darkening wash while it has no safety data sheet for it. Choose another route.';
   }
@@ -96,7 +103,10 @@ function submitWaits(facts: RuleFacts): string | null {
   return stockRefusal(facts);
 }
 
-function passWaits({ artwork, preparation, currentSettings, waivers }: RuleFacts): string | null {
+function passWaits(facts: RuleFacts): string | null {
+  const { artwork, preparation, currentSettings, waivers } = facts;
+  const forbidden = forbiddenRefusal(facts);
+  if (forbidden !== null) return forbidden;
   if (!preparation || !artwork) return 'Nothing is prepared yet. Prepare it first.';
   if (preparation.taskState === 'failed') return 'The preparation failed. Start it again first.';
   if (preparation.taskState !== 'done' || !preparation.manifestSha256) return 'It is still being prepared.';
@@ -136,8 +146,11 @@ export function waitsFor(event: OrderEvent, facts: RuleFacts): string | null {
       return submitWaits(facts);
     case 'pass':
       return passWaits(facts);
+    case 'send-proof':
+      return forbiddenRefusal(facts);
     case 'approve-without-proof':
-      return facts.fields.withoutProof ? null : 'The customer wants a proof. Send it instead.';
+      if (!facts.fields.withoutProof) return 'The customer wants a proof. Send it instead.';
+      return forbiddenRefusal(facts);
     case 'release':
       if (!facts.stock) return 'The stock is missing. Choose what the blank is made of.';
       return stockRefusal(facts) ?? approvalHolds(facts);
