@@ -19,6 +19,7 @@ export const NOUNS: Record<Role, readonly Noun[]> = {
     { name: 'Today', href: '/today' },
     { name: 'Tickets', href: '/tickets' },
     { name: 'Outcomes', href: '/outcomes' },
+    { name: 'New order', href: '/orders/new' },
   ],
   admin: [
     { name: 'Queue', href: '/queue' },

@@ -22,7 +22,8 @@ describe('changing an order', () => {
   it.each(ORDER_STATES.filter((state) => state !== 'on-hold'))('%s', (state) => {
     expect(changeRefusal(SIZE, state, null, 'customer') === null, 'customer').toBe(state === 'draft');
     expect(changeRefusal(NOTE, state, null, 'customer') === null, 'customer, note').toBe(state === 'draft');
-    expect(changeRefusal(SIZE, state, null, 'operator'), 'operator').not.toBeNull();
+    expect(changeRefusal(SIZE, state, null, 'operator') === null, 'operator').toBe(state === 'draft');
+    expect(changeRefusal(NOTE, state, null, 'operator') === null, 'operator, note').toBe(state === 'draft');
     for (const role of ['designer', 'admin'] as const) {
       expect(changeRefusal(SIZE, state, null, role) === null, role).toBe(OPEN.includes(state));
       expect(changeRefusal(NOTE, state, null, role) === null, `${role}, note`).toBe(!CLOSED.includes(state));
@@ -30,12 +31,13 @@ describe('changing an order', () => {
   });
 
   it.each(HOLDABLE)(
-    'on hold from %s is as it was there for a designer, and closed to the customer',
+    'on hold from %s is as it was there for a designer, and closed to customer and operator',
     (former) => {
       expect(changeRefusal(SIZE, 'on-hold', former, 'designer')).toBe(
         changeRefusal(SIZE, former, null, 'designer'),
       );
       expect(changeRefusal(SIZE, 'on-hold', former, 'customer')).not.toBeNull();
+      expect(changeRefusal(NOTE, 'on-hold', former, 'operator')).not.toBeNull();
     },
   );
 

@@ -22,8 +22,8 @@ const ALL: readonly Role[] = [...C, ...S];
 /** The life of an order, written a second time state by state: what is missing here must not happen. */
 const LIFE: Record<OrderState, Partial<Record<OrderEvent, [readonly Role[], Next]>>> = {
   draft: {
-    submit: [CD, 'submitted'],
-    'new-artwork': [CD, 'draft'],
+    submit: [ALL, 'submitted'],
+    'new-artwork': [ALL, 'draft'],
     hold: [S, 'on-hold'],
     cancel: [ALL, 'cancelled'],
   },
@@ -49,8 +49,8 @@ const LIFE: Record<OrderState, Partial<Record<OrderEvent, [readonly Role[], Next
     cancel: [ALL, 'cancelled'],
   },
   'proof-sent': {
-    approve: [CD, 'approved'],
-    'ask-for-changes': [CD, 'in-preparation'],
+    approve: [ALL, 'approved'],
+    'ask-for-changes': [ALL, 'in-preparation'],
     'prepare-again': [D, 'in-preparation'],
     'new-artwork': [CD, 'in-preparation'],
     hold: [S, 'on-hold'],
@@ -126,6 +126,22 @@ describe('the life of an order', () => {
       const back = nextState(state, event, role) === 'in-preparation' && event !== 'take';
       if (back) expect(VOIDING_EVENTS).toContain(event);
     }
+  });
+
+  it.each(ORDER_STATES)(
+    'is cancelled by a customer while on hold from %s only where it could be there',
+    (from) => {
+      const expected = nextState(from, 'cancel', 'customer') === 'cancelled' ? 'cancelled' : null;
+      expect(nextState('on-hold', 'cancel', 'customer', from)).toBe(expected);
+      expect(possibleEvents('on-hold', 'customer', from)).toEqual(expected ? ['cancel'] : []);
+      for (const role of S) expect(nextState('on-hold', 'cancel', role, from)).toBe('cancelled');
+    },
+  );
+
+  it('lets no operator send artwork once it is submitted, nor prepare, pass or release', () => {
+    for (const state of ORDER_STATES.filter((one) => one !== 'draft'))
+      for (const event of ['new-artwork', 'prepare-again', 'pass', 'release'] as const)
+        expect(nextState(state, event, 'operator'), `${state} + ${event}`).toBeNull();
   });
 
   it('ends in handed over and cancelled', () => {

@@ -12,7 +12,6 @@ const WHO: Who[] = ['stranger', 'customer', 'designer', 'operator', 'admin'];
 const ANYONE = WHO;
 const SIGNED_IN: Who[] = ['customer', 'designer', 'operator', 'admin'];
 const STAFF: Who[] = ['designer', 'operator', 'admin'];
-const ORDERING: Who[] = ['customer', 'designer', 'admin'];
 const DESIGN: Who[] = ['designer', 'admin'];
 const ADMIN: Who[] = ['admin'];
 
@@ -31,7 +30,7 @@ const TABLE: Record<RouteKey, Who[]> = {
   'POST /api/account/sign-out-everywhere': SIGNED_IN,
   'GET /api/people': STAFF,
   'POST /api/people/invitations': ADMIN,
-  'POST /api/people/walk-ins': DESIGN,
+  'POST /api/people/walk-ins': STAFF,
   'PATCH /api/people/:id': ADMIN,
   'GET /api/machines': STAFF,
   'POST /api/machines': ADMIN,
@@ -47,13 +46,13 @@ const TABLE: Record<RouteKey, Who[]> = {
   'GET /api/outbox': ANYONE,
   'GET /api/record': ADMIN,
   'GET /api/orders': SIGNED_IN,
-  'POST /api/orders': ORDERING,
+  'POST /api/orders': SIGNED_IN,
   'GET /api/orders/:number': SIGNED_IN,
-  'PATCH /api/orders/:number': ORDERING,
-  'POST /api/orders/:number/artwork': ORDERING,
+  'PATCH /api/orders/:number': SIGNED_IN,
+  'POST /api/orders/:number/artwork': SIGNED_IN,
   'GET /api/orders/:number/artwork/:artworkVersion/original': SIGNED_IN,
   'GET /api/orders/:number/artwork/:artworkVersion/picture': SIGNED_IN,
-  'POST /api/orders/:number/artwork/:artworkVersion/check': ORDERING,
+  'POST /api/orders/:number/artwork/:artworkVersion/check': SIGNED_IN,
   'PUT /api/orders/:number/design': DESIGN,
   'POST /api/orders/:number/preparations': DESIGN,
   'GET /api/orders/:number/preparations/:id': SIGNED_IN,

@@ -68,7 +68,7 @@ function Decision({ order, proof, role }: Props) {
       </p>
     );
   }
-  // Staff record an approval given in person on the designer's page.
+  // Staff record an approval given in person on the designer’s page or the ticket’s.
   if (role !== 'customer' || !order.events.includes('approve')) return null;
   return (
     <div className="flex flex-col gap-4 border-t border-hair pt-6">

@@ -20,7 +20,16 @@ interface Props {
   qr: QrDrawing;
 }
 
-const OFFERED: readonly OrderEvent[] = ['on-the-machine', 'done', 'spoiled', 'hand-over', 'hold', 'resume'];
+const OFFERED: readonly OrderEvent[] = [
+  'approve',
+  'ask-for-changes',
+  'on-the-machine',
+  'done',
+  'spoiled',
+  'hand-over',
+  'hold',
+  'resume',
+];
 
 function PaperWords({ number, paper }: { number: string; paper: Paper }) {
   const other: Paper = paper === 'a4' ? 'letter' : 'a4';

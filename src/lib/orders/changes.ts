@@ -22,7 +22,7 @@ export function changeRefusal(
       ? null
       : 'The order has been submitted. Ask the shop to change it, or cancel it and order again.';
   }
-  if (role === 'operator') return 'Orders are changed by a designer.';
+  if (role === 'operator' && state !== 'draft') return 'Once submitted, an order is changed by a designer.';
   if (DESIGNER_STATES.includes(effective)) return null;
   const names = (Object.keys(patch) as (keyof OrderPatch)[]).filter((key) => patch[key] !== undefined);
   if (!CLOSED.includes(effective) && names.every((key) => ANY_TIME.includes(key))) return null;

@@ -49,6 +49,8 @@ interface Transition {
   /** 'former': the state that the order was held from */
   to: OrderState | 'former';
   roles: readonly Role[];
+  /** for an order on hold: only where it was held from one of these */
+  heldFrom?: readonly OrderState[];
 }
 
 const STAFF: readonly Role[] = ['designer', 'operator', 'admin'];
@@ -59,15 +61,15 @@ const BEFORE_RUNNING: readonly OrderState[] = [...UNTIL_APPROVAL, 'approved', 'r
 
 /** The whole life of an order. What is not here cannot happen. */
 export const TRANSITIONS: readonly Transition[] = [
-  { event: 'submit', from: ['draft'], to: 'submitted', roles: ['customer', ...DESIGN] },
+  { event: 'submit', from: ['draft'], to: 'submitted', roles: ['customer', ...STAFF] },
   { event: 'take', from: ['submitted'], to: 'in-preparation', roles: DESIGN },
   { event: 'pass', from: ['in-preparation'], to: 'passed', roles: DESIGN },
   { event: 'send-proof', from: ['passed'], to: 'proof-sent', roles: DESIGN },
-  { event: 'approve', from: ['proof-sent'], to: 'approved', roles: ['customer', ...DESIGN] },
+  { event: 'approve', from: ['proof-sent'], to: 'approved', roles: ['customer', ...STAFF] },
   { event: 'approve-without-proof', from: ['passed'], to: 'approved', roles: DESIGN },
-  { event: 'ask-for-changes', from: ['proof-sent'], to: 'in-preparation', roles: ['customer', ...DESIGN] },
+  { event: 'ask-for-changes', from: ['proof-sent'], to: 'in-preparation', roles: ['customer', ...STAFF] },
   { event: 'prepare-again', from: ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'], to: 'in-preparation', roles: DESIGN },
-  { event: 'new-artwork', from: ['draft'], to: 'draft', roles: ['customer', ...DESIGN] },
+  { event: 'new-artwork', from: ['draft'], to: 'draft', roles: ['customer', ...STAFF] },
   { event: 'new-artwork', from: ['submitted'], to: 'submitted', roles: ['customer', ...DESIGN] },
   { event: 'new-artwork', from: ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'], to: 'in-preparation', roles: ['customer', ...DESIGN] },
   { event: 'release', from: ['approved'], to: 'released', roles: DESIGN },
@@ -80,18 +82,40 @@ export const TRANSITIONS: readonly Transition[] = [
   { event: 'resume', from: ['on-hold'], to: 'former', roles: STAFF },
   { event: 'cancel', from: UNTIL_APPROVAL, to: 'cancelled', roles: ['customer', ...STAFF] },
   { event: 'cancel', from: ['approved', 'released', 'on-hold'], to: 'cancelled', roles: STAFF },
+  { event: 'cancel', from: ['on-hold'], heldFrom: UNTIL_APPROVAL, to: 'cancelled', roles: ['customer'] },
 ];
 
 /** Events that void a designer's pass and the customer's approval. */
 export const VOIDING_EVENTS: readonly OrderEvent[] = ['ask-for-changes', 'prepare-again', 'new-artwork'];
 
-/** Where an event leads from a state for a role: the next state, `'former'`, or null where it cannot happen. */
-export function nextState(state: OrderState, event: OrderEvent, role: Role): OrderState | 'former' | null {
-  const found = TRANSITIONS.find((t) => t.event === event && t.from.includes(state) && t.roles.includes(role));
+/**
+ * Where an event leads from a state for a role: the next state, `'former'`, or null where it cannot happen.
+ * @param formerState state that an order on hold returns to; null where it is not on hold
+ */
+export function nextState(
+  state: OrderState,
+  event: OrderEvent,
+  role: Role,
+  formerState: OrderState | null = null,
+): OrderState | 'former' | null {
+  const found = TRANSITIONS.find(
+    ({ heldFrom, ...t }) =>
+      t.event === event &&
+      t.from.includes(state) &&
+      t.roles.includes(role) &&
+      (!heldFrom || (formerState !== null && heldFrom.includes(formerState))),
+  );
   return found ? found.to : null;
 }
 
-/** Events that a role may cause in a state, in the table's order. */
-export function possibleEvents(state: OrderState, role: Role): OrderEvent[] {
-  return ORDER_EVENTS.filter((event) => nextState(state, event, role) !== null);
+/**
+ * Events that a role may cause in a state, in the table's order.
+ * @param formerState state that an order on hold returns to; null where it is not on hold
+ */
+export function possibleEvents(
+  state: OrderState,
+  role: Role,
+  formerState: OrderState | null = null,
+): OrderEvent[] {
+  return ORDER_EVENTS.filter((event) => nextState(state, event, role, formerState) !== null);
 }

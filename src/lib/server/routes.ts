@@ -40,7 +40,6 @@ export interface Route {
 
 const CUSTOMER_AND_STAFF: readonly Role[] = ['customer', 'designer', 'operator', 'admin'];
 const STAFF: readonly Role[] = ['designer', 'operator', 'admin'];
-const ORDERING: readonly Role[] = ['customer', 'designer', 'admin'];
 const DESIGN: readonly Role[] = ['designer', 'admin'];
 const ADMIN: readonly Role[] = ['admin'];
 
@@ -67,7 +66,7 @@ export const ROUTES = [
 
   { method: 'GET', path: '/api/people', access: STAFF, summary: 'People, customers and staff', query: z.object({ q: z.string().max(100).default(''), role: roleSchema.optional() }), response: z.object({ people: z.array(personViewSchema) }) },
   { method: 'POST', path: '/api/people/invitations', access: ADMIN, summary: 'Invite staff by mail', body: z.object({ email, role: roleSchema }), response: nothing },
-  { method: 'POST', path: '/api/people/walk-ins', access: DESIGN, summary: 'Enter a walk-in customer, who may set a password later', body: z.object({ name, email }), response: z.object({ person: personViewSchema }) },
+  { method: 'POST', path: '/api/people/walk-ins', access: STAFF, summary: 'Enter a walk-in customer, who may set a password later', body: z.object({ name, email }), response: z.object({ person: personViewSchema }) },
   { method: 'PATCH', path: '/api/people/:id', access: ADMIN, summary: 'Change role or disable; never the last admin', body: z.object({ role: roleSchema.optional(), disabled: z.boolean().optional() }), response: z.object({ person: personViewSchema }) },
 
   { method: 'GET', path: '/api/machines', access: STAFF, summary: 'Machines with their spot presets', response: z.object({ machines: z.array(machineViewSchema) }) },
@@ -89,13 +88,13 @@ export const ROUTES = [
   { method: 'GET', path: '/api/record', access: ADMIN, summary: 'The record: who did what, newest first', query: z.object({ q: z.string().max(100).default(''), page: z.coerce.number().int().min(1).default(1) }), response: z.object({ entries: z.array(z.object({ id: z.number(), at: timeSchema, by: z.string(), event: z.string(), subject: z.string(), words: z.string() })), total: z.number(), page: z.number(), perPage: z.number() }) },
 
   { method: 'GET', path: '/api/orders', access: CUSTOMER_AND_STAFF, summary: 'Own orders; for staff all of them', query: orderQuerySchema, response: orderListSchema },
-  { method: 'POST', path: '/api/orders', access: ORDERING, summary: 'Open a draft; staff name the customer', body: orderPatchSchema.extend({ customerId: z.number().int().positive().optional() }), response: z.object({ order: orderViewSchema }) },
+  { method: 'POST', path: '/api/orders', access: CUSTOMER_AND_STAFF, summary: 'Open a draft; staff name the customer', body: orderPatchSchema.extend({ customerId: z.number().int().positive().optional() }), response: z.object({ order: orderViewSchema }) },
   { method: 'GET', path: '/api/orders/:number', access: CUSTOMER_AND_STAFF, summary: 'One order', response: z.object({ order: orderViewSchema }) },
-  { method: 'PATCH', path: '/api/orders/:number', access: ORDERING, summary: 'Change a draft or, as designer, an order in preparation; a new size checks the artwork again', body: z.object({ version: z.number().int(), fields: orderPatchSchema }), response: z.object({ order: orderViewSchema }) },
-  { method: 'POST', path: '/api/orders/:number/artwork', access: ORDERING, summary: 'Upload artwork as a new version (multipart, field "artwork")', upload: true, response: z.object({ order: orderViewSchema }) },
+  { method: 'PATCH', path: '/api/orders/:number', access: CUSTOMER_AND_STAFF, summary: 'Change a draft or, as designer, an order that is not passed yet; a new size checks the artwork again', body: z.object({ version: z.number().int(), fields: orderPatchSchema }), response: z.object({ order: orderViewSchema }) },
+  { method: 'POST', path: '/api/orders/:number/artwork', access: CUSTOMER_AND_STAFF, summary: 'Upload artwork as a new version (multipart, field "artwork")', upload: true, response: z.object({ order: orderViewSchema }) },
   { method: 'GET', path: '/api/orders/:number/artwork/:artworkVersion/original', access: CUSTOMER_AND_STAFF, summary: 'The artwork as it was sent, as a download', media: 'application/octet-stream' },
   { method: 'GET', path: '/api/orders/:number/artwork/:artworkVersion/picture', access: CUSTOMER_AND_STAFF, summary: 'A picture of the artwork', media: 'image/png' },
-  { method: 'POST', path: '/api/orders/:number/artwork/:artworkVersion/check', access: ORDERING, summary: 'Check the artwork again after a failure', body: z.object({}), response: z.object({ order: orderViewSchema }) },
+  { method: 'POST', path: '/api/orders/:number/artwork/:artworkVersion/check', access: CUSTOMER_AND_STAFF, summary: 'Check the artwork again after a failure', body: z.object({}), response: z.object({ order: orderViewSchema }) },
   { method: 'PUT', path: '/api/orders/:number/design', access: DESIGN, summary: 'Keep the designer’s choices', body: z.object({ version: z.number().int(), design: designSchema }), response: z.object({ order: orderViewSchema }) },
   { method: 'POST', path: '/api/orders/:number/preparations', access: DESIGN, summary: 'Prepare with the kept choices; the same request gives the same preparation', body: z.object({ version: z.number().int() }), response: z.object({ order: orderViewSchema, preparation: preparationViewSchema }) },
   { method: 'GET', path: '/api/orders/:number/preparations/:id', access: CUSTOMER_AND_STAFF, summary: 'One preparation', response: z.object({ preparation: preparationViewSchema }) },

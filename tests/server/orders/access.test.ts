@@ -90,7 +90,7 @@ describe('an order as each role sees it', () => {
     expect(events).toEqual({
       customer: ['approve', 'ask-for-changes', 'new-artwork', 'cancel'],
       designer: ['approve', 'ask-for-changes', 'prepare-again', 'new-artwork', 'hold', 'cancel'],
-      operator: ['hold', 'cancel'],
+      operator: ['approve', 'ask-for-changes', 'hold', 'cancel'],
       admin: ['approve', 'ask-for-changes', 'prepare-again', 'new-artwork', 'hold', 'cancel'],
     });
   });
@@ -186,8 +186,10 @@ describe('the list', () => {
 
 describe('opening an order', () => {
   it('is done by staff for a customer they name', async () => {
-    const order = await open(shop.designer, { customerId: shop.stranger.id, title: 'Walk-in' });
-    expect(order.customer.name).toBe('Olaf');
+    for (const who of [shop.designer, shop.operator]) {
+      const order = await open(who, { customerId: shop.stranger.id, title: 'Walk-in' });
+      expect(order.customer.name).toBe('Olaf');
+    }
     for (const customerId of [undefined, 9999, shop.operator.id]) {
       await expect(open(shop.designer, { customerId })).rejects.toThrow('422');
     }

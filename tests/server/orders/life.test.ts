@@ -228,6 +228,39 @@ describe('an order’s life', () => {
     expect(order.approved).toMatchObject({ by: 'Ina’s sister', how: 'at the counter, recorded by Dora' });
   });
 
+  it('is opened and submitted by an operator for a walk-in, who then changes it no more but records the approval', async () => {
+    const { number } = await open(shop.operator, {
+      customerId: shop.unconfirmed.id,
+      widthMm: 50,
+      heightMm: 40,
+      blank: blankOf(shop.birch),
+    });
+    await upload(shop.operator, number);
+    await settled(shop.operator, number);
+    await change(shop.operator, number, { widthMm: 60 });
+    await settled(shop.operator, number);
+    await cause(shop.operator, number, { event: 'submit', rightsConfirmed: true });
+    await expect(change(shop.operator, number, { widthMm: 70 })).rejects.toThrow('409');
+    await expect(upload(shop.operator, number, 'swapped')).rejects.toThrow('409');
+    await cause(shop.designer, number, { event: 'take' });
+    await design(shop, number);
+    const { preparations } = await prepare(shop, number);
+    await cause(shop.designer, number, { event: 'pass', preparationId: preparations[0].id });
+    const { passed } = await cause(shop.designer, number, { event: 'send-proof', words: '' });
+    await expect(change(shop.operator, number, { notes: 'x' })).rejects.toThrow('409');
+    await expect(upload(shop.operator, number, 'swapped')).rejects.toThrow('409');
+    const approve = { event: 'approve', manifestSha256: passed?.manifestSha256 };
+    await cause(shop.operator, number, approve, 422);
+    const order = await cause(shop.operator, number, {
+      ...approve,
+      inPerson: { who: 'Nils', how: 'at the counter' },
+    });
+    expect(order).toMatchObject({
+      state: 'approved',
+      approved: { by: 'Nils', how: 'at the counter, recorded by Otto' },
+    });
+  });
+
   it('goes without a proof only where the customer agreed', async () => {
     const { number } = await orderAt(shop, 'passed');
     const without = { event: 'approve-without-proof', reason: 'as last time' };
@@ -290,6 +323,22 @@ describe('an order’s life', () => {
     expect(order).toMatchObject({ state: 'released', outcomes: [{ kind: 'spoiled', cost: '4 €' }] });
   });
 
+  it.each([
+    ['pass', 'prepared'],
+    ['send-proof', 'passed'],
+  ] as const)('looks at the stock again at %s', async (event, state) => {
+    const { number, preparations } = await orderAt(shop, state);
+    const said = event === 'pass' ? { event, preparationId: preparations[0].id } : { event, words: '' };
+    const { allStocks, updateStock } = await import('@/lib/server/tables/stocks');
+    const stock = (await allStocks(database())).find(({ id }) => id === shop.birch);
+    if (!stock) throw new Error('no stock');
+    await updateStock(database(), shop.birch, { ...stock, forbidden: true }, null);
+    expect((await read(shop.designer, number)).waitsFor[event]).toMatch(/cannot be waived/);
+    await cause(shop.designer, number, said, 409);
+    await updateStock(database(), shop.birch, stock, null);
+    await cause(shop.designer, number, said);
+  });
+
   it('looks at the stock again at release', async () => {
     const { number } = await orderAt(shop, 'approved');
     const { allStocks, updateStock } = await import('@/lib/server/tables/stocks');
@@ -319,6 +368,19 @@ describe('an order’s life', () => {
     expect((await cause(shop.designer, number, { event: 'cancel', reason: 'agreed with Ina' })).state).toBe(
       'cancelled',
     );
+  });
+
+  it('is cancelled by its customer while on hold, as long as it was held before the approval', async () => {
+    const early = await orderAt(shop, 'proof-sent');
+    await cause(shop.designer, early.number, { event: 'hold', reason: 'No cork in the shop.' });
+    expect((await read(shop.customer, early.number)).events).toEqual(['cancel']);
+    expect(
+      await cause(shop.customer, early.number, { event: 'cancel', reason: 'changed my mind' }),
+    ).toMatchObject({ state: 'cancelled', events: [] });
+    const late = await orderAt(shop, 'approved');
+    await cause(shop.designer, late.number, { event: 'hold', reason: 'No cork in the shop.' });
+    expect((await read(shop.customer, late.number)).events).toEqual([]);
+    await cause(shop.customer, late.number, { event: 'cancel', reason: 'changed my mind' }, 409);
   });
 
   it('lets exactly one of two people who press at once through', async () => {

@@ -45,7 +45,7 @@ export function requireNextState(
   person: Person,
 ): OrderState {
   const { state, former_state } = order.row;
-  const next = nextState(state, event, person.role);
+  const next = nextState(state, event, person.role, former_state);
   if (next === null) throw new AppError('not-now', { detail: `The order is ${state.replaceAll('-', ' ')}.` });
   if (next !== 'former') return next;
   if (former_state === null) throw new Error('expected an order on hold to have a former state');

@@ -167,7 +167,7 @@ function forCustomer(order: LoadedOrder, view: OrderView): OrderView {
 /** An order as a role sees it. */
 export function orderView(order: LoadedOrder, role: Role): OrderView {
   const { row, customer } = order;
-  const events = possibleEvents(row.state, role);
+  const events = possibleEvents(row.state, role, row.former_state);
   const passer = new Map(
     order.record.flatMap(({ person_id, by }) => (person_id === null ? [] : [[person_id, by] as const])),
   );
