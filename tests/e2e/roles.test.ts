@@ -78,6 +78,8 @@ test('a customer cannot see another customer’s order by any address, nor any s
     expect(await status(page, url), url).toBe(404);
   }
   expect((await visit(page, `/orders/${number}`)).status).toBe(404);
+  // A page that can be read, with the site's own look and ways on.
+  await page.getByRole('heading', { level: 1 }).waitFor();
   expect(await status(page, fileUrl)).toBe(403);
   for (const path of ['/queue', '/today', '/tickets', '/machines', '/people', '/record']) {
     expect((await visit(page, path)).status, path).not.toBe(200);
