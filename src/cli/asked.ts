@@ -40,8 +40,15 @@ export function readAsked(values: Values): Asked {
     spot,
     firing: readFiring(values),
     scan: readScan(values, spot),
-    treatment: values.treatment === undefined ? null : wordValue('treatment', values.treatment, treatmentSchema.options),
-    dividingLstar: numberValue('dividing-lstar', values['dividing-lstar'] ?? '53.4', { min: 1, max: 99, unit: '' }),
+    treatment:
+      values.treatment === undefined
+        ? null
+        : wordValue('treatment', values.treatment, treatmentSchema.options),
+    dividingLstar: numberValue('dividing-lstar', values['dividing-lstar'] ?? '53.4', {
+      min: 1,
+      max: 99,
+      unit: '',
+    }),
     blankSidesMm: blank === undefined ? null : pairValue('blank-mm', blank, BLANK_RANGE),
   };
 }
@@ -49,10 +56,15 @@ export function readAsked(values: Values): Asked {
 /** Placed size of an artwork, refused where it lies outside what a machine can hold. */
 export function sizeFor(artwork: Artwork, asked: Asked): PlacedSize {
   const size = placedSize(artwork, asked);
-  for (const [side, mm] of [['width', size.widthMm], ['height', size.heightMm]] as const) {
+  for (const [side, mm] of [
+    ['width', size.widthMm],
+    ['height', size.heightMm],
+  ] as const) {
     if (mm < SIZE_RANGE.min || mm > SIZE_RANGE.max) {
       const found = Number(mm.toFixed(3));
-      throw new UsageError(`--${side}-mm must come to ${SIZE_RANGE.min} to ${SIZE_RANGE.max} mm; with these proportions it is ${found} mm.`);
+      throw new UsageError(
+        `--${side}-mm must come to ${SIZE_RANGE.min} to ${SIZE_RANGE.max} mm; with these proportions it is ${found} mm.`,
+      );
     }
   }
   return size;

@@ -19,7 +19,8 @@ function placesLine({ places, count: all }: Finding): string[] {
 }
 
 function measuredLine({ minMm, limitMm, measured }: Finding): string[] {
-  if (minMm !== null) return [`    smallest ${mm(minMm)}${limitMm === null ? '' : `, needed ${mm(limitMm)}`}`];
+  if (minMm !== null)
+    return [`    smallest ${mm(minMm)}${limitMm === null ? '' : `, needed ${mm(limitMm)}`}`];
   if (measured === null) return [];
   const limit = measured.limit === null ? '' : `, limit ${Number(measured.limit.toFixed(2))}`;
   return [`    measured ${Number(measured.value.toFixed(2))} ${measured.unit}${limit}`];
@@ -46,7 +47,9 @@ export function checkText(name: string, report: CheckReport): string {
     `Scanning at ${report.directionDeg} degrees, the spot is ${mm(report.sizeAcrossMm)} across the lines.`,
     ...artwork.remarks.map((remark) => `${remark}`),
     '',
-    findings.length === 0 ? 'Nothing was found that would not engrave.' : `${count(findings.length, 'finding', 'findings')}:`,
+    findings.length === 0
+      ? 'Nothing was found that would not engrave.'
+      : `${count(findings.length, 'finding', 'findings')}:`,
   ];
   const foot = ['', `Suggested treatment: ${artwork.suggestedTreatment}. ${artwork.suggestionReason}`, ''];
   return [...head, ...findings.flatMap(findingLines), ...soundWidthLine(report), ...foot].join('\n');

@@ -10,6 +10,9 @@ export function readLabel(asked: string | undefined, artworkPath: string): strin
     throw new UsageError(`--label takes 1 to 60 letters, digits, - and _, got "${asked}".`);
   }
   const stem = path.parse(artworkPath).name.normalize('NFKD').replace(/\p{M}/gu, '');
-  const plain = stem.replace(/[^A-Za-z0-9_-]+/g, '-').replace(/^-+|-+$/g, '').slice(0, 60);
+  const plain = stem
+    .replace(/[^A-Za-z0-9_-]+/g, '-')
+    .replace(/^-+|-+$/g, '')
+    .slice(0, 60);
   return plain || 'artwork';
 }

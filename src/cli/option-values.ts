@@ -16,7 +16,8 @@ export const DIRECTION_RANGE: NumberRange = { min: -180, max: 180, unit: 'degree
 
 const DECIMAL = /^[+-]?(\d+\.?\d*|\.\d+)$/;
 
-const rangeInWords = ({ min, max, unit }: NumberRange): string => `from ${min} to ${max}${unit && ` ${unit}`}`;
+const rangeInWords = ({ min, max, unit }: NumberRange): string =>
+  `from ${min} to ${max}${unit && ` ${unit}`}`;
 
 /** A number of an option within its range. */
 export function numberValue(option: string, text: string, range: NumberRange): number {
@@ -29,7 +30,9 @@ export function numberValue(option: string, text: string, range: NumberRange): n
 export function pairValue(option: string, text: string, range: NumberRange): [number, number] {
   const parts = text.split(/[x×]/i);
   if (parts.length !== 2) {
-    throw new UsageError(`--${option} takes two numbers joined by x, each ${rangeInWords(range)}, got "${text}".`);
+    throw new UsageError(
+      `--${option} takes two numbers joined by x, each ${rangeInWords(range)}, got "${text}".`,
+    );
   }
   return [numberValue(option, parts[0], range), numberValue(option, parts[1], range)];
 }

@@ -11,8 +11,16 @@ type Values = TypedCommand['values'];
 const FORMATS = ['png', 'tiff', 'bmp'] as const;
 
 function readTone(values: Values): Tone {
-  const blackPoint = numberValue('black-point', values['black-point'] ?? '0', { min: 0, max: 0.95, unit: '' });
-  const whitePoint = numberValue('white-point', values['white-point'] ?? '1', { min: 0.05, max: 1, unit: '' });
+  const blackPoint = numberValue('black-point', values['black-point'] ?? '0', {
+    min: 0,
+    max: 0.95,
+    unit: '',
+  });
+  const whitePoint = numberValue('white-point', values['white-point'] ?? '1', {
+    min: 0.05,
+    max: 1,
+    unit: '',
+  });
   if (whitePoint <= blackPoint) {
     throw new UsageError(`--white-point must lie above --black-point, got ${whitePoint} and ${blackPoint}.`);
   }
@@ -57,8 +65,23 @@ export function readPrepareChoices(values: Values, asked: Asked, artworkPath: st
 export type PrepareChoices = ReturnType<typeof readPrepareChoices>;
 
 /** Settings of the pipeline, once the size is known. */
-export function settingsOf(asked: Asked, choices: PrepareChoices, size: PlacedSize, mirror: boolean): Settings {
+export function settingsOf(
+  asked: Asked,
+  choices: PrepareChoices,
+  size: PlacedSize,
+  mirror: boolean,
+): Settings {
   const { quarterTurns, spot, firing, scan, dividingLstar, blankSidesMm } = asked;
   const blank = centredBlank(blankSidesMm, size);
-  return settingsSchema.parse({ ...size, quarterTurns, spot, firing, scan, dividingLstar, blank, mirror, ...choices });
+  return settingsSchema.parse({
+    ...size,
+    quarterTurns,
+    spot,
+    firing,
+    scan,
+    dividingLstar,
+    blank,
+    mirror,
+    ...choices,
+  });
 }

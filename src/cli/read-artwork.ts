@@ -16,7 +16,10 @@ export async function readArtwork(file: string): Promise<Uint8Array> {
       if (stats.isDirectory()) throw new ArtworkError('unreadable', REASONS.EISDIR);
       if (stats.size > LIMITS.maxBytes) {
         const mib = LIMITS.maxBytes / 1024 / 1024;
-        throw new ArtworkError('too-large', `This file is larger than ${mib} MiB. Export it at the size at which it will be engraved.`);
+        throw new ArtworkError(
+          'too-large',
+          `This file is larger than ${mib} MiB. Export it at the size at which it will be engraved.`,
+        );
       }
       return await handle.readFile();
     } finally {
@@ -25,6 +28,10 @@ export async function readArtwork(file: string): Promise<Uint8Array> {
   } catch (error) {
     if (error instanceof ArtworkError) throw error;
     const code = error instanceof Error && 'code' in error ? String(error.code) : '';
-    throw new ArtworkError('unreadable', REASONS[code] ?? `This file cannot be read (${code || 'unknown reason'}).`, { cause: error });
+    throw new ArtworkError(
+      'unreadable',
+      REASONS[code] ?? `This file cannot be read (${code || 'unknown reason'}).`,
+      { cause: error },
+    );
   }
 }

@@ -16,7 +16,11 @@ export const statusFor = (findings: readonly Finding[]): ExitStatus =>
   findings.some((finding) => finding.severity === 'blocker') ? EXIT.blockers : EXIT.fine;
 
 /** The command check: what was found, as one JSON object or as text. */
-export async function runCheck(typed: TypedCommand, tools: PipelineTools, around: Surroundings): Promise<ExitStatus> {
+export async function runCheck(
+  typed: TypedCommand,
+  tools: PipelineTools,
+  around: Surroundings,
+): Promise<ExitStatus> {
   const asked = readAsked(typed.values);
   const bytes = await readArtwork(typed.artwork);
   const size = sizeFor(await ingest(bytes, tools), asked);

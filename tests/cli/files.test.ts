@@ -1,4 +1,12 @@
-import { mkdirSync, mkdtempSync, readdirSync, readFileSync, rmSync, truncateSync, writeFileSync } from 'node:fs';
+import {
+  mkdirSync,
+  mkdtempSync,
+  readdirSync,
+  readFileSync,
+  rmSync,
+  truncateSync,
+  writeFileSync,
+} from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { afterEach, beforeEach, expect, test } from 'vitest';
@@ -21,7 +29,12 @@ const FILES = [
 test('files land in the folder, also below it, and nothing else stays behind', async () => {
   const out = path.join(scratch, 'deep', 'out');
   await writeFolder(out, FILES);
-  expect(readdirSync(out, { recursive: true }).sort()).toEqual(['a.png', 'manifest.json', 'pictures', 'pictures/sent.png']);
+  expect(readdirSync(out, { recursive: true }).sort()).toEqual([
+    'a.png',
+    'manifest.json',
+    'pictures',
+    'pictures/sent.png',
+  ]);
   expect([...readFileSync(path.join(out, 'a.png'))]).toEqual([1, 2]);
   expect(readdirSync(path.dirname(out))).toEqual(['out']);
 });

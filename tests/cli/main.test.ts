@@ -3,10 +3,19 @@ import { expect, test } from 'vitest';
 import { checkReportSchema } from '../../src/lib/prepare/report';
 import { ROOT } from './run-line';
 
-const spawned = (...argv: string[]) => spawnSync('npm', ['run', '-s', 'umberline', '--', ...argv], { cwd: ROOT, encoding: 'utf8' });
+const spawned = (...argv: string[]) =>
+  spawnSync('npm', ['run', '-s', 'umberline', '--', ...argv], { cwd: ROOT, encoding: 'utf8' });
 
 test('through npm: one object on standard output, status 1 for blockers', () => {
-  const { status, stdout, stderr } = spawned('check', 'samples/empty.png', '--width-mm', '40', '--spot', '0.07x0.11', '--json');
+  const { status, stdout, stderr } = spawned(
+    'check',
+    'samples/empty.png',
+    '--width-mm',
+    '40',
+    '--spot',
+    '0.07x0.11',
+    '--json',
+  );
   expect([status, stderr]).toEqual([1, '']);
   expect(checkReportSchema.parse(JSON.parse(stdout)).findings[0].id).toBe('empty');
 });

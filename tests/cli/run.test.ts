@@ -17,11 +17,24 @@ afterAll(() => rmSync(scratch, { recursive: true, force: true }));
 
 describe('check', () => {
   test('--json prints exactly one object and nothing else, status 0 without blockers', async () => {
-    const { status, stdout, stderr } = await runLine('check', sample('stamp.png'), '--width-mm', '60', ...SPOT, '--json');
+    const { status, stdout, stderr } = await runLine(
+      'check',
+      sample('stamp.png'),
+      '--width-mm',
+      '60',
+      ...SPOT,
+      '--json',
+    );
     expect([status, stderr]).toEqual([0, '']);
     expect(stdout.endsWith('}\n')).toBe(true);
     const report = checkReportSchema.strict().parse(JSON.parse(stdout));
-    expect(report).toMatchObject({ widthMm: 60, heightMm: 60, directionDeg: 0, sizeAcrossMm: 0.11, findings: [] });
+    expect(report).toMatchObject({
+      widthMm: 60,
+      heightMm: 60,
+      directionDeg: 0,
+      sizeAcrossMm: 0.11,
+      findings: [],
+    });
   });
 
   test('a blocker gives status 1, with places, smallest width, limit and advice', async () => {
@@ -37,8 +50,18 @@ describe('check', () => {
   });
 
   test('the direction of scanning sets the size across, and the spot’s sides stay where they are', async () => {
-    const { stdout } = await runLine('check', sample('stamp.png'), ...SPOT, '--direction-deg', '90', '--json');
-    expect(checkReportSchema.parse(JSON.parse(stdout))).toMatchObject({ directionDeg: 90, sizeAcrossMm: 0.07 });
+    const { stdout } = await runLine(
+      'check',
+      sample('stamp.png'),
+      ...SPOT,
+      '--direction-deg',
+      '90',
+      '--json',
+    );
+    expect(checkReportSchema.parse(JSON.parse(stdout))).toMatchObject({
+      directionDeg: 90,
+      sizeAcrossMm: 0.07,
+    });
   });
 
   test('without --json it is told in words, and timings go to standard error', async () => {
@@ -48,7 +71,17 @@ describe('check', () => {
   });
 
   test('quarter turns change places of width and height', async () => {
-    const line = [sample('banner.svg'), '--width-mm', '30', '--quarter-turns', '1', ...SPOT, '--blank-mm', '60x160', '--json'];
+    const line = [
+      sample('banner.svg'),
+      '--width-mm',
+      '30',
+      '--quarter-turns',
+      '1',
+      ...SPOT,
+      '--blank-mm',
+      '60x160',
+      '--json',
+    ];
     const { status, stdout } = await runLine('check', ...line);
     const report = checkReportSchema.parse(JSON.parse(stdout));
     expect([status, report.heightMm]).toEqual([0, 120]);
@@ -69,7 +102,9 @@ describe('prepare', () => {
     const report = reportSchema.parse(JSON.parse(readFileSync(path.join(out, 'report.json'), 'utf8')));
     expect(report).toEqual(JSON.parse(stdout));
     expect(createHash('sha256').update(text).digest('hex')).toBe(report.manifestSha256);
-    expect(readdirSync(out).sort()).toEqual([...manifest.files.map(({ name }) => name), 'manifest.json', 'report.json'].sort());
+    expect(readdirSync(out).sort()).toEqual(
+      [...manifest.files.map(({ name }) => name), 'manifest.json', 'report.json'].sort(),
+    );
     for (const { name, sha256, bytes } of manifest.files) {
       const content = readFileSync(path.join(out, name));
       expect([createHash('sha256').update(content).digest('hex'), content.length]).toEqual([sha256, bytes]);
@@ -84,7 +119,8 @@ describe('prepare', () => {
     await prepare(two, ...line);
     const names = readdirSync(one);
     expect(readdirSync(two)).toEqual(names);
-    for (const name of names) expect(readFileSync(path.join(two, name)).equals(readFileSync(path.join(one, name)))).toBe(true);
+    for (const name of names)
+      expect(readFileSync(path.join(two, name)).equals(readFileSync(path.join(one, name)))).toBe(true);
   });
 
   test('blockers stop no file: status 1, and all of it is there', async () => {
@@ -92,19 +128,46 @@ describe('prepare', () => {
     const line = ['--treatment', 'solid', '--formats', 'png', '--out', out];
     const { status } = await runLine('prepare', sample('hairline.svg'), ...SPOT, ...line);
     expect(status).toBe(1);
-    expect(readdirSync(out).filter((name) => name.endsWith('.json'))).toEqual(['manifest.json', 'report.json']);
+    expect(readdirSync(out).filter((name) => name.endsWith('.json'))).toEqual([
+      'manifest.json',
+      'report.json',
+    ]);
     expect(readdirSync(out)).toHaveLength(3);
   });
 
   test('pitch, direction, screen, mirror and a perpendicular pass reach the report', async () => {
     const out = path.join(scratch, 'asked');
     const { stdout } = await prepare(
-      out, '--treatment', 'halftone', '--screen', 'published:stucki-1981', '--pitch-mm', '0.2', '--pitch-along-mm', '0.15',
-      '--direction-deg', '90', '--perpendicular-pitch-mm', '0.25', '--mirror', '--firing', 'pulsed', '--formats', 'png', '--json',
+      out,
+      '--treatment',
+      'halftone',
+      '--screen',
+      'published:stucki-1981',
+      '--pitch-mm',
+      '0.2',
+      '--pitch-along-mm',
+      '0.15',
+      '--direction-deg',
+      '90',
+      '--perpendicular-pitch-mm',
+      '0.25',
+      '--mirror',
+      '--firing',
+      'pulsed',
+      '--formats',
+      'png',
+      '--json',
     );
     const report = reportSchema.parse(JSON.parse(stdout));
-    expect(report.settings).toMatchObject({ screen: 'published:stucki-1981', mirror: true, firing: 'pulsed' });
-    expect(report.passes.map(({ directionDeg, linePitchMm }) => [directionDeg, linePitchMm])).toEqual([[90, 0.2], [180, 0.25]]);
+    expect(report.settings).toMatchObject({
+      screen: 'published:stucki-1981',
+      mirror: true,
+      firing: 'pulsed',
+    });
+    expect(report.passes.map(({ directionDeg, linePitchMm }) => [directionDeg, linePitchMm])).toEqual([
+      [90, 0.2],
+      [180, 0.25],
+    ]);
     expect(report.passes[0]).toMatchObject({ lines: 150, alongPitchMm: 0.15 });
     expect(report.files).toHaveLength(2);
   });
@@ -112,34 +175,102 @@ describe('prepare', () => {
   test('--pictures adds the five pictures', async () => {
     const out = path.join(scratch, 'pictures');
     await prepare(out, '--treatment', 'solid', '--formats', 'png', '--pitch-mm', '0.3', '--pictures');
-    expect(readdirSync(path.join(out, 'pictures')).sort()).toEqual(['burned.png', 'screened.png', 'sent.png', 'sized.png', 'toned.png']);
+    expect(readdirSync(path.join(out, 'pictures')).sort()).toEqual([
+      'burned.png',
+      'screened.png',
+      'sent.png',
+      'sized.png',
+      'toned.png',
+    ]);
   });
 });
 
 describe('refusals', () => {
   test.each([
     ['a spot that is missing', ['check', sample('stamp.png')], '--spot is needed'],
-    ['a width out of range', ['check', sample('stamp.png'), ...SPOT, '--width-mm', '5000'], '--width-mm takes a number from 1 to 3000 mm'],
-    ['a screen that comes later', ['prepare', sample('stamp.png'), ...SPOT, '--treatment', 'halftone', '--screen', 'spot-aware', '--out', 'x'], 'comes later'],
-    ['no size anywhere', ['prepare', sample('still-life.png'), ...SPOT, '--treatment', 'halftone', '--out', 'never-made'], '--width-mm is needed, from 1 to 3000 mm'],
-    ['a pitch that would not fit', ['prepare', sample('stamp.png'), ...SPOT, '--width-mm', '3000', '--pitch-mm', '0.01', '--treatment', 'solid', '--out', 'never-made'], '--pitch-mm does not fit'],
-    ['a file in the place of the folder', ['prepare', sample('stamp.png'), ...SPOT, '--treatment', 'solid', '--out', sample('stamp.png')], '--out takes a folder'],
+    [
+      'a width out of range',
+      ['check', sample('stamp.png'), ...SPOT, '--width-mm', '5000'],
+      '--width-mm takes a number from 1 to 3000 mm',
+    ],
+    [
+      'a screen that comes later',
+      [
+        'prepare',
+        sample('stamp.png'),
+        ...SPOT,
+        '--treatment',
+        'halftone',
+        '--screen',
+        'spot-aware',
+        '--out',
+        'x',
+      ],
+      'comes later',
+    ],
+    [
+      'no size anywhere',
+      ['prepare', sample('still-life.png'), ...SPOT, '--treatment', 'halftone', '--out', 'never-made'],
+      '--width-mm is needed, from 1 to 3000 mm',
+    ],
+    [
+      'a pitch that would not fit',
+      [
+        'prepare',
+        sample('stamp.png'),
+        ...SPOT,
+        '--width-mm',
+        '3000',
+        '--pitch-mm',
+        '0.01',
+        '--treatment',
+        'solid',
+        '--out',
+        'never-made',
+      ],
+      '--pitch-mm does not fit',
+    ],
+    [
+      'a file in the place of the folder',
+      ['prepare', sample('stamp.png'), ...SPOT, '--treatment', 'solid', '--out', sample('stamp.png')],
+      '--out takes a folder',
+    ],
   ])('%s: status 2, and the message names option and range', async (_name, argv, words) => {
     const { status, stdout, stderr } = await runLine(...argv);
     expect([status, stdout]).toEqual([2, '']);
     expect(stderr).toContain(words);
   });
 
-  test.each(['half-a-file.png', 'no-bytes.png', 'not-artwork.pdf', 'no-such-file.svg'])('%s: status 3, one plain sentence or two, no stack', async (name) => {
-    const { status, stdout, stderr } = await runLine('check', sample(name), '--width-mm', '30', ...SPOT, '--json');
-    expect([status, stdout]).toEqual([3, '']);
-    expect(stderr).toMatch(/^[A-Z][^\n]*\.\n$/);
-    expect(stderr).not.toContain('Error');
-  });
+  test.each(['half-a-file.png', 'no-bytes.png', 'not-artwork.pdf', 'no-such-file.svg'])(
+    '%s: status 3, one plain sentence or two, no stack',
+    async (name) => {
+      const { status, stdout, stderr } = await runLine(
+        'check',
+        sample(name),
+        '--width-mm',
+        '30',
+        ...SPOT,
+        '--json',
+      );
+      expect([status, stdout]).toEqual([3, '']);
+      expect(stderr).toMatch(/^[A-Z][^\n]*\.\n$/);
+      expect(stderr).not.toContain('Error');
+    },
+  );
 
   test('an artwork that cannot be read leaves no folder behind', async () => {
     const out = path.join(scratch, 'nothing');
-    const { status } = await runLine('prepare', sample('half-a-file.png'), '--width-mm', '30', ...SPOT, '--treatment', 'solid', '--out', out);
+    const { status } = await runLine(
+      'prepare',
+      sample('half-a-file.png'),
+      '--width-mm',
+      '30',
+      ...SPOT,
+      '--treatment',
+      'solid',
+      '--out',
+      out,
+    );
     expect(status).toBe(3);
     expect(readdirSync(scratch)).not.toContain('nothing');
   });
@@ -147,7 +278,16 @@ describe('refusals', () => {
   test('a folder that cannot be made: status 4 and a sentence', async () => {
     const taken = path.join(scratch, 'taken');
     writeFileSync(taken, '');
-    const line = ['--treatment', 'solid', '--pitch-mm', '0.5', '--formats', 'png', '--out', path.join(taken, 'below')];
+    const line = [
+      '--treatment',
+      'solid',
+      '--pitch-mm',
+      '0.5',
+      '--formats',
+      'png',
+      '--out',
+      path.join(taken, 'below'),
+    ];
     const { status, stderr } = await runLine('prepare', sample('stamp.png'), ...SPOT, ...line);
     expect(status).toBe(4);
     expect(stderr).toMatch(/^This did not work: /);

@@ -23,10 +23,26 @@ const hairline: Finding = {
 const report: CheckReport = {
   reportVersion: 1,
   artwork: {
-    sha256: '', bytes: 1, format: 'svg', kind: 'vector', widthPx: 1, heightPx: 1, ownWidthMm: null, ownHeightMm: null,
-    remarks: ['A remark.'], suggestedTreatment: 'linework', suggestionReason: 'It is drawn in lines.', tonalShare: 0,
+    sha256: '',
+    bytes: 1,
+    format: 'svg',
+    kind: 'vector',
+    widthPx: 1,
+    heightPx: 1,
+    ownWidthMm: null,
+    ownHeightMm: null,
+    remarks: ['A remark.'],
+    suggestedTreatment: 'linework',
+    suggestionReason: 'It is drawn in lines.',
+    tonalShare: 0,
   },
-  widthMm: 60, heightMm: 24.3333, directionDeg: 0, sizeAcrossMm: 0.11, findings: [hairline], smallestSoundWidthMm: 165, measuredPxPerMm: 60,
+  widthMm: 60,
+  heightMm: 24.3333,
+  directionDeg: 0,
+  sizeAcrossMm: 0.11,
+  findings: [hairline],
+  smallestSoundWidthMm: 165,
+  measuredPxPerMm: 60,
 };
 
 test('a finding is told with its measure, its limit, five places and the rest counted', () => {
@@ -42,7 +58,16 @@ test('a finding is told with its measure, its limit, five places and the rest co
 
 test('a figure that is no width is told with its unit', () => {
   const measured = { value: 142.4, limit: 231, unit: 'ppi' };
-  const coarse: Finding = { ...hairline, id: 'resolution', severity: 'warning', count: 1, places: [], minMm: null, limitMm: null, measured };
+  const coarse: Finding = {
+    ...hairline,
+    id: 'resolution',
+    severity: 'warning',
+    count: 1,
+    places: [],
+    minMm: null,
+    limitMm: null,
+    measured,
+  };
   expect(checkText('a', { ...report, findings: [coarse] })).toContain('measured 142.4 ppi, limit 231');
 });
 
@@ -52,7 +77,12 @@ test('nothing found is said so', () => {
   expect(text).not.toContain('Smallest sound width');
 });
 
-test.each([[0.0314, '0.031 mm'], [1, '1 mm'], [24.3333, '24.33 mm'], [0.1, '0.1 mm']])('%s mm reads %s', (value, text) => {
+test.each([
+  [0.0314, '0.031 mm'],
+  [1, '1 mm'],
+  [24.3333, '24.33 mm'],
+  [0.1, '0.1 mm'],
+])('%s mm reads %s', (value, text) => {
   expect(mm(value)).toBe(text);
 });
 

@@ -12,7 +12,17 @@ import { DEFAULT_SCREEN, SCREEN_NAMES } from '../../src/lib/prepare/settings';
 const SPOT = { spot: '0.07x0.11' };
 const drawing = (aspect: number): Artwork => ({
   kind: 'vector',
-  facts: { sha256: '', bytes: 1, format: 'svg', kind: 'vector', widthPx: 1, heightPx: 1, ownWidthMm: null, ownHeightMm: null, remarks: [] },
+  facts: {
+    sha256: '',
+    bytes: 1,
+    format: 'svg',
+    kind: 'vector',
+    widthPx: 1,
+    heightPx: 1,
+    ownWidthMm: null,
+    ownHeightMm: null,
+    remarks: [],
+  },
   svg: new Uint8Array(),
   aspect,
   missingFonts: [],
@@ -24,9 +34,14 @@ describe('numbers, pairs and words', () => {
   test.each(['1', '3000', '12.5', '+7', '1.'])('%s is a number', (text) => {
     expect(numberValue('width-mm', text, range)).toBe(Number(text));
   });
-  test.each(['0.99', '3001', 'ten', '', '1e3', '0x10', '12,5', '12mm', 'NaN', 'Infinity', '-5'])('"%s" is refused with option and range', (text) => {
-    expect(() => numberValue('width-mm', text, range)).toThrow(`--width-mm takes a number from 1 to 3000 mm, got "${text}".`);
-  });
+  test.each(['0.99', '3001', 'ten', '', '1e3', '0x10', '12,5', '12mm', 'NaN', 'Infinity', '-5'])(
+    '"%s" is refused with option and range',
+    (text) => {
+      expect(() => numberValue('width-mm', text, range)).toThrow(
+        `--width-mm takes a number from 1 to 3000 mm, got "${text}".`,
+      );
+    },
+  );
   test('two numbers joined by x or the multiplication sign', () => {
     expect(pairValue('spot', '0.07x0.11', SPOT_RANGE)).toEqual([0.07, 0.11]);
     expect(pairValue('spot', '0.07×0.11', SPOT_RANGE)).toEqual([0.07, 0.11]);
@@ -36,7 +51,9 @@ describe('numbers, pairs and words', () => {
   });
   test('a word out of a list, and the list in the refusal', () => {
     expect(wordValue('tone', 'scaled', ['absolute', 'scaled'])).toBe('scaled');
-    expect(() => wordValue('tone', 'loud', ['absolute', 'scaled'])).toThrow('--tone takes absolute, scaled; got "loud".');
+    expect(() => wordValue('tone', 'loud', ['absolute', 'scaled'])).toThrow(
+      '--tone takes absolute, scaled; got "loud".',
+    );
   });
 });
 
@@ -83,9 +100,12 @@ describe('screens', () => {
   test.each(SCREEN_NAMES)('%s', (name) => expect(readScreen(name)).toBe(name));
   test('none asked for', () => expect(readScreen(undefined)).toBe(DEFAULT_SCREEN));
   test.each(['spot-aware', 'clustered-dot'])('%s comes later, and what there is gets named', (name) => {
-    expect(() => readScreen(name)).toThrow(`--screen ${name} comes later; there are even-grain, published:floyd`);
+    expect(() => readScreen(name)).toThrow(
+      `--screen ${name} comes later; there are even-grain, published:floyd`,
+    );
   });
-  test('a screen that nobody knows', () => expect(() => readScreen('dots')).toThrow('--screen takes even-grain'));
+  test('a screen that nobody knows', () =>
+    expect(() => readScreen('dots')).toThrow('--screen takes even-grain'));
 });
 
 describe('what both commands are asked', () => {
@@ -112,12 +132,18 @@ describe('what both commands are asked', () => {
   test('a side that the proportions push out of range is refused by name', () => {
     const asked = readAsked({ ...SPOT, 'width-mm': '10' });
     expect(sizeFor(drawing(4), asked)).toEqual({ widthMm: 10, heightMm: 2.5 });
-    expect(() => sizeFor(drawing(40), asked)).toThrow('--height-mm must come to 1 to 3000 mm; with these proportions it is 0.25 mm.');
+    expect(() => sizeFor(drawing(40), asked)).toThrow(
+      '--height-mm must come to 1 to 3000 mm; with these proportions it is 0.25 mm.',
+    );
   });
   test('the artwork lies in the middle of its blank', () => {
     expect(centredBlank(null, { widthMm: 1, heightMm: 1 })).toBeNull();
     expect(centredBlank([100, 60], { widthMm: 40, heightMm: 20 })).toEqual({
-      outline: 'rectangle', widthMm: 100, heightMm: 60, leftMm: 30, topMm: 20,
+      outline: 'rectangle',
+      widthMm: 100,
+      heightMm: 60,
+      leftMm: 30,
+      topMm: 20,
     });
   });
 });
@@ -148,19 +174,30 @@ describe('what prepare is asked', () => {
   test.each([
     [{}, '--treatment is needed'],
     [{ treatment: 'solid', screen: 'even-grain' }, '--screen belongs to the treatment halftone'],
-    [{ treatment: 'solid', 'black-point': '0.9', 'white-point': '0.5' }, '--white-point must lie above --black-point'],
+    [
+      { treatment: 'solid', 'black-point': '0.9', 'white-point': '0.5' },
+      '--white-point must lie above --black-point',
+    ],
     [{ treatment: 'solid', gamma: '0.1' }, '--gamma takes a number from 0.2 to 5'],
     [{ treatment: 'solid', tone: 'dark' }, '--tone takes absolute, scaled'],
     [{ treatment: 'solid', formats: 'png,pdf' }, '--formats takes png, tiff, bmp'],
     [{ treatment: 'solid', corners: 'round' }, '--corners takes kept, eased'],
-    [{ treatment: 'solid', 'perpendicular-pitch-mm': '9' }, '--perpendicular-pitch-mm takes a number from 0.01 to 2 mm'],
+    [
+      { treatment: 'solid', 'perpendicular-pitch-mm': '9' },
+      '--perpendicular-pitch-mm takes a number from 0.01 to 2 mm',
+    ],
     [{ treatment: 'solid', label: 'a b' }, '--label takes 1 to 60 letters'],
   ])('%j is refused: %s', (values, words) => expect(() => choices(values)).toThrow(words));
 
   test('all of it becomes settings of the pipeline', () => {
     const values = { ...SPOT, treatment: 'continuous', 'direction-deg': '90', 'blank-mm': '100x60' };
     const asked = readAsked(values);
-    const settings = settingsOf(asked, readPrepareChoices(values, asked, 'a.png'), { widthMm: 40, heightMm: 20 }, true);
+    const settings = settingsOf(
+      asked,
+      readPrepareChoices(values, asked, 'a.png'),
+      { widthMm: 40, heightMm: 20 },
+      true,
+    );
     expect(settings).toMatchObject({
       widthMm: 40,
       heightMm: 20,

@@ -25,7 +25,15 @@ export function coverageOf(width: number, height: number, polygons: readonly Pol
   return coverage;
 }
 
-function addEdge(sums: Float64Array, width: number, height: number, x0: number, y0: number, x1: number, y1: number): void {
+function addEdge(
+  sums: Float64Array,
+  width: number,
+  height: number,
+  x0: number,
+  y0: number,
+  x1: number,
+  y1: number,
+): void {
   if (y0 === y1) return;
   const sign = y0 < y1 ? 1 : -1;
   const [ax, ay, bx, by] = y0 < y1 ? [x0, y0, x1, y1] : [x1, y1, x0, y0];
@@ -34,12 +42,26 @@ function addEdge(sums: Float64Array, width: number, height: number, x0: number, 
     const top = Math.max(ay, row);
     const bottom = Math.min(by, row + 1);
     if (bottom <= top) continue;
-    addRow(sums, row * (width + 2), width, ax + (top - ay) * slope, ax + (bottom - ay) * slope, sign * (bottom - top));
+    addRow(
+      sums,
+      row * (width + 2),
+      width,
+      ax + (top - ay) * slope,
+      ax + (bottom - ay) * slope,
+      sign * (bottom - top),
+    );
   }
 }
 
 /** One edge within one row of pixels: split at the columns it crosses. */
-function addRow(sums: Float64Array, start: number, width: number, xa: number, xb: number, signedHeight: number): void {
+function addRow(
+  sums: Float64Array,
+  start: number,
+  width: number,
+  xa: number,
+  xb: number,
+  signedHeight: number,
+): void {
   const low = Math.min(xa, xb);
   const high = Math.max(xa, xb);
   const steps = high > low ? [low, ...whole(low, high), high] : [low, low];
@@ -60,7 +82,8 @@ function whole(low: number, high: number): number[] {
 }
 
 /** Coverage as 8-bit samples, 255 for a full pixel. */
-export const asBytes = (coverage: Float64Array): Uint8Array => Uint8Array.from(coverage, (c) => Math.round(c * 255));
+export const asBytes = (coverage: Float64Array): Uint8Array =>
+  Uint8Array.from(coverage, (c) => Math.round(c * 255));
 
 /** A bar of a length and a width around a centre, its length at an angle to X in degrees. */
 export function bar(cx: number, cy: number, length: number, width: number, angleDeg: number): Polygon {
@@ -87,7 +110,14 @@ export function disc(cx: number, cy: number, diameter: number, sides = 720): Pol
 export const hole = (polygon: Polygon): Polygon => [...polygon].reverse();
 
 /** Corners of a star with tips at `outer` and notches at `inner` from the centre. */
-export function star(cx: number, cy: number, tips: number, outer: number, inner: number, turnDeg = 0): Polygon {
+export function star(
+  cx: number,
+  cy: number,
+  tips: number,
+  outer: number,
+  inner: number,
+  turnDeg = 0,
+): Polygon {
   return Array.from({ length: tips * 2 }, (_, n) => {
     const t = (Math.PI * n) / tips + (turnDeg * Math.PI) / 180;
     const r = n % 2 === 0 ? outer : inner;

@@ -24,8 +24,11 @@ export function pictureOf(widthPx: number, heightPx: number, coverage: Uint8Arra
 }
 
 /** A picture of black polygons in pixels, drawn by exact area. */
-export const pictureOfPolygons = (widthPx: number, heightPx: number, polygons: readonly Polygon[]): RasterArtwork =>
-  pictureOf(widthPx, heightPx, asBytes(coverageOf(widthPx, heightPx, polygons)));
+export const pictureOfPolygons = (
+  widthPx: number,
+  heightPx: number,
+  polygons: readonly Polygon[],
+): RasterArtwork => pictureOf(widthPx, heightPx, asBytes(coverageOf(widthPx, heightPx, polygons)));
 
 export interface Drawing {
   artwork: VectorArtwork;

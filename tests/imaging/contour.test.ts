@@ -48,7 +48,11 @@ describe('contourOf', () => {
   test('a straight edge at any angle and offset lies where it was drawn', () => {
     for (let deg = 0; deg < 180; deg += 7.5) {
       for (const offset of [0, 0.25, 0.5, 0.81]) {
-        const field = { width: 40, height: 40, data: asBytes(coverageOf(40, 40, [bar(20 + offset, 20, 200, 12, deg)])) };
+        const field = {
+          width: 40,
+          height: 40,
+          data: asBytes(coverageOf(40, 40, [bar(20 + offset, 20, 200, 12, deg)])),
+        };
         const { count, points } = contour(field);
         const a = (deg * Math.PI) / 180;
         for (let n = 0; n < count; n++) {
@@ -67,7 +71,8 @@ describe('contourOf', () => {
     const { count, points } = contour(field);
     for (let n = 0; n < count; n++) {
       // The outermost columns have no neighbours to tell the grey by.
-      if (Math.abs(points[n * 4] - 20) < 17) expect(Math.abs(Math.abs(points[n * 4 + 1] - 20) - 6)).toBeLessThan(0.03);
+      if (Math.abs(points[n * 4] - 20) < 17)
+        expect(Math.abs(Math.abs(points[n * 4 + 1] - 20) - 6)).toBeLessThan(0.03);
     }
   });
 

@@ -4,10 +4,20 @@ import { cappedDistance, squaredDistance } from '../../src/lib/imaging/distance'
 import { divide } from '../../src/lib/imaging/field';
 
 /** The definition, pixel by pixel. */
-function nearest(mask: Uint8Array, width: number, height: number, other: (i: number) => boolean, i: number): number {
+function nearest(
+  mask: Uint8Array,
+  width: number,
+  height: number,
+  other: (i: number) => boolean,
+  i: number,
+): number {
   let best = Infinity;
   for (let j = 0; j < width * height; j++) {
-    if (other(j)) best = Math.min(best, ((i % width) - (j % width)) ** 2 + (Math.floor(i / width) - Math.floor(j / width)) ** 2);
+    if (other(j))
+      best = Math.min(
+        best,
+        ((i % width) - (j % width)) ** 2 + (Math.floor(i / width) - Math.floor(j / width)) ** 2,
+      );
   }
   return best;
 }
@@ -77,9 +87,19 @@ describe('cappedDistance', () => {
     const width = 70;
     const height = 50;
     const data = new Uint8Array(width * height);
-    for (const [x, y] of [[33, 20], [15, 15], [16, 32], [69, 49]]) data[y * width + x] = 255;
+    for (const [x, y] of [
+      [33, 20],
+      [15, 15],
+      [16, 32],
+      [69, 49],
+    ])
+      data[y * width + x] = 255;
     const got = cappedDistance(divide({ width, height, data }, 127.5), 9);
-    const exact = squaredDistance(data.map((v) => (v ? 0 : 1)), width, height);
+    const exact = squaredDistance(
+      data.map((v) => (v ? 0 : 1)),
+      width,
+      height,
+    );
     for (let i = 0; i < data.length; i++) if (!data[i]) expect(got[i]).toBe(Math.min(81, exact[i]));
   });
 

@@ -34,7 +34,11 @@ describe('divide', () => {
   });
 
   test('an edge between two blocks is noted in both', () => {
-    const field = { width: 48, height: 16, data: new Uint8Array(48 * 16).map((_, i) => (i % 48 < 16 ? 255 : 0)) };
+    const field = {
+      width: 48,
+      height: 16,
+      data: new Uint8Array(48 * 16).map((_, i) => (i % 48 < 16 ? 255 : 0)),
+    };
     const division = divide(field, 127.5);
     expect([...division.edgeBlocks]).toEqual([1, 1, 0]);
     expect([...blocksNearEdges(division)]).toEqual([1, 1, 1]);

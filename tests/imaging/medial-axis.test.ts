@@ -17,7 +17,9 @@ function axis(polygons: readonly Polygon[], side: 0 | 1 = 1, widest = 14, size =
 }
 
 const near = (points: AxisPoints, x: number, y: number, within: number): number[] =>
-  Array.from({ length: points.count }, (_, n) => n).filter((n) => Math.hypot(points.x[n] - x, points.y[n] - y) < within);
+  Array.from({ length: points.count }, (_, n) => n).filter(
+    (n) => Math.hypot(points.x[n] - x, points.y[n] - y) < within,
+  );
 
 describe('medialAxis', () => {
   test.each([0, 7.5, 22.5, 45, 61, 90, 133])('a bar at %s° has its width all along', (deg) => {
@@ -91,7 +93,13 @@ describe('smoothAxis', () => {
   test('a taper of 14° gains width at twice the sine of half its angle', () => {
     const h = 70;
     const w = h * Math.tan((7 * Math.PI) / 180);
-    const points = axis([[[5, 40], [5 + h, 40 - w], [5 + h, 40 + w]]]);
+    const points = axis([
+      [
+        [5, 40],
+        [5 + h, 40 - w],
+        [5 + h, 40 + w],
+      ],
+    ]);
     const { slope, width } = smoothed(points);
     for (const n of near(points, 35, 40, 6)) {
       expect(slope[n]).toBeCloseTo(2 * Math.sin((7 * Math.PI) / 180), 1);

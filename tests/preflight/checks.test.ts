@@ -7,7 +7,9 @@ import { limits, soundFacts, widths } from './facts';
 
 const find = (id: FindingId, facts: Partial<Facts>, other: Partial<Limits> = {}): Finding | undefined =>
   judge({ ...soundFacts, ...facts }, { ...limits, ...other }).find((finding) => finding.id === id);
-const tone = (change: Partial<Facts['tone']>): Partial<Facts> => ({ tone: { ...soundFacts.tone, ...change } });
+const tone = (change: Partial<Facts['tone']>): Partial<Facts> => ({
+  tone: { ...soundFacts.tone, ...change },
+});
 const placed = (change: Partial<Facts['placement']>): Partial<Facts> => ({
   placement: { ...soundFacts.placement, ...change },
 });
@@ -25,7 +27,12 @@ describe('the list of checks', () => {
 
   test('puts blockers first, then warnings, then notes', () => {
     const found = judge(
-      { ...soundFacts, severalFrames: true, specks: { ...soundFacts.specks, count: 2 }, hairlines: widths(0.03) },
+      {
+        ...soundFacts,
+        severalFrames: true,
+        specks: { ...soundFacts.specks, count: 2 },
+        hairlines: widths(0.03),
+      },
       limits,
     );
     expect(found.map(({ severity }) => severity)).toEqual(['blocker', 'warning', 'note']);
@@ -54,7 +61,9 @@ describe.each([
   });
 
   test('advises the smallest sound width where it was found', () => {
-    expect(find(id, { [key]: widths(0.06) }, { smallestSoundWidthMm: 137 })?.advice).toContain('about 137 mm wide');
+    expect(find(id, { [key]: widths(0.06) }, { smallestSoundWidthMm: 137 })?.advice).toContain(
+      'about 137 mm wide',
+    );
   });
 
   test('gives smallest width, limit, count and places', () => {
@@ -110,7 +119,11 @@ describe('outside', () => {
   const beyond = { leftMm: 0, rightMm: 0, topMm: 0, bottomMm: 0 };
 
   test.each<[string, Partial<Facts['placement']>, string]>([
-    ['the blank on two sides', { beyondBlank: { ...beyond, leftMm: 2, bottomMm: 0.5 } }, '2 mm on the left and 0.5 mm on the bottom'],
+    [
+      'the blank on two sides',
+      { beyondBlank: { ...beyond, leftMm: 2, bottomMm: 0.5 } },
+      '2 mm on the left and 0.5 mm on the bottom',
+    ],
     ['a round blank', { beyondRoundMm: 1.25, beyondBlank: beyond }, '1.25 mm beyond the round edge'],
     ['the bed', { beyondBed: { xMm: 30, yMm: 0 } }, '30 mm in width'],
     ['the bed with its run-off', { beyondBed: { xMm: 4, yMm: 0 }, runOffMm: 15 }, '15 mm of run-off'],
@@ -126,12 +139,16 @@ describe('outside', () => {
   });
 
   test('a round blank is judged by what is burned, not by the corners of the picture', () => {
-    expect(find('outside', placed({ beyondRoundMm: 0, beyondBlank: { ...beyond, leftMm: 3 } }))).toBeUndefined();
+    expect(
+      find('outside', placed({ beyondRoundMm: 0, beyondBlank: { ...beyond, leftMm: 3 } })),
+    ).toBeUndefined();
   });
 });
 
 describe('resolution', () => {
-  const source = (pxPerMm: number, count = 0): Partial<Facts> => ({ source: { pxPerMm, unresolved: { count, places: [] } } });
+  const source = (pxPerMm: number, count = 0): Partial<Facts> => ({
+    source: { pxPerMm, unresolved: { count, places: [] } },
+  });
 
   test.each([
     [10, undefined],
@@ -148,11 +165,17 @@ describe('resolution', () => {
   });
 
   test('lines that the pixels do not resolve are a warning, whatever their number', () => {
-    expect(find('resolution', source(20, 4))).toMatchObject({ severity: 'warning', count: 4, limitMm: 1.5 / 20 });
+    expect(find('resolution', source(20, 4))).toMatchObject({
+      severity: 'warning',
+      count: 4,
+      limitMm: 1.5 / 20,
+    });
   });
 
   test('a drawing has no pixels to count', () => {
-    expect(find('resolution', { source: { pxPerMm: null, unresolved: { count: 0, places: [] } } })).toBeUndefined();
+    expect(
+      find('resolution', { source: { pxPerMm: null, unresolved: { count: 0, places: [] } } }),
+    ).toBeUndefined();
   });
 });
 
@@ -161,7 +184,10 @@ describe('tones', () => {
 
   test('a flat photograph is a warning, a drawing of two greys is not', () => {
     const flat = tone({ darkLstar: 40, lightLstar: 70 });
-    expect(find('tonal-range', flat, photograph)).toMatchObject({ severity: 'warning', measured: { value: 30, unit: 'L*' } });
+    expect(find('tonal-range', flat, photograph)).toMatchObject({
+      severity: 'warning',
+      measured: { value: 30, unit: 'L*' },
+    });
     expect(find('tonal-range', flat)).toBeUndefined();
     expect(find('tonal-range', tone({ darkLstar: 10, lightLstar: 90 }), photograph)).toBeUndefined();
   });
@@ -181,5 +207,8 @@ test('fonts, parts left out and further frames are said by name', () => {
   expect(find('missing-font', { missingFonts: ['Alder', 'Birch'] })?.advice).toContain('Alder and Birch');
   expect(find('unsafe-content', { removed: ['a script'] })).toMatchObject({ severity: 'note', count: 1 });
   expect(find('first-frame', { severalFrames: true })?.severity).toBe('note');
-  expect(find('sharp-tip', { sharpTips: { count: 2, places: [] } })).toMatchObject({ severity: 'note', count: 2 });
+  expect(find('sharp-tip', { sharpTips: { count: 2, places: [] } })).toMatchObject({
+    severity: 'note',
+    count: 2,
+  });
 });

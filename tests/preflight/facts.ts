@@ -6,7 +6,14 @@ const NO_AREAS = { count: 0, places: [], limitMm: 0.1 };
 
 /** Facts of a sound drawing of 60 × 40 mm: every check is silent on them. */
 export const soundFacts: Facts = {
-  placement: { widthMm: 60, heightMm: 40, beyondBlank: null, beyondRoundMm: null, runOffMm: 0, beyondBed: null },
+  placement: {
+    widthMm: 60,
+    heightMm: 40,
+    beyondBlank: null,
+    beyondRoundMm: null,
+    runOffMm: 0,
+    beyondBed: null,
+  },
   linePitchMm: 0.1,
   hairlines: NO_WIDTHS,
   fillIns: NO_WIDTHS,

@@ -13,7 +13,13 @@ const facts = {
   ownHeightMm: null,
   remarks: [],
 };
-const picture: RasterArtwork = { kind: 'raster', facts, widthPx: 300, heightPx: 200, luminance: new Uint16Array(60_000) };
+const picture: RasterArtwork = {
+  kind: 'raster',
+  facts,
+  widthPx: 300,
+  heightPx: 200,
+  luminance: new Uint16Array(60_000),
+};
 const scanned: RasterArtwork = { ...picture, facts: { ...facts, ownWidthMm: 40, ownHeightMm: 40 } };
 const drawing: Artwork = {
   kind: 'vector',
@@ -23,7 +29,12 @@ const drawing: Artwork = {
   missingFonts: [],
   removed: [],
 };
-const ask = (asked: Partial<AskedSize>): AskedSize => ({ widthMm: null, heightMm: null, quarterTurns: 0, ...asked });
+const ask = (asked: Partial<AskedSize>): AskedSize => ({
+  widthMm: null,
+  heightMm: null,
+  quarterTurns: 0,
+  ...asked,
+});
 
 test.each([
   ['width alone', picture, ask({ widthMm: 60 }), 60, 40],

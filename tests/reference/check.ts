@@ -18,6 +18,10 @@ export interface ReferenceCheck {
  * A test that holds our result against a source outside this project. The README's table is read from these calls, so
  * the first argument is written out in literals.
  */
-export function referenceCheck(check: ReferenceCheck, fn: () => void | Promise<void>, timeoutMs?: number): void {
+export function referenceCheck(
+  check: ReferenceCheck,
+  fn: () => void | Promise<void>,
+  timeoutMs?: number,
+): void {
   test(`${check.what} [${check.basis}]`, fn, timeoutMs);
 }

@@ -26,7 +26,11 @@ const asked = (change: Partial<Settings>): Settings =>
 
 const SETTINGS: Settings[] = [
   asked({}),
-  asked({ widthMm: 47.3, heightMm: 31.7, scan: { directionDeg: 0, linePitchMm: 0.0847, alongPitchMm: 0.127 } }),
+  asked({
+    widthMm: 47.3,
+    heightMm: 31.7,
+    scan: { directionDeg: 0, linePitchMm: 0.0847, alongPitchMm: 0.127 },
+  }),
   asked({ scan: { directionDeg: 90, linePitchMm: 0.07, alongPitchMm: 0.15 }, treatment: 'halftone' }),
   asked({ widthMm: 24, heightMm: 30.1, quarterTurns: 1, mirror: true, treatment: 'continuous' }),
   asked({ perpendicular: { linePitchMm: 0.2, alongPitchMm: 0.13 } }),
@@ -53,7 +57,8 @@ referenceCheck(
       expect(files).toHaveLength(settings.perpendicular ? 6 : 3);
       for (const [index, { name, bytes }] of files.entries()) {
         const { directionDeg, linePitchMm, alongPitchMm } = manifest.files[index];
-        const [xMm, yMm] = directionDeg % 180 === 0 ? [alongPitchMm, linePitchMm] : [linePitchMm, alongPitchMm];
+        const [xMm, yMm] =
+          directionDeg % 180 === 0 ? [alongPitchMm, linePitchMm] : [linePitchMm, alongPitchMm];
         if (name.endsWith('.png')) {
           const text = printed('pngcheck', ['-v'], bytes, name);
           const perMetre = /(\d+)x(\d+) pixels\/meter/.exec(text) ?? [];
@@ -67,8 +72,10 @@ referenceCheck(
         } else {
           const text = printed('tiffinfo', [], bytes, name);
           const unitMm = text.includes('pixels/cm') ? 10 : 25.4;
-          const widthMm = (figure(text, /Image Width: (\d+)/) / figure(text, /Resolution: ([\d.]+),/)) * unitMm;
-          const heightMm = (figure(text, /Image Length: (\d+)/) / figure(text, /Resolution: [\d.]+, ([\d.]+)/)) * unitMm;
+          const widthMm =
+            (figure(text, /Image Width: (\d+)/) / figure(text, /Resolution: ([\d.]+),/)) * unitMm;
+          const heightMm =
+            (figure(text, /Image Length: (\d+)/) / figure(text, /Resolution: [\d.]+, ([\d.]+)/)) * unitMm;
           expectPlaced(widthMm, heightMm, xMm, yMm, settings);
         }
       }

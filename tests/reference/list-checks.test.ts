@@ -8,7 +8,9 @@ referenceCheck({ what: 'a | b', basis: 'published', source: 'A book', within: '1
 referenceCheck({ what: 'c', basis: 'memory', source: 'nobody' }, () => {});`;
 
 test('the table in the README is the one that the checks give now', () => {
-  expect(readFileSync(README, 'utf8'), 'run: node --import tsx tests/reference/list-checks.ts').toBe(freshReadme());
+  expect(readFileSync(README, 'utf8'), 'run: node --import tsx tests/reference/list-checks.ts').toBe(
+    freshReadme(),
+  );
 });
 
 test('every file of reference tests holds at least one listed check', () => {
@@ -26,13 +28,19 @@ test('checks are read from the source with all their words', () => {
 });
 
 test('a check whose words are not written out is refused', () => {
-  expect(() => checksIn('referenceCheck({ what, basis: "published", source: "s" }, f)', 'x')).toThrow('written out');
-  expect(() => checksIn('referenceCheck({ what: "w", basis: "hearsay", source: "s" }, f)', 'x')).toThrow('basis');
+  expect(() => checksIn('referenceCheck({ what, basis: "published", source: "s" }, f)', 'x')).toThrow(
+    'written out',
+  );
+  expect(() => checksIn('referenceCheck({ what: "w", basis: "hearsay", source: "s" }, f)', 'x')).toThrow(
+    'basis',
+  );
   expect(() => checksIn('referenceCheck(shared, f)', 'x')).toThrow('written out');
 });
 
 test('the weightiest basis comes first and bars in the text stay inside their cell', () => {
-  const rows = tableOf([...checksIn(CALL, 'x')].reverse()).split('\n').slice(2);
+  const rows = tableOf([...checksIn(CALL, 'x')].reverse())
+    .split('\n')
+    .slice(2);
   expect(rows).toEqual(['| a \\| b | published | A book | 1 % |', '| c | memory | nobody | exact |']);
 });
 

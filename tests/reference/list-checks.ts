@@ -33,7 +33,8 @@ function literalsOf(call: ts.CallExpression, file: string): ListedCheck {
 export function checksIn(text: string, file: string): ListedCheck[] {
   const found: ListedCheck[] = [];
   const visit = (node: ts.Node): void => {
-    if (ts.isCallExpression(node) && node.expression.getText() === 'referenceCheck') found.push(literalsOf(node, file));
+    if (ts.isCallExpression(node) && node.expression.getText() === 'referenceCheck')
+      found.push(literalsOf(node, file));
     ts.forEachChild(node, visit);
   };
   visit(ts.createSourceFile(file, text, ts.ScriptTarget.Latest, true));
@@ -53,7 +54,8 @@ const cell = (text: string): string => text.replaceAll('|', '\\|');
 /** The README's table, weightiest basis first. */
 export function tableOf(checks: readonly ListedCheck[]): string {
   const rows = BASES.flatMap((basis) => checks.filter((check) => check.basis === basis)).map(
-    ({ what, basis, source, within }) => `| ${cell(what)} | ${basis} | ${cell(source)} | ${cell(within ?? 'exact')} |`,
+    ({ what, basis, source, within }) =>
+      `| ${cell(what)} | ${basis} | ${cell(source)} | ${cell(within ?? 'exact')} |`,
   );
   return ['| checked | basis | source | within |', '| --- | --- | --- | --- |', ...rows].join('\n');
 }

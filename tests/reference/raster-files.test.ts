@@ -27,7 +27,13 @@ function levels(width: number, height: number, pitchXMm: number, pitchYMm: numbe
   return { kind: 'levels', width, height, pitchXMm, pitchYMm, data };
 }
 
-const SIZES = [[1, 1], [1, 9], [8, 3], [13, 7], [333, 201]] as const;
+const SIZES = [
+  [1, 1],
+  [1, 9],
+  [8, 3],
+  [13, 7],
+  [333, 201],
+] as const;
 const MARKS: MarkRaster[] = PITCHES.flatMap(([x, y]) =>
   SIZES.flatMap(([width, height]) => [dots(width, height, x, y), levels(width, height, x, y)]),
 );
@@ -55,7 +61,9 @@ describe('PNG', () => {
       for (const marks of MARKS) {
         const text = printed('pngcheck', ['-v'], await writePng(marks), 'marks.png');
         const bits = marks.kind === 'mask' ? 1 : 8;
-        expect(text).toContain(`${marks.width} x ${marks.height} image, ${bits}-bit grayscale, non-interlaced`);
+        expect(text).toContain(
+          `${marks.width} x ${marks.height} image, ${bits}-bit grayscale, non-interlaced`,
+        );
         expect(text).toContain('No errors detected');
         const perMetre = /pHYs at offset [^:]*: (\d+)x(\d+) pixels\/meter/.exec(text);
         expect(perMetre, text).not.toBeNull();
@@ -99,7 +107,11 @@ describe('TIFF', () => {
     },
   );
   referenceCheck(
-    { what: 'TIFF: every pixel and its polarity, burned is black', basis: 'computed', source: 'Pillow 9.4.0' },
+    {
+      what: 'TIFF: every pixel and its polarity, burned is black',
+      basis: 'computed',
+      source: 'Pillow 9.4.0',
+    },
     async () => {
       needsTool('python3-pil');
       for (const marks of MARKS.slice(0, 2 * SIZES.length)) {

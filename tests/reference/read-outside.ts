@@ -11,7 +11,8 @@ export function printed(command: string, args: readonly string[], bytes: Uint8Ar
     const file = path.join(folder, name);
     writeFileSync(file, bytes);
     const outcome = spawnSync(command, [...args, file], { encoding: 'utf8', maxBuffer: 2 ** 28 });
-    if (outcome.status !== 0) throw new Error(`${command} refused ${name}: ${outcome.stdout}${outcome.stderr}`);
+    if (outcome.status !== 0)
+      throw new Error(`${command} refused ${name}: ${outcome.stdout}${outcome.stderr}`);
     return outcome.stdout;
   } finally {
     rmSync(folder, { recursive: true, force: true });

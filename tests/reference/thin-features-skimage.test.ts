@@ -45,9 +45,12 @@ referenceCheck(
     needsTool('python3-skimage');
     for (const polygons of PICTURES) {
       const mask = asBytes(coverageOf(SIZE, SIZE, polygons)).map((v) => (v > 127 ? 1 : 0));
-      const program = 'from scipy.ndimage import distance_transform_edt as d\nprint(json.dumps((d(a) ** 2).ravel().tolist()))';
+      const program =
+        'from scipy.ndimage import distance_transform_edt as d\nprint(json.dumps((d(a) ** 2).ravel().tolist()))';
       const theirs = ask(program, mask) as number[];
-      squaredDistance(mask, SIZE, SIZE).forEach((value, i) => expect(Math.abs(value - theirs[i])).toBeLessThan(1e-6));
+      squaredDistance(mask, SIZE, SIZE).forEach((value, i) =>
+        expect(Math.abs(value - theirs[i])).toBeLessThan(1e-6),
+      );
     }
   },
 );
@@ -56,7 +59,8 @@ referenceCheck(
   {
     what: 'stroke widths of three drawn pictures against twice the distance to a sub-pixel contour',
     basis: 'computed',
-    source: 'skimage.measure.find_contours at 127.5 and brute-force distances from our points, Debian 12, run by the test',
+    source:
+      'skimage.measure.find_contours at 127.5 and brute-force distances from our points, Debian 12, run by the test',
     within: 'mean 0.2 px, any 0.4 px: the contour there is by straight interpolation alone',
   },
   () => {
@@ -65,7 +69,13 @@ referenceCheck(
       const data = asBytes(coverageOf(SIZE, SIZE, polygons));
       const field = { width: SIZE, height: SIZE, data };
       const division = divide(field, 127.5);
-      const points = medialAxis(division, cappedDistance(division, 8), contourOf(field, division, 127.5), 1, 10);
+      const points = medialAxis(
+        division,
+        cappedDistance(division, 8),
+        contourOf(field, division, 127.5),
+        1,
+        10,
+      );
       expect(points.count).toBeGreaterThan(10);
       const list = JSON.stringify([...points.x].map((x, n) => [points.y[n] - 0.5, x - 0.5]));
       const program =
@@ -78,7 +88,8 @@ referenceCheck(
         // Below 2 px, at the very tips, neither can tell.
         if (points.width[n] >= 2) expect(Math.abs(width - points.width[n])).toBeLessThan(0.4);
       });
-      const mean = theirs.reduce((sum, width, n) => sum + Math.abs(width - points.width[n]), 0) / theirs.length;
+      const mean =
+        theirs.reduce((sum, width, n) => sum + Math.abs(width - points.width[n]), 0) / theirs.length;
       expect(mean).toBeLessThan(0.2);
     }
   },

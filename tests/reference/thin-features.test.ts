@@ -21,7 +21,10 @@ const OFFSETS = [
   [0.75, 0.75],
 ] as const;
 
-const fieldOf = (size: number, polygons: readonly Polygon[]): { width: number; height: number; data: Uint8Array } => ({
+const fieldOf = (
+  size: number,
+  polygons: readonly Polygon[],
+): { width: number; height: number; data: Uint8Array } => ({
   width: size,
   height: size,
   data: asBytes(coverageOf(size, size, polygons)),
@@ -53,11 +56,15 @@ referenceCheck(
   {
     what: 'distance transform of a 12 × 12 picture',
     basis: 'computed',
-    source: 'scipy 1.10.1 distance_transform_edt; Felzenszwalb & Huttenlocher, Theory of Computing 8, 2012, give the same integers',
+    source:
+      'scipy 1.10.1 distance_transform_edt; Felzenszwalb & Huttenlocher, Theory of Computing 8, 2012, give the same integers',
   },
   () => {
     const text = readFileSync(path.join(import.meta.dirname, 'data', 'edt_golden.json'), 'utf8');
-    const golden = JSON.parse(text) as { pattern: number[][]; squared_distance_to_nearest_zero_pixel: number[][] };
+    const golden = JSON.parse(text) as {
+      pattern: number[][];
+      squared_distance_to_nearest_zero_pixel: number[][];
+    };
     const mask = Uint8Array.from(golden.pattern.flat());
     const expected = golden.squared_distance_to_nearest_zero_pixel.flat();
     expect([...squaredDistance(mask, 12, 12)]).toEqual(expected);
@@ -71,8 +78,10 @@ referenceCheck(
   {
     what: 'widths of bars at 24 angles and 4 sub-pixel offsets stay within the errors of the contour method',
     basis: 'computed',
-    source: 'bar_width_estimators.csv, column contour_subpixel: scikit-image 0.19.3 and scipy 1.10.1 on 16 × 16 box-filtered bars',
-    within: 'from 2 px up the table’s own lowest and highest error, or 0.05 px; its mean error and 0.025 px more',
+    source:
+      'bar_width_estimators.csv, column contour_subpixel: scikit-image 0.19.3 and scipy 1.10.1 on 16 × 16 box-filtered bars',
+    within:
+      'from 2 px up the table’s own lowest and highest error, or 0.05 px; its mean error and 0.025 px more',
   },
   () => {
     const rows = readTable('bar_width_estimators.csv').filter(
@@ -84,7 +93,9 @@ referenceCheck(
       const mean = errors.reduce((a, b) => a + b, 0) / errors.length;
       expect(Math.abs(mean)).toBeLessThanOrEqual(Math.abs(Number(row.mean_error_px)) + 0.025);
       expect(errors.reduce((a, b) => Math.min(a, b))).toBeGreaterThanOrEqual(Number(row.min_error_px));
-      expect(errors.reduce((a, b) => Math.max(a, b))).toBeLessThanOrEqual(Math.max(0.05, Number(row.max_error_px)));
+      expect(errors.reduce((a, b) => Math.max(a, b))).toBeLessThanOrEqual(
+        Math.max(0.05, Number(row.max_error_px)),
+      );
     }
   },
 );
@@ -119,7 +130,8 @@ referenceCheck(
   {
     what: 'bars at 0.95 and 1.05 of the line extent in their own direction: all found, none found, nothing else',
     basis: 'computed',
-    source: 'bars drawn by exact area in the test at 24 angles and 4 offsets; ellipses and rectangles of 1:1, 7:11 and 2:1',
+    source:
+      'bars drawn by exact area in the test at 24 angles and 4 offsets; ellipses and rectangles of 1:1, 7:11 and 2:1',
     within: '96 of 96 and 0 of 96',
   },
   () => {
@@ -161,7 +173,8 @@ referenceCheck(
   },
   () => {
     const rows = readTable('siemens_wedge.csv').filter(
-      ({ spot, black_sectors_n }) => Number(spot) === 6 && Number(black_sectors_n) >= 12 && Number(black_sectors_n) <= 36,
+      ({ spot, black_sectors_n }) =>
+        Number(spot) === 6 && Number(black_sectors_n) >= 12 && Number(black_sectors_n) <= 36,
     );
     expect(rows).toHaveLength(5);
     for (const row of rows) {
@@ -170,12 +183,23 @@ referenceCheck(
       const n = Number(row.black_sectors_n);
       const star = wheel(size / 2, size / 2, n, size / 2 - 6, 3);
       const { ink, gaps } = inspect(size, star, { widthMm: 0.1, heightMm: 0.1, shape: 'ellipse' }, 60);
-      for (const [half, { thin }] of [[0.5, ink], [1.5, gaps]] as const) {
+      for (const [half, { thin }] of [
+        [0.5, ink],
+        [1.5, gaps],
+      ] as const) {
         // How far the middle lines of the sectors reach along X or Y at that radius.
-        const axes = Array.from({ length: n }, (_, k) => ((2 * k + half) * Math.PI) / n + (3 * Math.PI) / 180);
+        const axes = Array.from(
+          { length: n },
+          (_, k) => ((2 * k + half) * Math.PI) / n + (3 * Math.PI) / 180,
+        );
         const along = Math.max(...axes.flatMap((a) => [Math.abs(Math.cos(a)), Math.abs(Math.sin(a))]));
         const reach = Math.max(
-          ...thin.flatMap(({ left, top, right, bottom }) => [size / 2 - left, size / 2 - top, right - size / 2, bottom - size / 2]),
+          ...thin.flatMap(({ left, top, right, bottom }) => [
+            size / 2 - left,
+            size / 2 - top,
+            right - size / 2,
+            bottom - size / 2,
+          ]),
         );
         expect(Math.abs(reach - radius * along)).toBeLessThan(Math.max(1.2, 0.04 * radius));
       }

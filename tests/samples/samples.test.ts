@@ -35,7 +35,8 @@ test('every sample is made, listed in the README and expected to show something'
   expect(rest.sort()).toEqual(MADE);
   expect(Object.keys(expected).sort()).toEqual(MADE);
   const readme = readFileSync(path.join(FOLDER, 'README.md'), 'utf8');
-  for (const name of MADE) expect(readme, name).toMatch(new RegExp(`^\\|[^|]*\\b${name.replaceAll('.', '\\.')}\\b`, 'm'));
+  for (const name of MADE)
+    expect(readme, name).toMatch(new RegExp(`^\\|[^|]*\\b${name.replaceAll('.', '\\.')}\\b`, 'm'));
 });
 
 test.each(Object.keys(DRAWINGS))('%s is what its script draws', (name) => {
@@ -49,22 +50,38 @@ beforeAll(() => {
 afterAll(() => rmSync(scratch, { recursive: true, force: true }));
 
 describe('what is found in each, and what comes out', () => {
-  test.each(Object.entries(expected))('%s', async (name, { args, status, findings, treatment = 'solid', size, soundWidthMm }) => {
-    const out = path.join(scratch, name);
-    // A coarse pitch makes small files; widths are held against the spot all the same.
-    const line = ['--spot', '0.07x0.11', '--pitch-mm', '0.25', '--formats', 'png', '--treatment', treatment, '--json', ...args];
-    const outcome = await runLine('prepare', path.join(FOLDER, name), '--out', out, ...line);
-    expect(outcome.status, outcome.stderr).toBe(status);
-    if (status === 3) return;
-    const report = reportSchema.parse(JSON.parse(outcome.stdout));
-    expect(Object.fromEntries(report.findings.map(({ id, severity }) => [id, severity]))).toEqual(findings);
-    expect(report.artwork.suggestedTreatment).toBe(treatment);
-    const written = treatment === 'linework' ? ['.json', '.json', '.pdf', '.svg'] : ['.json', '.json', '.png'];
-    expect(readdirSync(out).map(path.extname).sort()).toEqual(written);
-    if (size) {
-      expect(report.widthMm).toBeCloseTo(size[0], 2);
-      expect(report.heightMm).toBeCloseTo(size[1], 2);
-    }
-    if (soundWidthMm) expect(Math.abs((report.smallestSoundWidthMm ?? 0) / soundWidthMm - 1)).toBeLessThan(0.02);
-  });
+  test.each(Object.entries(expected))(
+    '%s',
+    async (name, { args, status, findings, treatment = 'solid', size, soundWidthMm }) => {
+      const out = path.join(scratch, name);
+      // A coarse pitch makes small files; widths are held against the spot all the same.
+      const line = [
+        '--spot',
+        '0.07x0.11',
+        '--pitch-mm',
+        '0.25',
+        '--formats',
+        'png',
+        '--treatment',
+        treatment,
+        '--json',
+        ...args,
+      ];
+      const outcome = await runLine('prepare', path.join(FOLDER, name), '--out', out, ...line);
+      expect(outcome.status, outcome.stderr).toBe(status);
+      if (status === 3) return;
+      const report = reportSchema.parse(JSON.parse(outcome.stdout));
+      expect(Object.fromEntries(report.findings.map(({ id, severity }) => [id, severity]))).toEqual(findings);
+      expect(report.artwork.suggestedTreatment).toBe(treatment);
+      const written =
+        treatment === 'linework' ? ['.json', '.json', '.pdf', '.svg'] : ['.json', '.json', '.png'];
+      expect(readdirSync(out).map(path.extname).sort()).toEqual(written);
+      if (size) {
+        expect(report.widthMm).toBeCloseTo(size[0], 2);
+        expect(report.heightMm).toBeCloseTo(size[1], 2);
+      }
+      if (soundWidthMm)
+        expect(Math.abs((report.smallestSoundWidthMm ?? 0) / soundWidthMm - 1)).toBeLessThan(0.02);
+    },
+  );
 });

@@ -7,7 +7,9 @@ const ROOT = path.resolve(import.meta.dirname, '../..');
 const read = (name: string): string => readFileSync(path.join(ROOT, name), 'utf8');
 
 /** Package names of the table's first column. */
-const explained = [...read('DEVELOPERS.md').matchAll(/^\| ([a-z@][^|]*?) \|/gm)].flatMap(([, cell]) => cell.split(', '));
+const explained = [...read('DEVELOPERS.md').matchAll(/^\| ([a-z@][^|]*?) \|/gm)].flatMap(([, cell]) =>
+  cell.split(', '),
+);
 
 test.each(Object.keys(dependencies))('DEVELOPERS.md says why %s is here', (name) => {
   expect(explained).toContain(name);
@@ -24,6 +26,7 @@ test('the README opens with the job in one paragraph, then a picture, then the t
 
 test('every path that the README and DEVELOPERS.md name is there', () => {
   for (const document of ['README.md', 'DEVELOPERS.md']) {
-    for (const [, target] of read(document).matchAll(/\]\(([^)#:]+)\)/g)) expect(() => readFileSync(path.join(ROOT, target))).not.toThrow();
+    for (const [, target] of read(document).matchAll(/\]\(([^)#:]+)\)/g))
+      expect(() => readFileSync(path.join(ROOT, target))).not.toThrow();
   }
 });

@@ -21,7 +21,11 @@ export const REFERENCE_TOOLS = {
   pdfinfo: { debianPackage: 'poppler-utils', command: 'pdfinfo', probe: ['-v'] },
   qpdf: { debianPackage: 'qpdf', command: 'qpdf', probe: ['--version'] },
   'rsvg-convert': { debianPackage: 'librsvg2-bin', command: 'rsvg-convert', probe: ['--version'] },
-  'python3-skimage': { debianPackage: 'python3-skimage', command: DEBIAN_PYTHON, probe: ['-c', 'import skimage'] },
+  'python3-skimage': {
+    debianPackage: 'python3-skimage',
+    command: DEBIAN_PYTHON,
+    probe: ['-c', 'import skimage'],
+  },
   'python3-pil': { debianPackage: 'python3-pil', command: DEBIAN_PYTHON, probe: ['-c', 'import PIL.Image'] },
   convert: { debianPackage: 'imagemagick', command: 'convert', probe: ['-version'] },
   vips: { debianPackage: 'libvips-tools', command: 'vips', probe: ['--version'] },
@@ -58,7 +62,8 @@ export function needsTool(...names: ReferenceToolName[]): void {
   for (const name of names) {
     if (hasTool(name)) continue;
     const { debianPackage } = REFERENCE_TOOLS[name];
-    if (process.env.CI) throw new Error(`reference tool ${name} is absent: install Debian's ${debianPackage}`);
+    if (process.env.CI)
+      throw new Error(`reference tool ${name} is absent: install Debian's ${debianPackage}`);
     countAbsent(name);
     test.context.skip(`needs ${name} (Debian's ${debianPackage})`);
   }

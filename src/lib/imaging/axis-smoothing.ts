@@ -69,7 +69,12 @@ const BESIDE_SHARE = 0.35;
  * @throws RangeError when reachPx is under 1
  * @example along a bar at 30° with ends far off: along π/6 ± 0.01, slope 0 ± 0.01
  */
-export function smoothAxis(points: AxisPoints, grid: Int32Array, columns: number, reachPx: number): SmoothedAxis {
+export function smoothAxis(
+  points: AxisPoints,
+  grid: Int32Array,
+  columns: number,
+  reachPx: number,
+): SmoothedAxis {
   if (!(reachPx >= 1)) throw new RangeError(`expected reachPx from 1, got ${reachPx}`);
   const { count } = points;
   const out: SmoothedAxis = {
@@ -96,7 +101,14 @@ export function smoothAxis(points: AxisPoints, grid: Int32Array, columns: number
   return out;
 }
 
-function sumAround(points: AxisPoints, grid: Int32Array, columns: number, reach: number, n: number, sums: Sums): void {
+function sumAround(
+  points: AxisPoints,
+  grid: Int32Array,
+  columns: number,
+  reach: number,
+  n: number,
+  sums: Sums,
+): void {
   sums.clear();
   const px = points.pixel[n] % columns;
   const py = (points.pixel[n] / columns) | 0;

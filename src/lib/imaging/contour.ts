@@ -96,7 +96,8 @@ function placeOn(field: Field, i: number, step: number, turn: number, level: num
   const { data, width } = field;
   const a = data[i];
   const b = data[i + step];
-  const beyond = i - step >= 0 && i + 2 * step < data.length && i - turn >= 0 && i + step + turn < data.length;
+  const beyond =
+    i - step >= 0 && i + 2 * step < data.length && i - turn >= 0 && i + step + turn < data.length;
   if (!beyond || !clearOfSides(i, step, width)) return (level - a) / (b - a);
   const sideways = data[i - turn] + data[i + step - turn] - data[i + turn] - data[i + step + turn];
   // Along an edge the samples change slowly and in a straight line: only across it does the sum serve better.
@@ -152,7 +153,8 @@ export function contourOf(field: Field, division: Division, level: number): Cont
       const end = Math.min(width - 1, (block + 1) * BLOCK_PX);
       for (let x = block * BLOCK_PX; x < end; x++) {
         const i = y * width + x;
-        const kind = inside[i] | (inside[i + 1] << 1) | (inside[i + width + 1] << 2) | (inside[i + width] << 3);
+        const kind =
+          inside[i] | (inside[i + 1] << 1) | (inside[i + width + 1] << 2) | (inside[i + width] << 3);
         if (kind === 0 || kind === 15) continue;
         addCell(pieces, kind, field, i, level);
       }

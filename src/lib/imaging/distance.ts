@@ -43,7 +43,11 @@ export function squaredDistance(mask: Uint8Array, width: number, height: number)
   }
   const grid = Float64Array.from(mask, (value) => (value ? FAR : 0));
   const longest = Math.max(width, height);
-  const [line, out, z] = [new Float64Array(longest), new Float64Array(longest), new Float64Array(longest + 1)];
+  const [line, out, z] = [
+    new Float64Array(longest),
+    new Float64Array(longest),
+    new Float64Array(longest + 1),
+  ];
   const v = new Int32Array(longest);
   for (let x = 0; x < width; x++) {
     for (let y = 0; y < height; y++) line[y] = grid[y * width + x];
@@ -91,7 +95,16 @@ export function cappedDistance(division: Division, capPx: number): Uint8Array {
     for (let block = 0; block < columns; block++) {
       if (!near[blockRow + block]) continue;
       const left = y * width + block * BLOCK_PX;
-      nearestInRow(inside, along, squared, left, Math.min(width - block * BLOCK_PX, BLOCK_PX), y * width, width, capPx);
+      nearestInRow(
+        inside,
+        along,
+        squared,
+        left,
+        Math.min(width - block * BLOCK_PX, BLOCK_PX),
+        y * width,
+        width,
+        capPx,
+      );
     }
   }
   return squared;

@@ -15,7 +15,8 @@ export function assertField(field: Field): void {
   if (!Number.isInteger(width) || !Number.isInteger(height) || width < 1 || height < 1) {
     throw new RangeError(`expected whole sides from 1, got ${width} x ${height}`);
   }
-  if (data.length !== width * height) throw new RangeError(`expected ${width * height} samples, got ${data.length}`);
+  if (data.length !== width * height)
+    throw new RangeError(`expected ${width * height} samples, got ${data.length}`);
 }
 
 /** Side of the square blocks in which a two-level picture is looked over, px. */
@@ -79,7 +80,8 @@ export function blocksNearEdges({ edgeBlocks, columns, rows }: Division): Uint8A
     for (let column = 0; column < columns; column++) {
       if (!edgeBlocks[row * columns + column]) continue;
       for (let y = Math.max(0, row - 1); y <= Math.min(rows - 1, row + 1); y++) {
-        for (let x = Math.max(0, column - 1); x <= Math.min(columns - 1, column + 1); x++) near[y * columns + x] = 1;
+        for (let x = Math.max(0, column - 1); x <= Math.min(columns - 1, column + 1); x++)
+          near[y * columns + x] = 1;
       }
     }
   }

@@ -58,7 +58,15 @@ function isPeak(data: Uint8Array, i: number, step: number, v: number, most: numb
 }
 
 /** Adds x, y, width and angle across of the line through a pixel, from the moments of the samples around it. */
-function weigh(data: Uint8Array, i: number, width: number, x: number, y: number, flip: number, out: number[]): boolean {
+function weigh(
+  data: Uint8Array,
+  i: number,
+  width: number,
+  x: number,
+  y: number,
+  flip: number,
+  out: number[],
+): boolean {
   let [m, mx, my, mxx, mxy, myy] = [0, 0, 0, 0, 0, 0];
   for (let dy = -REACH_PX; dy <= REACH_PX; dy++) {
     for (let dx = -REACH_PX; dx <= REACH_PX; dx++) {
@@ -106,9 +114,13 @@ export function withFineLines(points: AxisPoints, fine: AxisPoints, columns: num
     return false;
   };
   const kept = Array.from({ length: points.count }, (_, n) => n).filter((n) => !shadowed(n));
-  const order = [...kept.map((n) => [points, n] as const), ...Array.from({ length: fine.count }, (_, n) => [fine, n] as const)];
+  const order = [
+    ...kept.map((n) => [points, n] as const),
+    ...Array.from({ length: fine.count }, (_, n) => [fine, n] as const),
+  ];
   order.sort(([a, n], [b, m]) => a.pixel[n] - b.pixel[m]);
-  const pick = (key: 'x' | 'y' | 'width' | 'across'): Float32Array => Float32Array.from(order, ([from, n]) => from[key][n]);
+  const pick = (key: 'x' | 'y' | 'width' | 'across'): Float32Array =>
+    Float32Array.from(order, ([from, n]) => from[key][n]);
   return {
     count: order.length,
     pixel: Int32Array.from(order, ([from, n]) => from.pixel[n]),

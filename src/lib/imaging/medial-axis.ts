@@ -41,7 +41,10 @@ class Sides {
   uy = 0;
   acrossRad = 0;
 
-  constructor(private readonly contour: Contour, private readonly height: number) {}
+  constructor(
+    private readonly contour: Contour,
+    private readonly height: number,
+  ) {}
 
   gather(x: number, y: number, reach: number): void {
     const { contour } = this;
@@ -49,7 +52,11 @@ class Sides {
     const last = Math.min(this.height - 2, y + reach);
     for (let row = Math.max(0, y - reach - 1); row <= last; row++) {
       const end = contour.rowStart[row + 1];
-      for (let n = firstPieceFrom(contour, row, x - reach - 1); n < end && contour.column[n] <= x + reach; n++) {
+      for (
+        let n = firstPieceFrom(contour, row, x - reach - 1);
+        n < end && contour.column[n] <= x + reach;
+        n++
+      ) {
         if (this.count < MAX_NEAR) this.near[this.count++] = n;
       }
     }
@@ -157,7 +164,15 @@ export function medialAxis(
 }
 
 /** Moves from a pixel's centre to the middle between the two sides and keeps the point if there is one. */
-function settle(sides: Sides, x: number, y: number, distance: number, pixel: number, maxWidthPx: number, found: Found): void {
+function settle(
+  sides: Sides,
+  x: number,
+  y: number,
+  distance: number,
+  pixel: number,
+  maxWidthPx: number,
+  found: Found,
+): void {
   sides.gather(x, y, Math.ceil(distance + 2 * REACH_PX + 0.5));
   let cx = x + 0.5;
   let cy = y + 0.5;
@@ -202,6 +217,13 @@ class Found {
     const { count, numbers } = this;
     const pick = (offset: number): Float32Array =>
       Float32Array.from({ length: count }, (_, n) => numbers[n * 4 + offset]);
-    return { count, pixel: this.pixel.slice(0, count), x: pick(0), y: pick(1), width: pick(2), across: pick(3) };
+    return {
+      count,
+      pixel: this.pixel.slice(0, count),
+      x: pick(0),
+      y: pick(1),
+      width: pick(2),
+      across: pick(3),
+    };
   }
 }

@@ -45,7 +45,8 @@ export function opticalPower({ wattsAtFull, powerCurve }: Power, settingPercent:
   if (powerCurve.length < 2) return { watts: (wattsAtFull * settingPercent) / 100, assumesLinear: true };
   const points = [...powerCurve].sort((a, b) => a.settingPercent - b.settingPercent);
   const above = points.findIndex((point) => point.settingPercent >= settingPercent);
-  if (above <= 0) return { watts: (above === 0 ? points[0] : points[points.length - 1]).watts, assumesLinear: false };
+  if (above <= 0)
+    return { watts: (above === 0 ? points[0] : points[points.length - 1]).watts, assumesLinear: false };
   const [low, high] = [points[above - 1], points[above]];
   const share = (settingPercent - low.settingPercent) / (high.settingPercent - low.settingPercent);
   return { watts: low.watts + share * (high.watts - low.watts), assumesLinear: false };

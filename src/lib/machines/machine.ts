@@ -9,7 +9,10 @@ export const spotPresetSchema = spotSchema.extend({
 });
 export type SpotPreset = z.infer<typeof spotPresetSchema>;
 
-export const powerPointSchema = z.object({ settingPercent: z.number().min(0).max(100), watts: z.number().min(0) });
+export const powerPointSchema = z.object({
+  settingPercent: z.number().min(0).max(100),
+  watts: z.number().min(0),
+});
 
 export const machineSchema = z.object({
   name: z.string().trim().min(1).max(60),

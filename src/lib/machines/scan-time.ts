@@ -1,6 +1,7 @@
 function assertAbove0(values: Readonly<Record<string, number>>): void {
   for (const [name, value] of Object.entries(values)) {
-    if (!(value > 0) || !Number.isFinite(value)) throw new RangeError(`expected ${name} above 0, got ${value}`);
+    if (!(value > 0) || !Number.isFinite(value))
+      throw new RangeError(`expected ${name} above 0, got ${value}`);
   }
 }
 

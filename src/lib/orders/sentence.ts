@@ -59,7 +59,8 @@ export function spotWords(spot: Pick<Spot, 'widthMm' | 'heightMm'>): string {
 }
 
 /** An angle without needless decimals and with a true minus: −45°. */
-export const angleWords = (deg: number): string => `${deg < 0 ? '−' : ''}${Number(Math.abs(deg).toFixed(2))}°`;
+export const angleWords = (deg: number): string =>
+  `${deg < 0 ? '−' : ''}${Number(Math.abs(deg).toFixed(2))}°`;
 
 export function speedWords(speedMmPerS: number, unit: SentenceContext['speedUnit']): string {
   const value = unit === 'mm/min' ? speedMmPerS * 60 : speedMmPerS;
@@ -101,10 +102,19 @@ const word = (choice: ChoiceId, text: string): SentencePart => ({ text, choice }
 
 function treatmentParts(design: Design): SentencePart[] {
   const treatment = word('treatment', TREATMENT_WORDS[design.treatment]);
-  const divided = [plain(', parted at '), word('dividing-level', `L* ${Number(design.dividingLstar.toFixed(1))}`)];
+  const divided = [
+    plain(', parted at '),
+    word('dividing-level', `L* ${Number(design.dividingLstar.toFixed(1))}`),
+  ];
   switch (design.treatment) {
     case 'linework':
-      return [plain('Follow as '), treatment, ...divided, plain(', corners '), word('corners', design.corners)];
+      return [
+        plain('Follow as '),
+        treatment,
+        ...divided,
+        plain(', corners '),
+        word('corners', design.corners),
+      ];
     case 'solid':
       return [plain('Fill as '), treatment, ...divided];
     case 'halftone':

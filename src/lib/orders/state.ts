@@ -56,7 +56,13 @@ interface Transition {
 const STAFF: readonly Role[] = ['designer', 'operator', 'admin'];
 const DESIGN: readonly Role[] = ['designer', 'admin'];
 const RUN: readonly Role[] = ['operator', 'admin'];
-const UNTIL_APPROVAL: readonly OrderState[] = ['draft', 'submitted', 'in-preparation', 'passed', 'proof-sent'];
+const UNTIL_APPROVAL: readonly OrderState[] = [
+  'draft',
+  'submitted',
+  'in-preparation',
+  'passed',
+  'proof-sent',
+];
 const BEFORE_RUNNING: readonly OrderState[] = [...UNTIL_APPROVAL, 'approved', 'released'];
 
 /** The whole life of an order. What is not here cannot happen. */
@@ -68,10 +74,20 @@ export const TRANSITIONS: readonly Transition[] = [
   { event: 'approve', from: ['proof-sent'], to: 'approved', roles: ['customer', ...STAFF] },
   { event: 'approve-without-proof', from: ['passed'], to: 'approved', roles: DESIGN },
   { event: 'ask-for-changes', from: ['proof-sent'], to: 'in-preparation', roles: ['customer', ...STAFF] },
-  { event: 'prepare-again', from: ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'], to: 'in-preparation', roles: DESIGN },
+  {
+    event: 'prepare-again',
+    from: ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'],
+    to: 'in-preparation',
+    roles: DESIGN,
+  },
   { event: 'new-artwork', from: ['draft'], to: 'draft', roles: ['customer', ...STAFF] },
   { event: 'new-artwork', from: ['submitted'], to: 'submitted', roles: ['customer', ...DESIGN] },
-  { event: 'new-artwork', from: ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'], to: 'in-preparation', roles: ['customer', ...DESIGN] },
+  {
+    event: 'new-artwork',
+    from: ['in-preparation', 'passed', 'proof-sent', 'approved', 'released'],
+    to: 'in-preparation',
+    roles: ['customer', ...DESIGN],
+  },
   { event: 'release', from: ['approved'], to: 'released', roles: DESIGN },
   { event: 'recall', from: ['released'], to: 'approved', roles: DESIGN },
   { event: 'on-the-machine', from: ['released'], to: 'running', roles: RUN },

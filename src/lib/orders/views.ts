@@ -73,7 +73,9 @@ export const designSchema = z.object({
     .object({
       powerPercent: z.number().min(1).max(100),
       speedMmPerS: z.number().min(0.1).max(20_000),
-      perpendicular: z.object({ powerPercent: z.number().min(1).max(100), speedMmPerS: z.number().min(0.1).max(20_000) }).nullable(),
+      perpendicular: z
+        .object({ powerPercent: z.number().min(1).max(100), speedMmPerS: z.number().min(0.1).max(20_000) })
+        .nullable(),
       focusOffsetMm: z.number().min(-20).max(50),
     })
     .nullable(),
@@ -140,12 +142,21 @@ export const orderViewSchema = z.object({
   /** newest first */
   preparations: z.array(preparationViewSchema),
   passed: z.object({ by: z.string(), at: timeSchema, manifestSha256: z.string() }).nullable(),
-  approved: z.object({ by: z.string(), at: timeSchema, manifestSha256: z.string(), how: z.string() }).nullable(),
+  approved: z
+    .object({ by: z.string(), at: timeSchema, manifestSha256: z.string(), how: z.string() })
+    .nullable(),
   waivers: z.array(waiverViewSchema),
   /** why it is on hold, or empty */
   heldBecause: z.string(),
   outcomes: z.array(
-    z.object({ at: timeSchema, by: z.string(), kind: z.enum(['done', 'spoiled']), words: z.string(), measuredLstar: z.number().nullable(), cost: z.string() }),
+    z.object({
+      at: timeSchema,
+      by: z.string(),
+      kind: z.enum(['done', 'spoiled']),
+      words: z.string(),
+      measuredLstar: z.number().nullable(),
+      cost: z.string(),
+    }),
   ),
   history: z.array(historyEntrySchema),
   /** events that the person asking may cause now */
@@ -183,7 +194,12 @@ export const orderQuerySchema = z.object({
   page: z.coerce.number().int().min(1).default(1),
   perPage: z.coerce.number().int().min(1).max(100).default(25),
 });
-export const orderListSchema = z.object({ rows: z.array(orderRowSchema), total: z.number().int(), page: z.number().int(), perPage: z.number().int() });
+export const orderListSchema = z.object({
+  rows: z.array(orderRowSchema),
+  total: z.number().int(),
+  page: z.number().int(),
+  perPage: z.number().int(),
+});
 export type OrderList = z.infer<typeof orderListSchema>;
 
 /** Body of POST /api/orders/:number/events: one event with what it needs; `version` guards against two tabs. */
@@ -191,19 +207,42 @@ export const eventBodySchema = z.discriminatedUnion('event', [
   z.object({ event: z.literal('submit'), version: z.number().int(), rightsConfirmed: z.literal(true) }),
   z.object({ event: z.literal('take'), version: z.number().int() }),
   z.object({ event: z.literal('pass'), version: z.number().int(), preparationId: z.number().int() }),
-  z.object({ event: z.literal('send-proof'), version: z.number().int(), words: z.string().trim().max(1000).default('') }),
+  z.object({
+    event: z.literal('send-proof'),
+    version: z.number().int(),
+    words: z.string().trim().max(1000).default(''),
+  }),
   z.object({
     event: z.literal('approve'),
     version: z.number().int(),
     manifestSha256: z.string(),
     /** staff recording an approval given in person: who gave it and how */
-    inPerson: z.object({ who: z.string().trim().min(1).max(120), how: z.string().trim().min(1).max(200) }).nullable().default(null),
+    inPerson: z
+      .object({ who: z.string().trim().min(1).max(120), how: z.string().trim().min(1).max(200) })
+      .nullable()
+      .default(null),
   }),
-  z.object({ event: z.literal('approve-without-proof'), version: z.number().int(), reason: z.string().trim().min(3).max(1000) }),
-  z.object({ event: z.literal('ask-for-changes'), version: z.number().int(), words: z.string().trim().min(3).max(2000) }),
+  z.object({
+    event: z.literal('approve-without-proof'),
+    version: z.number().int(),
+    reason: z.string().trim().min(3).max(1000),
+  }),
+  z.object({
+    event: z.literal('ask-for-changes'),
+    version: z.number().int(),
+    words: z.string().trim().min(3).max(2000),
+  }),
   z.object({ event: z.literal('release'), version: z.number().int() }),
-  z.object({ event: z.literal('recall'), version: z.number().int(), reason: z.string().trim().min(3).max(1000) }),
-  z.object({ event: z.literal('on-the-machine'), version: z.number().int(), checklist: z.array(z.string()).min(1) }),
+  z.object({
+    event: z.literal('recall'),
+    version: z.number().int(),
+    reason: z.string().trim().min(3).max(1000),
+  }),
+  z.object({
+    event: z.literal('on-the-machine'),
+    version: z.number().int(),
+    checklist: z.array(z.string()).min(1),
+  }),
   z.object({
     event: z.literal('done'),
     version: z.number().int(),
@@ -217,10 +256,23 @@ export const eventBodySchema = z.discriminatedUnion('event', [
     newBlank: z.string().trim().min(1).max(200),
     cost: z.string().trim().max(60).default(''),
   }),
-  z.object({ event: z.literal('hand-over'), version: z.number().int(), how: z.enum(['collected', 'sent']), byWhom: z.string().trim().min(1).max(120) }),
-  z.object({ event: z.literal('hold'), version: z.number().int(), reason: z.string().trim().min(3).max(1000) }),
+  z.object({
+    event: z.literal('hand-over'),
+    version: z.number().int(),
+    how: z.enum(['collected', 'sent']),
+    byWhom: z.string().trim().min(1).max(120),
+  }),
+  z.object({
+    event: z.literal('hold'),
+    version: z.number().int(),
+    reason: z.string().trim().min(3).max(1000),
+  }),
   z.object({ event: z.literal('resume'), version: z.number().int() }),
-  z.object({ event: z.literal('cancel'), version: z.number().int(), reason: z.string().trim().min(3).max(1000) }),
+  z.object({
+    event: z.literal('cancel'),
+    version: z.number().int(),
+    reason: z.string().trim().min(3).max(1000),
+  }),
 ]);
 export type EventBody = z.infer<typeof eventBodySchema>;
 

@@ -44,14 +44,21 @@ describe('instructionSentence', () => {
       ...design,
       treatment: 'solid',
       perpendicular: { linePitchMm: 0.07, alongPitchMm: 0.07 },
-      recipe: { powerPercent: 30, speedMmPerS: 400, perpendicular: { powerPercent: 25, speedMmPerS: 450 }, focusOffsetMm: 1.5 },
+      recipe: {
+        powerPercent: 30,
+        speedMmPerS: 400,
+        perpendicular: { powerPercent: 25, speedMmPerS: 450 },
+        focusOffsetMm: 1.5,
+      },
     };
     expect(instructionSentence(two, { ...context, stockName: null })).toBe(
       'Fill as solid, parted at L* 53.4, lines 0.110 mm apart, scanning at 0°, two passes, the second perpendicular at 0.070 mm, not mirrored. Run on Heron with the 0.07 × 0.11 mm spot at 30 % power, 400 mm/s, then 25 %, 450 mm/s, 1.5 mm above focus.',
     );
   });
   it('follows linework without scan lines and says that no recipe was typed', () => {
-    expect(instructionSentence({ ...design, treatment: 'linework', recipe: null, mirror: true }, context)).toBe(
+    expect(
+      instructionSentence({ ...design, treatment: 'linework', recipe: null, mirror: true }, context),
+    ).toBe(
       'Follow as linework, parted at L* 53.4, corners kept, mirrored. Run on Heron with the 0.07 × 0.11 mm spot, on birch plywood 4 mm, at power and speed not yet typed.',
     );
   });
@@ -60,7 +67,14 @@ describe('instructionSentence', () => {
       instructionParts({ ...design, treatment }, context).flatMap((p) => (p.choice ? [p.choice] : []));
     expect(choices('halftone')).toContain('screen');
     expect(choices('continuous')).not.toContain('screen');
-    expect(choices('linework')).toEqual(['treatment', 'dividing-level', 'corners', 'mirror', 'machine', 'recipe']);
+    expect(choices('linework')).toEqual([
+      'treatment',
+      'dividing-level',
+      'corners',
+      'mirror',
+      'machine',
+      'recipe',
+    ]);
   });
 });
 
@@ -80,7 +94,10 @@ describe('words of figures', () => {
 describe('pitchConsequence', () => {
   const spot = { widthMm: 0.07, heightMm: 0.11, shape: 'ellipse' as const };
   it('says whether lines overlap, touch or part', () => {
-    expect(pitchConsequence(spot, 0, 0.09)).toMatchObject({ sizeAcrossMm: 0.11, words: 'lines overlap by 0.020 mm' });
+    expect(pitchConsequence(spot, 0, 0.09)).toMatchObject({
+      sizeAcrossMm: 0.11,
+      words: 'lines overlap by 0.020 mm',
+    });
     expect(pitchConsequence(spot, 0, 0.11).words).toBe('lines touch');
     expect(pitchConsequence(spot, 90, 0.09).words).toBe('lines part by 0.020 mm');
   });
@@ -100,7 +117,12 @@ describe('changedChoices and putBack', () => {
       alongPitchMm: fc.constantFrom(0.09, 0.11),
     }),
     perpendicular: fc.constantFrom(null, { linePitchMm: 0.07, alongPitchMm: 0.07 }),
-    tone: fc.record({ mode: fc.constantFrom('absolute' as const, 'scaled' as const), blackPoint: fc.constant(0), whitePoint: fc.constant(1), gamma: fc.constantFrom(1, 1.4) }),
+    tone: fc.record({
+      mode: fc.constantFrom('absolute' as const, 'scaled' as const),
+      blackPoint: fc.constant(0),
+      whitePoint: fc.constant(1),
+      gamma: fc.constantFrom(1, 1.4),
+    }),
     recipe: fc.constantFrom(null, design.recipe),
   });
   it('putting every changed choice back gives the choices as they were', () => {
@@ -114,7 +136,11 @@ describe('changedChoices and putBack', () => {
     );
   });
   it('putting one back leaves the others as they are', () => {
-    const after: Design = { ...design, mirror: true, scan: { directionDeg: 90, linePitchMm: 0.07, alongPitchMm: 0.07 } };
+    const after: Design = {
+      ...design,
+      mirror: true,
+      scan: { directionDeg: 90, linePitchMm: 0.07, alongPitchMm: 0.07 },
+    };
     expect(changedChoices(design, after, context)).toEqual(['line-pitch', 'direction', 'mirror']);
     const back = putBack('line-pitch', design, after);
     expect(back.scan).toEqual({ directionDeg: 90, linePitchMm: 0.11, alongPitchMm: 0.11 });

@@ -63,18 +63,7 @@ describe('type by the bytes', () => {
 
 describe('refusals', () => {
   const refused = [...new Set(KNOWN.map(([type]) => type))].filter((type) =>
-    [
-      'pdf',
-      'eps',
-      'ai',
-      'heic',
-      'camera-raw',
-      'psd',
-      'dxf',
-      'dwg',
-      'cdr',
-      'jpeg-xl',
-    ].includes(type),
+    ['pdf', 'eps', 'ai', 'heic', 'camera-raw', 'psd', 'dxf', 'dwg', 'cdr', 'jpeg-xl'].includes(type),
   );
   test.each(refused)('%s says what to send instead', (type) => {
     const error = refusal(type as 'pdf');

@@ -8,8 +8,14 @@ import { drawingOf, pictureOf } from '../../drawn/drawing';
 
 describe('onArtwork', () => {
   test.each([
-    [{ left: -2, top: -1, width: 5, height: 4 }, { left: 0, top: 0, right: 3, bottom: 3 }],
-    [{ left: 8, top: 8, width: 5, height: 5 }, { left: 8, top: 8, right: 10, bottom: 10 }],
+    [
+      { left: -2, top: -1, width: 5, height: 4 },
+      { left: 0, top: 0, right: 3, bottom: 3 },
+    ],
+    [
+      { left: 8, top: 8, width: 5, height: 5 },
+      { left: 8, top: 8, right: 10, bottom: 10 },
+    ],
     [{ left: 10, top: 0, width: 2, height: 2 }, null],
   ])('%o', (window, expected) => {
     expect(onArtwork({ artWidthPx: 10, artHeightPx: 10, ...window })).toEqual(expected);
@@ -22,7 +28,14 @@ describe('rasterCoverage', () => {
   test('its own pixels come back as they are, 0 outside', async () => {
     const source = rasterCoverage(pictureOf(4, 3, samples));
     expect([...(await source.read(wholeWindow(4, 3)))]).toEqual([...samples]);
-    const wider = await source.read({ artWidthPx: 4, artHeightPx: 3, left: -1, top: -1, width: 6, height: 5 });
+    const wider = await source.read({
+      artWidthPx: 4,
+      artHeightPx: 3,
+      left: -1,
+      top: -1,
+      width: 6,
+      height: 5,
+    });
     expect([...wider.subarray(0, 6)]).toEqual([0, 0, 0, 0, 0, 0]);
     expect(wider[6 + 1]).toBe(samples[0]);
     expect(wider[6 + 4]).toBe(samples[3]);

@@ -10,7 +10,11 @@ import { drawingOf, pictureOfPolygons } from '../../drawn/drawing';
 
 const spot: Spot = { widthMm: 0.1, heightMm: 0.1, shape: 'ellipse' };
 
-async function find(widthMm: number, heightMm: number, polygons: readonly Polygon[]): Promise<FoundPlaces & { drawnPx: number }> {
+async function find(
+  widthMm: number,
+  heightMm: number,
+  polygons: readonly Polygon[],
+): Promise<FoundPlaces & { drawnPx: number }> {
   const { artwork, tools, drawnPx } = drawingOf(widthMm, heightMm, polygons);
   const frame = { widthMm, heightMm, spot, level: 127.5, leaveOut: () => false, drawn: null };
   const found = await findPlaces(coverageOfArtwork(artwork, tools), frame);
@@ -20,14 +24,20 @@ async function find(widthMm: number, heightMm: number, polygons: readonly Polygo
 describe('closeScale', () => {
   const scale = (widthPx: number, widthMm: number, own: Spot = spot): number => {
     const artwork = pictureOfPolygons(widthPx, widthPx, []);
-    return closeScale(coverageOfArtwork(artwork, { renderSvg: () => Promise.reject(new Error('not drawn')) }), { widthMm, heightMm: widthMm, spot: own });
+    return closeScale(
+      coverageOfArtwork(artwork, { renderSvg: () => Promise.reject(new Error('not drawn')) }),
+      { widthMm, heightMm: widthMm, spot: own },
+    );
   };
 
   test('a drawing has six pixels to the smaller side of the spot', () => {
     const { artwork, tools } = drawingOf(10, 10, []);
     const source = coverageOfArtwork(artwork, tools);
     expect(closeScale(source, { widthMm: 10, heightMm: 10, spot })).toBeCloseTo(60, 6);
-    expect(closeScale(source, { widthMm: 10, heightMm: 10, spot: { ...spot, widthMm: 0.05 } })).toBeCloseTo(120, 6);
+    expect(closeScale(source, { widthMm: 10, heightMm: 10, spot: { ...spot, widthMm: 0.05 } })).toBeCloseTo(
+      120,
+      6,
+    );
   });
 
   test.each([
@@ -119,7 +129,11 @@ describe('mergeSeams', () => {
   });
 
   test('places whose ends meet are one, with the smallest width of both', () => {
-    const merged = mergeSeams([place(0, 99, [98, 1]), place(101, 200, [101, 1, 199, 1], 2), place(201, 250, [201, 1])]);
+    const merged = mergeSeams([
+      place(0, 99, [98, 1]),
+      place(101, 200, [101, 1, 199, 1], 2),
+      place(201, 250, [201, 1]),
+    ]);
     expect(merged).toHaveLength(1);
     expect(merged[0]).toMatchObject({ left: 0, right: 250, smallestPx: 2, worstRatio: 2 / 6, ends: [] });
   });

@@ -10,7 +10,11 @@ const ROUND: Spot = { widthMm: 0.1, heightMm: 0.1, shape: 'ellipse' };
 const PX_PER_MM = 60;
 const L = 6;
 
-function inspect(polygons: readonly Polygon[], spot = ROUND, own = { left: 0, top: 0, right: SIZE, bottom: SIZE }): Inspection {
+function inspect(
+  polygons: readonly Polygon[],
+  spot = ROUND,
+  own = { left: 0, top: 0, right: SIZE, bottom: SIZE },
+): Inspection {
   const data = asBytes(coverageOf(SIZE, SIZE, polygons));
   const window = { own, leaveOut: () => false, faintest: 20 };
   return inspectWindow({ width: SIZE, height: SIZE, data }, 127.5, lineExtents(spot, PX_PER_MM), window);
@@ -26,7 +30,11 @@ const NONE = [0, 0, 0, 0];
 /** A tip of an angle, pointing left, `length` long. */
 const tip = (deg: number, length = 150): Polygon => {
   const half = length * Math.tan((deg * Math.PI) / 360);
-  return [[20, 100], [20 + length, 100 - half], [20 + length, 100 + half]];
+  return [
+    [20, 100],
+    [20 + length, 100 - half],
+    [20 + length, 100 + half],
+  ];
 };
 const square = bar(100, 100, 180, 180, 0);
 
@@ -42,7 +50,10 @@ describe('what is sound is left alone', () => {
     ['a star of five tips', [star(100, 100, 5, 90, 34, 9)]],
     ['a star of eight tips', [star(100, 100, 8, 90, 55, 4)]],
     ['a notch of 60°', [square, hole(tip(60, 100))]],
-    ['a gap of 1.05 extents', [bar(100, 60, 150, 30, 12), bar(100, 60 + (30 + 1.05 * L) / Math.cos(0.2094395), 150, 30, 12)]],
+    [
+      'a gap of 1.05 extents',
+      [bar(100, 60, 150, 30, 12), bar(100, 60 + (30 + 1.05 * L) / Math.cos(0.2094395), 150, 30, 12)],
+    ],
     ['two corners that nearly touch', [bar(60, 60, 60, 60, 0), bar(122, 122, 60, 60, 0)]],
     ['squares that touch at their corners', [bar(60, 60, 60, 60, 0), bar(120, 120, 60, 60, 0)]],
   ])('%s', (_name, polygons) => {

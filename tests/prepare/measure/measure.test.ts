@@ -25,7 +25,13 @@ const settings: MeasureSettings = {
 };
 const noTools = { renderSvg: (): Promise<Uint8Array> => Promise.reject(new Error('not drawn')) };
 
-async function measured(widthMm: number, heightMm: number, polygons: readonly Polygon[], change: Partial<MeasureSettings> = {}, ink = 0): Promise<Facts> {
+async function measured(
+  widthMm: number,
+  heightMm: number,
+  polygons: readonly Polygon[],
+  change: Partial<MeasureSettings> = {},
+  ink = 0,
+): Promise<Facts> {
   const { artwork, tools } = drawingOf(widthMm, heightMm, polygons, ink);
   return measure(artwork, { ...settings, widthMm, heightMm, ...change }, tools);
 }
@@ -73,7 +79,9 @@ describe('a drawing', () => {
       disc(7, 7, 3),
       hole(disc(7, 7, 0.07)),
     ]);
-    expect([facts.hairlines.count, facts.fillIns.count, facts.specks.count, facts.pinholes.count]).toEqual([0, 1, 1, 1]);
+    expect([facts.hairlines.count, facts.fillIns.count, facts.specks.count, facts.pinholes.count]).toEqual([
+      0, 1, 1, 1,
+    ]);
     expect(facts.specks.places[0].minMm).toBeCloseTo(0.06, 2);
     expect(facts.fillIns.places[0].minMm).toBeCloseTo(0.07, 2);
   });
@@ -87,7 +95,11 @@ describe('a drawing', () => {
 
   test('fonts and parts left out are passed on', async () => {
     const { artwork, tools } = drawingOf(4, 4, [disc(2, 2, 2)]);
-    const facts = await measure({ ...artwork, missingFonts: ['Alder'], removed: ['a script'] }, { ...settings, widthMm: 4, heightMm: 4 }, tools);
+    const facts = await measure(
+      { ...artwork, missingFonts: ['Alder'], removed: ['a script'] },
+      { ...settings, widthMm: 4, heightMm: 4 },
+      tools,
+    );
     expect(facts.missingFonts).toEqual(['Alder']);
     expect(facts.removed).toEqual(['a script']);
   });
@@ -112,16 +124,26 @@ describe('a picture', () => {
   });
 
   test('of two levels without soft edges: a bar is as wide as its pixels', async () => {
-    const data = Uint8Array.from({ length: 600 * 600 }, (_, i) => (Math.floor(i / 600) >= 300 && Math.floor(i / 600) < 305 && i % 600 > 50 && i % 600 < 550 ? 255 : 0));
+    const data = Uint8Array.from({ length: 600 * 600 }, (_, i) =>
+      Math.floor(i / 600) >= 300 && Math.floor(i / 600) < 305 && i % 600 > 50 && i % 600 < 550 ? 255 : 0,
+    );
     const facts = await measure(pictureOf(600, 600, data), settings, noTools);
     expect(facts.hairlines.places[0].minMm).toBeCloseTo(5 / 60, 3);
   });
 
   test('nothing is thin in a photograph', async () => {
-    const data = Uint8Array.from({ length: 240 * 160 }, (_, i) => 128 + Math.round(100 * Math.sin(i / 9) * Math.cos(i / 2411)));
+    const data = Uint8Array.from(
+      { length: 240 * 160 },
+      (_, i) => 128 + Math.round(100 * Math.sin(i / 9) * Math.cos(i / 2411)),
+    );
     const facts = await measure(pictureOf(240, 160, data), { ...settings, heightMm: 6.667 }, noTools);
     expect(facts.tone.tonalShare).toBeGreaterThan(0.8);
-    expect([facts.hairlines.count, facts.fillIns.count, facts.specks.count, facts.source.unresolved.count]).toEqual([0, 0, 0, 0]);
+    expect([
+      facts.hairlines.count,
+      facts.fillIns.count,
+      facts.specks.count,
+      facts.source.unresolved.count,
+    ]).toEqual([0, 0, 0, 0]);
   });
 
   test.each([
@@ -131,7 +153,11 @@ describe('a picture', () => {
     [3, 5],
   ])('%s × %s px is measured without trouble', async (width, height) => {
     for (const value of [0, 128, 255]) {
-      const facts = await measure(pictureOf(width, height, new Uint8Array(width * height).fill(value)), settings, noTools);
+      const facts = await measure(
+        pictureOf(width, height, new Uint8Array(width * height).fill(value)),
+        settings,
+        noTools,
+      );
       expect(facts.tone.meanCoverage).toBeCloseTo(value / 255, 2);
     }
   });
@@ -151,7 +177,9 @@ test('a blank picture is empty and nothing else', async () => {
 });
 
 test('sides must be above 0', async () => {
-  await expect(measure(pictureOf(1, 1, Uint8Array.of(0)), { ...settings, widthMm: 0 }, noTools)).rejects.toThrow(RangeError);
+  await expect(
+    measure(pictureOf(1, 1, Uint8Array.of(0)), { ...settings, widthMm: 0 }, noTools),
+  ).rejects.toThrow(RangeError);
 });
 
 describe('placementFacts', () => {
@@ -169,18 +197,30 @@ describe('placementFacts', () => {
   };
 
   test('inside a blank, beyond it', () => {
-    const at = (change: Partial<typeof settings>): ReturnType<typeof placementFacts> => placementFacts({ ...settings, blank, ...change }, field, 127.5);
-    expect(at({ widthMm: 45, heightMm: 30 }).beyondBlank).toEqual({ leftMm: 0, rightMm: 0, topMm: 0, bottomMm: 0 });
+    const at = (change: Partial<typeof settings>): ReturnType<typeof placementFacts> =>
+      placementFacts({ ...settings, blank, ...change }, field, 127.5);
+    expect(at({ widthMm: 45, heightMm: 30 }).beyondBlank).toEqual({
+      leftMm: 0,
+      rightMm: 0,
+      topMm: 0,
+      bottomMm: 0,
+    });
     expect(at({ widthMm: 46, heightMm: 31.5 }).beyondBlank).toMatchObject({ rightMm: 1, bottomMm: 1.5 });
     expect(at({ blank: { ...blank, leftMm: -2 } }).beyondBlank?.leftMm).toBe(2);
   });
 
   test('a round blank: the corners of a burned square reach beyond it', () => {
     const round = { outline: 'round', widthMm: 20, heightMm: 20, leftMm: 2, topMm: 2 } as const;
-    const beyond = placementFacts({ ...settings, widthMm: 16, heightMm: 16, blank: round }, { width: 160, height: 160, data: new Uint8Array(25_600).fill(255) }, 127.5).beyondRoundMm;
+    const beyond = placementFacts(
+      { ...settings, widthMm: 16, heightMm: 16, blank: round },
+      { width: 160, height: 160, data: new Uint8Array(25_600).fill(255) },
+      127.5,
+    ).beyondRoundMm;
     expect(beyond).toBeCloseTo(Math.hypot(8, 8) - 10, 0);
     const bare = { ...field, data: new Uint8Array(100) };
-    expect(placementFacts({ ...settings, widthMm: 16, heightMm: 16, blank: round }, bare, 127.5).beyondRoundMm).toBe(0);
+    expect(
+      placementFacts({ ...settings, widthMm: 16, heightMm: 16, blank: round }, bare, 127.5).beyondRoundMm,
+    ).toBe(0);
   });
 
   test('the bed must hold width and twice the run-off v²/2a', () => {

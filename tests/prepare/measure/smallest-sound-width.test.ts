@@ -8,7 +8,11 @@ import { bar, disc, hole, type Polygon } from '../../drawn/coverage';
 import { drawingOf, pictureOf, pictureOfPolygons } from '../../drawn/drawing';
 
 const round: Spot = { widthMm: 0.1, heightMm: 0.1, shape: 'ellipse' };
-const settingsFor = (widthMm: number, heightMm: number, change: Partial<MeasureSettings> = {}): MeasureSettings => ({
+const settingsFor = (
+  widthMm: number,
+  heightMm: number,
+  change: Partial<MeasureSettings> = {},
+): MeasureSettings => ({
   widthMm,
   heightMm,
   quarterTurns: 0,
@@ -24,7 +28,12 @@ const settingsFor = (widthMm: number, heightMm: number, change: Partial<MeasureS
 
 const noTools = { renderSvg: (): Promise<Uint8Array> => Promise.reject(new Error('not drawn')) };
 
-async function widthOf(widthMm: number, heightMm: number, polygons: readonly Polygon[], change: Partial<MeasureSettings> = {}): Promise<number | null> {
+async function widthOf(
+  widthMm: number,
+  heightMm: number,
+  polygons: readonly Polygon[],
+  change: Partial<MeasureSettings> = {},
+): Promise<number | null> {
   const { artwork, tools } = drawingOf(widthMm, heightMm, polygons);
   return smallestSoundWidth(artwork, settingsFor(widthMm, heightMm, change), tools);
 }
@@ -78,13 +87,25 @@ describe('no such width', () => {
   test.each<[string, Polygon[]]>([
     ['nothing drawn', []],
     ['one square', [bar(3, 3, 5, 5, 10)]],
-    ['a tip that is thin at any width', [[[0.5, 3], [5.5, 2.7], [5.5, 3.3]]]],
+    [
+      'a tip that is thin at any width',
+      [
+        [
+          [0.5, 3],
+          [5.5, 2.7],
+          [5.5, 3.3],
+        ],
+      ],
+    ],
   ])('%s', async (_name, polygons) => {
     expect(await widthOf(6, 6, polygons)).toBeNull();
   });
 
   test('a photograph', async () => {
-    const data = Uint8Array.from({ length: 200 * 150 }, (_, i) => 128 + Math.round(90 * Math.sin(i / 31) * Math.cos(i / 4777)));
+    const data = Uint8Array.from(
+      { length: 200 * 150 },
+      (_, i) => 128 + Math.round(90 * Math.sin(i / 31) * Math.cos(i / 4777)),
+    );
     expect(await smallestSoundWidth(pictureOf(200, 150, data), settingsFor(20, 15), noTools)).toBeNull();
   });
 });

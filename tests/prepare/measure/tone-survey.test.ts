@@ -16,7 +16,10 @@ describe('drawn parts', () => {
     ['bare', () => 0],
     ['black bars', (x: number) => (x % 40 < 20 ? 255 : 0)],
     ['one grey', () => 120],
-    ['four greys with grain of an export', (x: number, y: number) => 60 + 40 * Math.floor(x / 64) + Math.round(2 * grain(x, y))],
+    [
+      'four greys with grain of an export',
+      (x: number, y: number) => 60 + 40 * Math.floor(x / 64) + Math.round(2 * grain(x, y)),
+    ],
   ])('%s: nothing is tonal', (_name, at) => {
     expect(surveyTones(field(256, 128, at)).tonalShare).toBe(0);
   });
@@ -41,14 +44,23 @@ describe('tonal parts', () => {
   });
 
   test('a photograph beside a drawing: each is told from the other', () => {
-    const survey = surveyTones(field(512, 256, (x, y) => (x < 256 ? 90 + Math.round(x / 4) + Math.round(9 * grain(x, y)) : y % 64 < 32 ? 255 : 0)));
+    const survey = surveyTones(
+      field(512, 256, (x, y) =>
+        x < 256 ? 90 + Math.round(x / 4) + Math.round(9 * grain(x, y)) : y % 64 < 32 ? 255 : 0,
+      ),
+    );
     expect(isTonalAt(survey, 0.25, 0.5)).toBe(true);
     expect(isTonalAt(survey, 0.75, 0.5)).toBe(false);
     expect(survey.tonalShare).toBeCloseTo(0.5, 1);
   });
 });
 
-test.each([[1, 1], [1, 9], [7, 1], [9, 9]])('%s × %s px are surveyed too', (width, height) => {
+test.each([
+  [1, 1],
+  [1, 9],
+  [7, 1],
+  [9, 9],
+])('%s × %s px are surveyed too', (width, height) => {
   const survey = surveyTones(field(width, height, () => 255));
   expect([survey.columns, survey.rows]).toEqual([Math.ceil(width / 8), Math.ceil(height / 8)]);
   expect(survey.histogram[255]).toBe(width * height);

@@ -48,7 +48,8 @@ export function suspectPlaces(
     }
   }
   for (const loop of closedLoops(contour, Math.ceil(10 * extents.largestPx + 12))) {
-    if (Math.abs(loop.areaPx2) < 2 * extents.spotAreaPx2 + 4) mark((loop.left + loop.right) / 2, (loop.top + loop.bottom) / 2);
+    if (Math.abs(loop.areaPx2) < 2 * extents.spotAreaPx2 + 4)
+      mark((loop.left + loop.right) / 2, (loop.top + loop.bottom) / 2);
   }
 }
 

@@ -32,7 +32,9 @@ export const wholeWindow = (artWidthPx: number, artHeightPx: number): CoverageWi
 });
 
 /** The part of a window that lies on the artwork, in artwork pixels; null where there is none. */
-export function onArtwork(window: CoverageWindow): { left: number; top: number; right: number; bottom: number } | null {
+export function onArtwork(
+  window: CoverageWindow,
+): { left: number; top: number; right: number; bottom: number } | null {
   const left = Math.max(0, window.left);
   const top = Math.max(0, window.top);
   const right = Math.min(window.artWidthPx, window.left + window.width);

@@ -1,7 +1,14 @@
 import type { Spot } from '../../machines/spot';
 import { suspectPlaces } from './coarse-pass';
 import type { CoverageSource } from './coverage-source';
-import { inspectWindow, marginPx, nothing, type FoundPlace, type Inspection, type SideFindings } from './inspect-window';
+import {
+  inspectWindow,
+  marginPx,
+  nothing,
+  type FoundPlace,
+  type Inspection,
+  type SideFindings,
+} from './inspect-window';
 import { lineExtents } from './line-extents';
 import { mergeSeams } from './merge-seams';
 import { emptyCells, markCells, partsToInspect, WINDOW_PX, type CellMap } from './windows';
@@ -44,7 +51,10 @@ export interface FoundPlaces extends Inspection {
 }
 
 /** Scale at which an artwork is measured: six pixels to a line extent, or what its own pixels resolve. */
-export function closeScale(source: CoverageSource, frame: Pick<SearchFrame, 'widthMm' | 'heightMm' | 'spot'>): number {
+export function closeScale(
+  source: CoverageSource,
+  frame: Pick<SearchFrame, 'widthMm' | 'heightMm' | 'spot'>,
+): number {
   const { widthMm, heightMm } = frame.spot;
   const largest = lineExtents(frame.spot, 1).largestPx;
   const wanted = Math.min(CLOSE_PX / Math.min(widthMm, heightMm), LARGEST_CLOSE_PX / largest);
@@ -54,8 +64,10 @@ export function closeScale(source: CoverageSource, frame: Pick<SearchFrame, 'wid
 }
 
 /** Pixels per mm of the artwork's own, by the finer of its sides. */
-const nativeScale = (native: { width: number; height: number }, frame: Pick<SearchFrame, 'widthMm' | 'heightMm'>): number =>
-  Math.max(native.width / frame.widthMm, native.height / frame.heightMm);
+const nativeScale = (
+  native: { width: number; height: number },
+  frame: Pick<SearchFrame, 'widthMm' | 'heightMm'>,
+): number => Math.max(native.width / frame.widthMm, native.height / frame.heightMm);
 
 function addShifted(to: SideFindings, from: SideFindings, dx: number, dy: number): void {
   for (const key of ['thin', 'small', 'tips', 'unresolved'] as const) {
@@ -97,7 +109,16 @@ export async function findPlaces(
   const extents = lineExtents(frame.spot, pxPerMm);
   const margin = marginPx(extents);
   const faintest = native ? FAINTEST.pixels : FAINTEST.drawn;
-  const found: FoundPlaces = { ink: nothing(), gaps: nothing(), burnedPx: 0, whole: true, ownPixels: own, pxPerMm, artWidthPx, artHeightPx };
+  const found: FoundPlaces = {
+    ink: nothing(),
+    gaps: nothing(),
+    burnedPx: 0,
+    whole: true,
+    ownPixels: own,
+    pxPerMm,
+    artWidthPx,
+    artHeightPx,
+  };
   const large = artWidthPx * artHeightPx > WHOLE_PX;
   const cells = (large ? await coarseMap(source, frame, pxPerMm, faintest) : null) ?? frame.drawn;
   found.whole = cells === null;
@@ -108,8 +129,13 @@ export async function findPlaces(
     const height = part.bottom - part.top + 2 * margin;
     const data = await source.read({ artWidthPx, artHeightPx, left, top, width, height });
     const inside = { left: margin, top: margin, right: width - margin, bottom: height - margin };
-    const leaveOut = (x: number, y: number): boolean => frame.leaveOut((x + left) / artWidthPx, (y + top) / artHeightPx);
-    const inspection = inspectWindow({ width, height, data }, frame.level, extents, { own: inside, leaveOut, faintest });
+    const leaveOut = (x: number, y: number): boolean =>
+      frame.leaveOut((x + left) / artWidthPx, (y + top) / artHeightPx);
+    const inspection = inspectWindow({ width, height, data }, frame.level, extents, {
+      own: inside,
+      leaveOut,
+      faintest,
+    });
     addShifted(found.ink, inspection.ink, left, top);
     addShifted(found.gaps, inspection.gaps, left, top);
     found.burnedPx += inspection.burnedPx;
@@ -144,7 +170,8 @@ async function coarseMap(
     const mark = (x: number, y: number): void => {
       const [ax, ay] = [x + left, y + top];
       if (ax < 0 || ay < 0 || ax >= artWidthPx || ay >= artHeightPx) return;
-      if (!frame.leaveOut(ax / artWidthPx, ay / artHeightPx)) markCells(cells, artWidthPx, artHeightPx, ax, ay, 3);
+      if (!frame.leaveOut(ax / artWidthPx, ay / artHeightPx))
+        markCells(cells, artWidthPx, artHeightPx, ax, ay, 3);
     };
     suspectPlaces({ width, height, data }, frame.level, extents, mark, faintest);
   }

@@ -121,7 +121,18 @@ const diameterOf = (area: number): number => 2 * Math.sqrt(area / Math.PI);
 
 function placeOfLoop(loop: ClosedLoop, smallestPx: number, limitPx: number): FoundPlace {
   const { left, top, right, bottom } = loop;
-  return { left, top, right, bottom, smallestPx, limitPx, worstRatio: smallestPx / limitPx, soundScale: 1, fading: false, ends: [] };
+  return {
+    left,
+    top,
+    right,
+    bottom,
+    smallestPx,
+    limitPx,
+    worstRatio: smallestPx / limitPx,
+    soundScale: 1,
+    fading: false,
+    ends: [],
+  };
 }
 
 function judgeSide(
@@ -145,7 +156,10 @@ function judgeSide(
     const mine = within(own, (loop.left + loop.right) / 2, (loop.top + loop.bottom) / 2);
     if (isSmall(loop, extents) || isBlunt(inside, points, loop, extents)) {
       inside.forEach((n) => (state[n] = SMALL));
-      if (mine) out.small.push(placeOfLoop(loop, diameterOf(Math.abs(loop.areaPx2)), diameterOf(extents.spotAreaPx2)));
+      if (mine)
+        out.small.push(
+          placeOfLoop(loop, diameterOf(Math.abs(loop.areaPx2)), diameterOf(extents.spotAreaPx2)),
+        );
     }
   }
   for (const run of found.runs) {
@@ -162,7 +176,11 @@ function pointsIn(points: AxisPoints, grid: Int32Array, columns: number, loop: O
   const list: number[] = [];
   const rows = grid.length / columns;
   for (let y = Math.max(0, Math.floor(loop.top)); y <= Math.min(rows - 1, Math.floor(loop.bottom)); y++) {
-    for (let x = Math.max(0, Math.floor(loop.left)); x <= Math.min(columns - 1, Math.floor(loop.right)); x++) {
+    for (
+      let x = Math.max(0, Math.floor(loop.left));
+      x <= Math.min(columns - 1, Math.floor(loop.right));
+      x++
+    ) {
       const n = grid[y * columns + x];
       if (n >= 0) list.push(n);
     }
@@ -180,11 +198,18 @@ function isPieceOfStroke(
   columns: number,
 ): boolean {
   const around = 2.5;
-  const wider = { left: loop.left - around, top: loop.top - around, right: loop.right + around, bottom: loop.bottom + around };
+  const wider = {
+    left: loop.left - around,
+    top: loop.top - around,
+    right: loop.right + around,
+    bottom: loop.bottom + around,
+  };
   const counting = (n: number): boolean => state[n] === COUNTS;
   const unseen = diameterOf(Math.abs(loop.areaPx2)) < FINE_LINE_PX;
   if (!unseen && !inside.some((n) => counting(n) && points.width[n] < FINE_LINE_PX)) return false;
-  return pointsIn(points, found.grid, columns, wider).filter(counting).length > inside.filter(counting).length;
+  return (
+    pointsIn(points, found.grid, columns, wider).filter(counting).length > inside.filter(counting).length
+  );
 }
 
 function countBurned(inside: Uint8Array, width: number, own: OwnPart): number {
@@ -196,7 +221,12 @@ function countBurned(inside: Uint8Array, width: number, own: OwnPart): number {
 }
 
 /** Whether an island about as small as the spot is too thin everywhere without being a stroke. */
-function isBlunt(inside: readonly number[], points: AxisPoints, loop: ClosedLoop, extents: LineExtents): boolean {
+function isBlunt(
+  inside: readonly number[],
+  points: AxisPoints,
+  loop: ClosedLoop,
+  extents: LineExtents,
+): boolean {
   if (inside.length === 0 || isDrawnOut(loop, extents)) return false;
   return inside.every((n) => points.width[n] < FLAGGED_SHARE * extents.smallestPx);
 }

@@ -21,7 +21,10 @@ export interface LineExtents {
  */
 export function lineExtents(spot: Spot, pxPerMm: number): LineExtents {
   if (!(pxPerMm > 0)) throw new RangeError(`expected pxPerMm above 0, got ${pxPerMm}`);
-  const byHalfDegree = Float32Array.from({ length: STEPS + 1 }, (_, n) => lineExtent(spot, n / 2 - 90) * pxPerMm);
+  const byHalfDegree = Float32Array.from(
+    { length: STEPS + 1 },
+    (_, n) => lineExtent(spot, n / 2 - 90) * pxPerMm,
+  );
   return {
     byHalfDegree,
     smallestPx: Math.min(spot.widthMm, spot.heightMm) * pxPerMm,

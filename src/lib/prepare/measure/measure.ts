@@ -46,8 +46,12 @@ export async function overview(source: CoverageSource, widthMm: number, heightMm
   const aspect = native ? native.width / native.height : widthMm / heightMm;
   const full = native ? native.width * native.height : most;
   const share = Math.min(1, Math.sqrt(most / full));
-  const width = native ? Math.max(1, Math.round(native.width * share)) : Math.max(1, Math.round(Math.sqrt(most * aspect)));
-  const height = native ? Math.max(1, Math.round(native.height * share)) : Math.max(1, Math.round(width / aspect));
+  const width = native
+    ? Math.max(1, Math.round(native.width * share))
+    : Math.max(1, Math.round(Math.sqrt(most * aspect)));
+  const height = native
+    ? Math.max(1, Math.round(native.height * share))
+    : Math.max(1, Math.round(width / aspect));
   return { width, height, data: await source.read(wholeWindow(width, height)) };
 }
 
@@ -68,7 +72,13 @@ function placer(found: FoundPlaces, settings: MeasureSettings): (place: FoundPla
   };
 }
 
-const withoutLimit = ({ xMm, yMm, widthMm, heightMm, minMm }: WidthPlace): Place => ({ xMm, yMm, widthMm, heightMm, minMm });
+const withoutLimit = ({ xMm, yMm, widthMm, heightMm, minMm }: WidthPlace): Place => ({
+  xMm,
+  yMm,
+  widthMm,
+  heightMm,
+  minMm,
+});
 const bySize = (a: FoundPlace, b: FoundPlace): number => a.smallestPx - b.smallestPx;
 
 function widthFacts(places: readonly FoundPlace[], place: (found: FoundPlace) => WidthPlace): WidthFacts {
@@ -80,7 +90,11 @@ function widthFacts(places: readonly FoundPlace[], place: (found: FoundPlace) =>
   };
 }
 
-function areaFacts(places: readonly FoundPlace[], spot: Spot, place: (found: FoundPlace) => WidthPlace): AreaFacts {
+function areaFacts(
+  places: readonly FoundPlace[],
+  spot: Spot,
+  place: (found: FoundPlace) => WidthPlace,
+): AreaFacts {
   return {
     count: places.length,
     places: [...places].sort(bySize).slice(0, MAX_PLACES).map(place).map(withoutLimit),
@@ -104,7 +118,8 @@ export async function measure(
   tools: Pick<PipelineTools, 'renderSvg'>,
 ): Promise<Facts> {
   const { widthMm, heightMm, quarterTurns } = settings;
-  if (!(widthMm > 0) || !(heightMm > 0)) throw new RangeError(`expected sides above 0 mm, got ${widthMm} x ${heightMm}`);
+  if (!(widthMm > 0) || !(heightMm > 0))
+    throw new RangeError(`expected sides above 0 mm, got ${widthMm} x ${heightMm}`);
   const source = coverageOfArtwork(artwork, tools);
   const [ownWidthMm, ownHeightMm] = quarterTurns % 2 === 0 ? [widthMm, heightMm] : [heightMm, widthMm];
   const spot = ownSpot(settings.spot, quarterTurns);
@@ -130,7 +145,10 @@ export async function measure(
     fillIns: widthFacts(tooThin(found.gaps, found.ownPixels), place),
     specks: areaFacts(found.ink.small, spot, place),
     pinholes: areaFacts(found.gaps.small, spot, place),
-    sharpTips: { count: found.ink.tips.length, places: found.ink.tips.slice(0, MAX_PLACES).map(place).map(withoutLimit) },
+    sharpTips: {
+      count: found.ink.tips.length,
+      places: found.ink.tips.slice(0, MAX_PLACES).map(place).map(withoutLimit),
+    },
     source: {
       pxPerMm: source.nativePx && source.nativePx.width / ownWidthMm,
       unresolved: {

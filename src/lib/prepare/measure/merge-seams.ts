@@ -47,7 +47,8 @@ function joinInto(whole: FoundPlace, place: FoundPlace): void {
   whole.top = Math.min(whole.top, place.top);
   whole.right = Math.max(whole.right, place.right);
   whole.bottom = Math.max(whole.bottom, place.bottom);
-  if (place.smallestPx < whole.smallestPx) [whole.smallestPx, whole.limitPx] = [place.smallestPx, place.limitPx];
+  if (place.smallestPx < whole.smallestPx)
+    [whole.smallestPx, whole.limitPx] = [place.smallestPx, place.limitPx];
   whole.worstRatio = Math.min(whole.worstRatio, place.worstRatio);
   whole.fading &&= place.fading;
   whole.soundScale = Math.max(whole.soundScale, place.soundScale);

@@ -7,7 +7,9 @@ let coverageOfLuminance: Uint8Array | null = null;
 function coverageTable(): Uint8Array {
   if (!coverageOfLuminance) {
     const codes = codeValues();
-    coverageOfLuminance = Uint8Array.from({ length: FULL_LUMINANCE + 1 }, (_, y) => Math.round(255 * (1 - codes[y])));
+    coverageOfLuminance = Uint8Array.from({ length: FULL_LUMINANCE + 1 }, (_, y) =>
+      Math.round(255 * (1 - codes[y])),
+    );
   }
   return coverageOfLuminance;
 }
@@ -48,7 +50,8 @@ export function rasterCoverage(artwork: RasterArtwork): CoverageSource {
     if (window.artWidthPx === widthPx && window.artHeightPx === heightPx) {
       for (let y = part.top; y < part.bottom; y++) {
         let to = (y - window.top) * window.width + part.left - window.left;
-        for (let i = y * widthPx + part.left; i < y * widthPx + part.right; i++) out[to++] = table[luminance[i]];
+        for (let i = y * widthPx + part.left; i < y * widthPx + part.right; i++)
+          out[to++] = table[luminance[i]];
       }
       return out;
     }

@@ -43,7 +43,10 @@ function verdictOf(found: FoundPlaces, burnedShare: number): Verdict {
   const burnedPx = burnedShare * found.artWidthPx * found.artHeightPx;
   let growth = 1;
   for (const { soundScale, smallestPx } of thin) {
-    growth = Math.max(growth, smallestPx < ROUGH_PX ? Math.min(ROUGH_SHARE * soundScale, ROUGH_GROWTH) : soundScale);
+    growth = Math.max(
+      growth,
+      smallestPx < ROUGH_PX ? Math.min(ROUGH_SHARE * soundScale, ROUGH_GROWTH) : soundScale,
+    );
   }
   return {
     sound: thin.length === 0,
@@ -70,7 +73,9 @@ export async function smallestSoundWidth(
   tools: Pick<PipelineTools, 'renderSvg'>,
 ): Promise<number | null> {
   const odd = settings.quarterTurns % 2 === 1;
-  const [widthMm, heightMm] = odd ? [settings.heightMm, settings.widthMm] : [settings.widthMm, settings.heightMm];
+  const [widthMm, heightMm] = odd
+    ? [settings.heightMm, settings.widthMm]
+    : [settings.widthMm, settings.heightMm];
   const source = coverageOfArtwork(artwork, tools);
   const spot = ownSpot(settings.spot, settings.quarterTurns);
   const field = await overview(source, widthMm, heightMm);
@@ -98,7 +103,11 @@ async function closeIn(
   burnedShare: number,
 ): Promise<number | null> {
   const longest = Math.max(frame.widthMm, frame.heightMm);
-  const at = (scale: number): SearchFrame => ({ ...frame, widthMm: scale * frame.widthMm, heightMm: scale * frame.heightMm });
+  const at = (scale: number): SearchFrame => ({
+    ...frame,
+    widthMm: scale * frame.widthMm,
+    heightMm: scale * frame.heightMm,
+  });
   const look = async (scale: number, untilFirst = false): Promise<Verdict> =>
     verdictOf(await findPlaces(source, at(scale), untilFirst), burnedShare);
   const tooLarge = (scale: number): boolean => {

@@ -63,7 +63,12 @@ export function thinRuns(
   share = FLAGGED_SHARE,
 ): ThinRuns {
   const grid = axisGrid(points, columns * rows);
-  const smoothed = smoothAxis(points, grid, columns, Math.min(8, Math.max(2, Math.round(extents.smallestPx))));
+  const smoothed = smoothAxis(
+    points,
+    grid,
+    columns,
+    Math.min(8, Math.max(2, Math.round(extents.smallestPx))),
+  );
   const thin = new Uint8Array(points.count);
   for (let n = 0; n < points.count; n++) {
     if (smoothed.width[n] < share * extentAlong(extents, smoothed.along[n])) thin[n] = 1;
@@ -190,7 +195,12 @@ function scaleToSound(
   const thin = new Stretch();
   let scale = 1;
   for (const n of byRatio) {
-    thin.add(smoothed.length[n], smoothed.width[n], smoothed.slope[n], extentAlong(extents, smoothed.along[n]));
+    thin.add(
+      smoothed.length[n],
+      smoothed.width[n],
+      smoothed.slope[n],
+      extentAlong(extents, smoothed.along[n]),
+    );
     // At this scale everything up to this member is just thin.
     const at = share / (ratio.get(n) ?? share);
     if (thin.counts(at, smallest, share)) scale = Math.max(scale, at);

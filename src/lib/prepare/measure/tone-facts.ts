@@ -50,7 +50,9 @@ function thinShareOf(field: Field, level: number, extentPx: number): number {
   }
   if (burned === 0) return 0;
   // Each deep pixel stands for a core around which a rim as wide as the reach belongs to the same thick shape.
-  return deep === 0 ? 1 : Math.max(0, 1 - (deep + rimOf(squared, division.inside, field.width, reach)) / burned);
+  return deep === 0
+    ? 1
+    : Math.max(0, 1 - (deep + rimOf(squared, division.inside, field.width, reach)) / burned);
 }
 
 /** Number of burned pixels within the reach of a deep one, found along rows and columns alone. */
@@ -61,7 +63,8 @@ function rimOf(squared: Uint8Array, inside: Uint8Array, width: number, reach: nu
     if (!inside[i] || squared[i] > reach * reach) continue;
     for (let d = 1; d <= far; d++) {
       if (isDeep(squared, inside, i - d, reach) || isDeep(squared, inside, i + d, reach)) rim++;
-      else if (isDeep(squared, inside, i - d * width, reach) || isDeep(squared, inside, i + d * width, reach)) rim++;
+      else if (isDeep(squared, inside, i - d * width, reach) || isDeep(squared, inside, i + d * width, reach))
+        rim++;
       else continue;
       break;
     }

@@ -28,7 +28,11 @@ export interface ToneSurvey {
   histogram: Uint32Array;
 }
 
-function kindOfBlock({ data, width, height }: Field, left: number, top: number): [kind: number, mean: number] {
+function kindOfBlock(
+  { data, width, height }: Field,
+  left: number,
+  top: number,
+): [kind: number, mean: number] {
   const right = Math.min(width, left + SIDE_PX);
   const bottom = Math.min(height, top + SIDE_PX);
   let [low, high, middle, sum] = [255, 0, 0, 0];
@@ -124,7 +128,14 @@ export function surveyTones(field: Field): ToneSurvey {
     if (tonal[n]) tones++;
     else if (kinds[n] === TINT && means[n] >= LIGHTEST_TINT && means[n] <= DARKEST_TINT) tints++;
   }
-  return { columns, rows, tonal, tonalShare: tones / kinds.length, tintShare: tints / kinds.length, histogram };
+  return {
+    columns,
+    rows,
+    tonal,
+    tonalShare: tones / kinds.length,
+    tintShare: tints / kinds.length,
+    histogram,
+  };
 }
 
 /** The blocks that are not tonal, as a map of what there is to look at; null where nothing is tonal. */

@@ -10,7 +10,9 @@ const COVERAGE = Float32Array.from({ length: 4096 }, (_, y) => 255 * (1 - linear
 function coverageOfPixel(r: number, g: number, b: number, alpha: number): number {
   if (r === g && g === b) return (alpha * (255 - r)) / 255;
   const y =
-    LUMINANCE_WEIGHTS.red * LINEAR[r] + LUMINANCE_WEIGHTS.green * LINEAR[g] + LUMINANCE_WEIGHTS.blue * LINEAR[b];
+    LUMINANCE_WEIGHTS.red * LINEAR[r] +
+    LUMINANCE_WEIGHTS.green * LINEAR[g] +
+    LUMINANCE_WEIGHTS.blue * LINEAR[b];
   return (alpha * COVERAGE[Math.round(y * 4095)]) / 255;
 }
 
@@ -23,7 +25,10 @@ const STRIP_PX = 4_000_000;
  * @param tools draws the SVG
  * @returns a source that resolves any scale
  */
-export function vectorCoverage(artwork: VectorArtwork, tools: Pick<PipelineTools, 'renderSvg'>): CoverageSource {
+export function vectorCoverage(
+  artwork: VectorArtwork,
+  tools: Pick<PipelineTools, 'renderSvg'>,
+): CoverageSource {
   const read = async (window: CoverageWindow): Promise<Uint8Array> => {
     const out = new Uint8Array(window.width * window.height);
     const part = onArtwork(window);
@@ -42,14 +47,28 @@ export function vectorCoverage(artwork: VectorArtwork, tools: Pick<PipelineTools
           height: rows / window.artHeightPx,
         },
       });
-      layStrip(pixels, columns, rows, out, (top - window.top) * window.width + part.left - window.left, window.width);
+      layStrip(
+        pixels,
+        columns,
+        rows,
+        out,
+        (top - window.top) * window.width + part.left - window.left,
+        window.width,
+      );
     }
     return out;
   };
   return { nativePx: null, read };
 }
 
-function layStrip(pixels: Uint8Array, columns: number, rows: number, out: Uint8Array, at: number, stride: number): void {
+function layStrip(
+  pixels: Uint8Array,
+  columns: number,
+  rows: number,
+  out: Uint8Array,
+  at: number,
+  stride: number,
+): void {
   let i = 0;
   for (let y = 0; y < rows; y++) {
     for (let to = at + y * stride; to < at + y * stride + columns; to++, i += 4) {

@@ -31,7 +31,11 @@ export function partsToInspect(widthPx: number, heightPx: number, cells: CellMap
       const bottom = Math.min(heightPx, top + WINDOW_PX);
       const part: OwnPart = { left: right, top: bottom, right: left, bottom: top };
       for (let row = Math.floor(top / cellHeight); row < Math.min(map.rows, bottom / cellHeight); row++) {
-        for (let column = Math.floor(left / cellWidth); column < Math.min(map.columns, right / cellWidth); column++) {
+        for (
+          let column = Math.floor(left / cellWidth);
+          column < Math.min(map.columns, right / cellWidth);
+          column++
+        ) {
           if (!map.marked[row * map.columns + column]) continue;
           part.left = Math.min(part.left, Math.max(left, Math.floor(column * cellWidth)));
           part.right = Math.max(part.right, Math.min(right, Math.ceil((column + 1) * cellWidth)));
@@ -63,7 +67,8 @@ export function markCells(
 ): void {
   const column = (at: number): number =>
     Math.min(cells.columns - 1, Math.max(0, Math.floor((at * cells.columns) / widthPx)));
-  const row = (at: number): number => Math.min(cells.rows - 1, Math.max(0, Math.floor((at * cells.rows) / heightPx)));
+  const row = (at: number): number =>
+    Math.min(cells.rows - 1, Math.max(0, Math.floor((at * cells.rows) / heightPx)));
   for (let r = row(y - around); r <= row(y + around); r++) {
     for (let c = column(x - around); c <= column(x + around); c++) cells.marked[r * cells.columns + c] = 1;
   }

@@ -71,7 +71,10 @@ export function authConfig(secret: string): FullAuthConfig {
     },
     logger: {
       error(error) {
-        log[VISITORS_OWN.some((kind) => error instanceof kind) ? 'debug' : 'error']({ err: error }, 'sign-in');
+        log[VISITORS_OWN.some((kind) => error instanceof kind) ? 'debug' : 'error'](
+          { err: error },
+          'sign-in',
+        );
       },
       warn: (code) => log.debug({ code }, 'sign-in'),
       debug: () => undefined,
