@@ -27,7 +27,7 @@ function bakeryMark(): string {
       ear(8.2, 21.6, -9),
       ear(39.8, 21.6, 9),
       '<path d="M9.6 27C18 28.8 30 28.8 38.4 27" fill="none" stroke="#000" stroke-width="0.8" stroke-linecap="round"/>',
-      `<path d="${outlined('Farrow', { xMm: 49, yMm: 17.6, sizeMm: 14.4, weight: 700 })}"/>`,
+      `<path d="${outlined('Farrow', { xMm: 49, yMm: 17.2, sizeMm: 13.2, weight: 700 })}"/>`,
       `<path d="${outlined('BAKERY', { xMm: 49.9, yMm: 26, sizeMm: 5.2, weight: 700, spacing: 0.3 })}"/>`,
     ]),
   );

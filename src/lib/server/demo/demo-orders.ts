@@ -28,7 +28,7 @@ export const DEMO_ORDERS: readonly DemoOrder[] = [
     widthMm: 96,
     stock: 'Cherry board 6 mm',
     machine: 'North bench',
-    treatment: 'linework',
+    treatment: 'solid',
     recipe: [62, 45],
     dueInDays: 9,
     state: 'proof-sent',
