@@ -36,6 +36,7 @@ export function inherit(parent: Style, own: Style): Style {
   return style;
 }
 
+/** Opacity 0–1 of a property's text: a number or a percentage, held within the range; 1 where it cannot be read. */
 export function opacityOf(text: string | undefined): number {
   const value = Number.parseFloat(text ?? '1');
   if (!Number.isFinite(value)) return 1;
@@ -45,6 +46,7 @@ export function opacityOf(text: string | undefined): number {
 /** A paint: none, a colour, or the id of a gradient or pattern. */
 export type Paint = { kind: 'none' } | { kind: 'colour'; colour: Colour } | { kind: 'server'; id: string };
 
+/** The paint that a fill or stroke asks for; `style` gives the current colour. Black where it cannot be read. */
 export function readPaint(text: string | undefined, style: Style): Paint {
   const value = (text ?? 'none').trim();
   if (value === 'none') return { kind: 'none' };
@@ -58,6 +60,7 @@ export function readPaint(text: string | undefined, style: Style): Paint {
 const CAPS = { butt: 'butt', round: 'round', square: 'square' } as const;
 const JOINS = { miter: 'miter', round: 'round', bevel: 'bevel' } as const;
 
+/** Width in user units, cap, join and mitre limit of a stroke; the defaults of SVG 2, section 13.5, where unsaid. */
 export function readPen(style: Style, viewport: Viewport): Pen {
   return {
     width: Math.max(0, readLength(style['stroke-width'], viewport, 'both') ?? 1),

@@ -30,17 +30,20 @@ export function regionOf(outlines: Region, rule: 'nonzero' | 'evenodd'): Region 
   return fromPaths(Clipper.unionD(toPaths(outlines), [], fillRule, PRECISION));
 }
 
+/** Area of either region. */
 export function unite(a: Region, b: Region): Region {
   if (a.length === 0) return b;
   if (b.length === 0) return a;
   return fromPaths(Clipper.unionD(toPaths(a), toPaths(b), FillRule.NonZero, PRECISION));
 }
 
+/** Area of `a` outside `b`. */
 export function subtract(a: Region, b: Region): Region {
   if (a.length === 0 || b.length === 0) return a;
   return fromPaths(Clipper.differenceD(toPaths(a), toPaths(b), FillRule.NonZero, PRECISION));
 }
 
+/** Area of both regions; empty where one of them is. */
 export function intersect(a: Region, b: Region): Region {
   if (a.length === 0 || b.length === 0) return EMPTY;
   return fromPaths(Clipper.intersectD(toPaths(a), toPaths(b), FillRule.NonZero, PRECISION));
